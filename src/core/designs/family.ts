@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import { type Citation, ParamError } from '../errors.ts';
 import type { Enclosure, Graded } from '../evidence.ts';
 import type { BlockDesign, DesignSpec } from './block-design.ts';

@@ -1,0 +1,76 @@
+import { z } from 'zod';
+import { codeSchema, jobSchema, matrixFormatSchema, newCodeSchema } from './codes.ts';
+import { endpoint } from './endpoint.ts';
+import { newProjectSchema, projectSchema, requirementsSchema } from './projects.ts';
+import { newRunSchema, pointSchema, runPatchSchema, runSchema, shardBatchSchema, shardReceiptSchema } from './runs.ts';
+
+const page = { after: z.string().optional(), limit: z.coerce.number().int().min(1).max(500).optional() };
+const storedRequirements = z.object({ requirements: requirementsSchema.nullable(), updatedAt: z.string().nullable() });
+
+/** The whole HTTP interface under /api/v1. */
+export const endpoints = {
+  listProjects: endpoint('GET', '/projects', 'Projects the caller belongs to', {
+    query: z.object(page),
+    response: z.object({ projects: z.array(projectSchema), next: z.string().optional() }),
+  }),
+  createProject: endpoint('POST', '/projects', 'Start a project; the caller owns it', {
+    body: newProjectSchema,
+    response: z.object({ project: projectSchema }),
+    success: [201],
+  }),
+  getProject: endpoint('GET', '/projects/:id', 'One project', { response: z.object({ project: projectSchema }) }),
+  getRequirements: endpoint('GET', '/projects/:id/requirements', 'What the project needs', {
+    response: storedRequirements,
+  }),
+  putRequirements: endpoint('PUT', '/projects/:id/requirements', 'State what the project needs', {
+    body: requirementsSchema,
+    response: storedRequirements,
+  }),
+  listCodes: endpoint('GET', '/projects/:id/codes', 'Codes kept in the project', {
+    query: z.object(page),
+    response: z.object({ codes: z.array(codeSchema), next: z.string().optional() }),
+  }),
+  createCode: endpoint('POST', '/projects/:id/codes', 'Build a design, derive its code and keep it', {
+    body: newCodeSchema,
+    response: z.union([z.object({ code: codeSchema }), z.object({ job: jobSchema })]),
+    success: [201, 202],
+  }),
+  getJob: endpoint('GET', '/jobs/:id', 'How a long piece of work stands', { response: z.object({ job: jobSchema }) }),
+  getCode: endpoint('GET', '/codes/:id', 'One code with its properties', { response: z.object({ code: codeSchema }) }),
+  deleteCode: endpoint('DELETE', '/codes/:id', 'Remove a code that no run uses', { success: [204] }),
+  getMatrix: endpoint('GET', '/codes/:id/matrix', 'The parity-check matrix as a file', {
+    query: z.object({ format: matrixFormatSchema }),
+  }),
+  getManifest: endpoint(
+    'GET',
+    '/codes/:id/manifest',
+    'Parameters, construction, fingerprint and digests of the files',
+    {
+      response: z.looseObject({ fingerprint: z.string() }),
+    },
+  ),
+  listRuns: endpoint('GET', '/projects/:id/runs', 'Runs of the project, newest first', {
+    query: z.object(page),
+    response: z.object({ runs: z.array(runSchema), next: z.string().optional() }),
+  }),
+  createRun: endpoint('POST', '/projects/:id/runs', 'State a run', {
+    body: newRunSchema,
+    response: z.object({ run: runSchema.extend({ points: z.array(pointSchema) }) }),
+    success: [201],
+  }),
+  getRun: endpoint('GET', '/runs/:id', 'A run with the tallies of its points', {
+    response: z.object({ run: runSchema, points: z.array(pointSchema) }),
+  }),
+  patchRun: endpoint('PATCH', '/runs/:id', 'Pause, resume, stop or rename a run', {
+    body: runPatchSchema,
+    response: z.object({ run: runSchema }),
+  }),
+  postShards: endpoint('POST', '/runs/:id/shards', 'Hand in computed shards; answered once they are committed', {
+    body: shardBatchSchema,
+    response: shardReceiptSchema,
+  }),
+  projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, for charts', {
+    query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),
+    response: z.object({ points: z.array(pointSchema) }),
+  }),
+} as const;
