@@ -1,0 +1,67 @@
+import type { Estimate } from './curve.ts';
+
+const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
+const MINUS = '⁻';
+
+export type Rounding = 'nearest' | 'up' | 'down';
+
+/** An integer as a superscript with a real minus: −4 becomes "⁻⁴". */
+export const superscript = (exponent: number): string =>
+  [...String(exponent)].map((c) => (c === '-' ? MINUS : SUPERSCRIPTS[Number(c)])).join('');
+
+/** A positive number as mantissa and power of ten, the mantissa in [1, 10) after rounding to so many digits. */
+export function decimalParts(
+  x: number,
+  digits: number,
+  rounding: Rounding = 'nearest',
+): [mantissa: string, exponent: number] {
+  const [mantissa, exponent] = x.toExponential(digits - 1).split('e') as [string, string];
+  const rounded = Number(`${mantissa}e${exponent}`);
+  const wanted = rounding === 'up' ? rounded >= x : rounding === 'down' ? rounded <= x : true;
+  if (wanted) return [mantissa, Number(exponent)];
+  const step = 10 ** (1 - digits) * (rounding === 'up' ? 1 : -1);
+  return carry(Number(mantissa) + step, Number(exponent), digits);
+}
+
+function carry(mantissa: number, exponent: number, digits: number): [string, number] {
+  if (mantissa >= 10) return [(mantissa / 10).toFixed(digits - 1), exponent + 1];
+  if (mantissa < 1) return [(10 - 10 ** (1 - digits)).toFixed(digits - 1), exponent - 1];
+  return [mantissa.toFixed(digits - 1), exponent];
+}
+
+/** "7.4 × 10⁻⁴"; exact powers of ten asked for with one digit read "10⁻⁴". The number must be positive. */
+export function scientific(x: number, digits = 2, rounding: Rounding = 'nearest'): string {
+  const [mantissa, exponent] = decimalParts(x, digits, rounding);
+  if (mantissa === '1') return `10${superscript(exponent)}`;
+  return `${mantissa} × 10${superscript(exponent)}`;
+}
+
+/** A measured rate as read: "7.4 × 10⁻⁴", or "< 3.0 × 10⁻⁶" with the upper limit when no error was seen. A limit is
+ *  rounded away from the claim. */
+export const rateText = (rate: Estimate, digits = 2): string =>
+  rate.value === null ? `< ${scientific(rate.upper, digits, 'up')}` : scientific(rate.value, digits);
+
+/** "(6.1 – 8.9) × 10⁻⁴"; an interval that starts at 0 is a bound: "< 3.0 × 10⁻⁶". Its ends are rounded outward. */
+export function intervalText(rate: Estimate, digits = 2): string {
+  if (rate.value === null || rate.lower <= 0) return `< ${scientific(rate.upper, digits, 'up')}`;
+  const [low, lowExponent] = decimalParts(rate.lower, digits, 'down');
+  const [high, highExponent] = decimalParts(rate.upper, digits, 'up');
+  if (lowExponent === highExponent) return `(${low} – ${high}) × 10${superscript(lowExponent)}`;
+  return `${scientific(rate.lower, digits, 'down')} – ${scientific(rate.upper, digits, 'up')}`;
+}
+
+/** A channel parameter as typed: "0.012", and "3 × 10⁻⁵" when decimals would only be zeros. */
+export function parameterText(p: number): string {
+  if (p >= 0.001) return String(Number(p.toPrecision(6)));
+  const digits = Number(p.toPrecision(6)).toExponential().split('e')[0]?.replace('.', '').length ?? 1;
+  return scientific(p, digits);
+}
+
+/** Whole numbers in groups of three with thin spaces: "1 284 000". */
+export const countText = (count: number): string =>
+  Math.round(count)
+    .toString()
+    .replaceAll(/\B(?=(\d{3})+$)/g, '\u2009');
+
+/** "99 %". */
+export const levelText = (level: number): string => `${Number((level * 100).toPrecision(6))} %`;
