@@ -1,0 +1,42 @@
+import { useId } from 'react';
+import { classes } from './classes.ts';
+
+interface Props<V extends string> {
+  legend: string;
+  value: V;
+  choices: readonly { value: V; label: string; note?: string }[];
+  onChange: (value: V) => void;
+  disabled?: boolean;
+  className?: string;
+}
+
+/** A few exclusive choices side by side: radio buttons that look like cells of one ruled strip. */
+export function ChoiceGroup<V extends string>({ legend, value, choices, onChange, disabled, className }: Props<V>) {
+  const name = useId();
+  return (
+    <fieldset className={classes('min-w-0', className)} disabled={disabled}>
+      <legend className="mb-1 text-quiet text-tiny">{legend}</legend>
+      <div className="flex flex-wrap border-rule border-t border-l">
+        {choices.map((choice) => (
+          <label
+            key={choice.value}
+            className="flex grow cursor-pointer items-start gap-2 border-rule border-r border-b bg-sheet px-3 py-2 has-checked:bg-tint has-focus-visible:outline-2 has-focus-visible:outline-act has-disabled:cursor-not-allowed"
+          >
+            <input
+              type="radio"
+              className="mt-1 accent-act outline-none"
+              name={name}
+              value={choice.value}
+              checked={choice.value === value}
+              onChange={() => onChange(choice.value)}
+            />
+            <span>
+              <span className="font-semibold">{choice.label}</span>
+              {choice.note && <span className="block text-quiet text-tiny">{choice.note}</span>}
+            </span>
+          </label>
+        ))}
+      </div>
+    </fieldset>
+  );
+}
