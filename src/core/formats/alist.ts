@@ -1,0 +1,116 @@
+import { type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
+import { refuseBeyondLimits } from './matrix-limits.ts';
+import { TextScanner } from './text-scanner.ts';
+import { TextWriter } from './text-writer.ts';
+
+/** The alist layout of D. J. C. MacKay's collection of sparse codes: `N M` (columns, then rows); largest column and row
+ *  weight; the N column weights; the M row weights; N lists of rows, one a column; M lists of columns, one a row; all
+ *  counted from 1, short lists padded with 0. */
+export function writeAlist(H: SparseMatrix): Uint8Array {
+  const columns = transpose(H);
+  const out = new TextWriter();
+  out.number(H.cols).text(' ').number(H.rows).text('\n');
+  out.number(largestWeight(columns)).text(' ').number(largestWeight(H)).text('\n');
+  writeWeights(out, columns);
+  writeWeights(out, H);
+  writeLists(out, columns, largestWeight(columns));
+  writeLists(out, H, largestWeight(H));
+  return out.finish();
+}
+
+/** Reads padded and unpadded files, and files whose first line names rows before columns when the weights tell.
+ *  @throws FormatError with line and column; @throws LimitError on a size that passes matrixLimits. */
+export function readAlist(bytes: Uint8Array): SparseMatrix {
+  const scan = new TextScanner(bytes);
+  const cols = scan.number('the number of columns N');
+  const rows = scan.number('the number of rows M', false);
+  refuseBeyondLimits(rows, cols, 0);
+  if (rows === 0 || cols === 0) throw scan.error('at least one row and one column', '0');
+  const maxColumnWeight = scan.number('the largest column weight');
+  const maxRowWeight = scan.number('the largest row weight', false);
+  const columnWeights = readWeights(scan, cols, maxColumnWeight, rows, 'column');
+  const rowWeights = readWeights(scan, rows, maxRowWeight, cols, 'row');
+  const ones = sum(columnWeights);
+  if (ones !== sum(rowWeights))
+    throw scan.error(`row weights that sum to ${ones}, as the column weights do`, String(sum(rowWeights)));
+  refuseBeyondLimits(rows, cols, ones);
+  const columns = readLists(scan, columnWeights, maxColumnWeight, rows, 'column');
+  const matrix = readLists(scan, rowWeights, maxRowWeight, cols, 'row');
+  if (!scan.atEnd()) throw scan.error('the end of the file', scan.tokenAt());
+  refuseDifference(scan, transpose(columns), matrix);
+  return matrix;
+}
+
+function largestWeight(M: SparseMatrix): number {
+  let most = 0;
+  for (let i = 0; i < M.rows; i++) most = Math.max(most, M.rowStart[i + 1]! - M.rowStart[i]!);
+  return most;
+}
+
+function writeWeights(out: TextWriter, M: SparseMatrix): void {
+  for (let i = 0; i < M.rows; i++) {
+    if (i > 0) out.text(' ');
+    out.number(M.rowStart[i + 1]! - M.rowStart[i]!);
+  }
+  out.text('\n');
+}
+
+function writeLists(out: TextWriter, M: SparseMatrix, width: number): void {
+  for (let i = 0; i < M.rows; i++) {
+    const from = M.rowStart[i]!;
+    const weight = M.rowStart[i + 1]! - from;
+    for (let j = 0; j < width; j++) {
+      if (j > 0) out.text(' ');
+      out.number(j < weight ? M.colIndex[from + j]! + 1 : 0);
+    }
+    out.text('\n');
+  }
+}
+
+function readWeights(scan: TextScanner, count: number, most: number, limit: number, what: string): Uint32Array {
+  const weights = new Uint32Array(count);
+  for (let i = 0; i < count; i++) {
+    const weight = scan.number(`the weight of ${what} ${i + 1}`);
+    if (weight > most || weight > limit)
+      throw scan.error(`a weight of at most ${Math.min(most, limit)} for ${what} ${i + 1}`, String(weight));
+    weights[i] = weight;
+  }
+  return weights;
+}
+
+/** One list a line. A line holds exactly the weight's entries, or as many more zeros as pad it to the largest weight. */
+function readLists(scan: TextScanner, weights: Uint32Array, width: number, limit: number, what: string): SparseMatrix {
+  const rowStart = new Uint32Array(weights.length + 1);
+  for (let i = 0; i < weights.length; i++) rowStart[i + 1] = rowStart[i]! + weights[i]!;
+  const colIndex = new Uint32Array(rowStart[weights.length]!);
+  for (let i = 0; i < weights.length; i++) {
+    if (weights[i]! > 0) scan.atEnd();
+    else scan.nextLineIfAtEnd();
+    const entries = colIndex.subarray(rowStart[i], rowStart[i + 1]);
+    for (let j = 0; j < entries.length; j++) {
+      const entry = scan.number(`entry ${j + 1} of ${entries.length} of ${what} ${i + 1}, from 1 to ${limit}`, false);
+      if (entry < 1 || entry > limit)
+        throw scan.error(`an index from 1 to ${limit} in ${what} ${i + 1}; indices count from 1`, String(entry));
+      entries[j] = entry - 1;
+    }
+    for (let pad = entries.length; !scan.atLineEnd(); pad++) {
+      const entry = scan.number('padding with 0', false);
+      if (entry !== 0 || pad >= width)
+        throw scan.error(`${entries.length} entries in ${what} ${i + 1}, then zeros up to ${width}`, String(entry));
+    }
+    entries.sort();
+    for (let j = 1; j < entries.length; j++)
+      if (entries[j] === entries[j - 1])
+        throw scan.error(`distinct indices in ${what} ${i + 1}`, `${entries[j]! + 1} twice`);
+  }
+  return { rows: weights.length, cols: limit, rowStart, colIndex };
+}
+
+function refuseDifference(scan: TextScanner, byColumns: SparseMatrix, byRows: SparseMatrix): void {
+  for (let e = 0; e < byRows.colIndex.length; e++) {
+    if (byColumns.colIndex[e] !== byRows.colIndex[e])
+      throw scan.error('row lists that say the same ones as the column lists', 'lists that disagree');
+  }
+}
+
+const sum = (weights: Uint32Array) => weights.reduce((total, w) => total + w, 0);

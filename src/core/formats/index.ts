@@ -1,0 +1,40 @@
+import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import { ParamError } from '../errors.ts';
+import { readAlist, writeAlist } from './alist.ts';
+import { readMatrixMarket, writeMatrixMarket } from './matrix-market.ts';
+
+/** One file format of a parity-check matrix, both ways. */
+export interface MatrixFormatCodec {
+  id: string;
+  title: string;
+  extension: string;
+  mediaType: string;
+  write(H: SparseMatrix): Uint8Array;
+  read(bytes: Uint8Array): SparseMatrix;
+}
+
+/** Every format, in the order shown. A format is added by one file here and one entry below. */
+export const matrixFormats: readonly MatrixFormatCodec[] = [
+  { id: 'alist', title: 'alist', extension: 'alist', mediaType: 'text/plain', write: writeAlist, read: readAlist },
+  {
+    id: 'mtx',
+    title: 'Matrix Market',
+    extension: 'mtx',
+    mediaType: 'text/plain',
+    write: writeMatrixMarket,
+    read: readMatrixMarket,
+  },
+];
+
+export function matrixFormat(id: string): MatrixFormatCodec {
+  const format = matrixFormats.find((f) => f.id === id);
+  if (!format) throw new ParamError('format', id, `one of ${matrixFormats.map((f) => f.id).join(', ')}`);
+  return format;
+}
+
+/** The matrix as a file. @throws ParamError on an unknown format. */
+export const exportMatrix = (H: SparseMatrix, format: string): Uint8Array => matrixFormat(format).write(H);
+
+/** The matrix out of a file. @throws ParamError on an unknown format, FormatError with the place of what is wrong,
+ *  LimitError on a size that passes what is read here. */
+export const importMatrix = (bytes: Uint8Array, format: string): SparseMatrix => matrixFormat(format).read(bytes);

@@ -1,0 +1,66 @@
+import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import { matrixFromEntries } from './matrix-from-entries.ts';
+import { refuseBeyondLimits } from './matrix-limits.ts';
+import { TextScanner } from './text-scanner.ts';
+import { TextWriter } from './text-writer.ts';
+
+const banner = '%%MatrixMarket matrix coordinate pattern general';
+
+/** Matrix Market coordinate pattern (Boisvert, Pozo, Remington 1996, NISTIR 5935): banner, `rows cols ones`, then one
+ *  `row column` a line, counted from 1. */
+export function writeMatrixMarket(H: SparseMatrix): Uint8Array {
+  const out = new TextWriter();
+  out.text(`${banner}\n`);
+  out.number(H.rows).text(' ').number(H.cols).text(' ').number(H.colIndex.length).text('\n');
+  for (let i = 0; i < H.rows; i++) {
+    for (let e = H.rowStart[i]!; e < H.rowStart[i + 1]!; e++) {
+      out
+        .number(i + 1)
+        .text(' ')
+        .number(H.colIndex[e]! + 1)
+        .text('\n');
+    }
+  }
+  return out.finish();
+}
+
+/** Reads `coordinate pattern general`, and `coordinate integer general` with every value 0 or 1.
+ *  @throws FormatError with line and column; @throws LimitError on a size that passes matrixLimits. */
+export function readMatrixMarket(bytes: Uint8Array): SparseMatrix {
+  const scan = new TextScanner(bytes);
+  const first = scan.restOfLine().trim().toLowerCase().replace(/\s+/g, ' ');
+  const hasValues = first === banner.toLowerCase().replace('pattern', 'integer');
+  if (!hasValues && first !== banner.toLowerCase())
+    throw scan.errorAtLine(
+      1,
+      `the line "${banner}" (or integer in place of pattern)`,
+      JSON.stringify(first.slice(0, 60)),
+    );
+  while (!scan.atEnd() && scan.peek() === 37) scan.restOfLine();
+  const rows = scan.number('the number of rows');
+  const cols = scan.number('the number of columns', false);
+  const ones = scan.number('the number of entries', false);
+  refuseBeyondLimits(rows, cols, ones);
+  if (rows === 0 || cols === 0) throw scan.error('at least one row and one column', `${rows} × ${cols}`);
+  const rowOf = new Uint32Array(ones);
+  const colOf = new Uint32Array(ones);
+  let count = 0;
+  for (let e = 0; e < ones; e++) {
+    while (!scan.atEnd() && scan.peek() === 37) scan.restOfLine();
+    const row = inRange(scan, scan.number(`entry ${e + 1} of ${ones}: a row from 1 to ${rows}`), rows, 'row');
+    const col = inRange(scan, scan.number(`a column from 1 to ${cols}`, false), cols, 'column');
+    const value = hasValues ? scan.number('a value 0 or 1', false) : 1;
+    if (value > 1) throw scan.error('a value 0 or 1', String(value));
+    if (!scan.atLineEnd()) throw scan.error('the end of the line', scan.tokenAt());
+    if (value === 0) continue;
+    rowOf[count] = row;
+    colOf[count++] = col;
+  }
+  if (!scan.atEnd()) throw scan.error(`the end of the file after ${ones} entries`, scan.tokenAt());
+  return matrixFromEntries(rows, cols, rowOf.subarray(0, count), colOf.subarray(0, count), scan);
+}
+
+function inRange(scan: TextScanner, index: number, limit: number, what: string): number {
+  if (index < 1 || index > limit) throw scan.error(`a ${what} from 1 to ${limit}; indices count from 1`, String(index));
+  return index - 1;
+}

@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { createSimulateApi } from './simulate.ts';
+
+expose(createSimulateApi());
