@@ -10,4 +10,9 @@ export interface RunSpec {
   /** Any text; the same text gives the same frames everywhere. */
   seed: string;
   framesPerShard: number;
+  /** k/n, for the channels stated by Eb/N0; worked out from the rank of H when not given. */
+  rate?: number;
+  /** The all-zero word, or a random codeword from a stream of its own, so that the error patterns are the same. By
+   *  default random words on the Z channel, whose errors depend on them, and zeros elsewhere. */
+  sent?: 'zero' | 'random';
 }
