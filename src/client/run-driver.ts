@@ -10,6 +10,7 @@ import {
   type PointProgress,
   progressOf,
   reachedStop,
+  shardCap,
 } from './run-plan.ts';
 
 export interface DriverView {
@@ -59,6 +60,7 @@ export class RunDriver {
   private inFlight = 0;
   private abort = new AbortController();
   private flushing: Promise<void> | null = null;
+  private settling: Promise<void> | null = null;
 
   constructor(
     private readonly run: Run,
@@ -179,18 +181,26 @@ export class RunDriver {
     for (const { pointId, index, tally } of batch) {
       const point = this.points.find((p) => p.pointId === pointId)!;
       acknowledge(point, index);
+      point.done ||= point.nextIndex >= shardCap(this.run.stopping, this.run.framesPerShard);
       if (conflicts.some((c) => c.pointId === pointId && c.index === index)) {
         this.message = `The server holds another tally for shard ${index} of a point; this page's was not counted.`;
         continue;
       }
       point.tally = mergeTallies(point.tally, tally);
-      point.done = reachedStop(point.tally, this.run.stopping);
+      point.done ||= reachedStop(point.tally, this.run.stopping);
     }
     this.show();
   }
 
   /** Waits for shards under way and for the server, then says that the run rests or is finished. */
-  private async settle(): Promise<void> {
+  private settle(): Promise<void> {
+    this.settling ??= this.settleOnce().finally(() => {
+      this.settling = null;
+    });
+    return this.settling;
+  }
+
+  private async settleOnce(): Promise<void> {
     while (this.inFlight > 0) await this.ports.wait(20);
     await this.flush();
     if (this.points.every((point) => point.done)) this.become('finished');

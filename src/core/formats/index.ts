@@ -9,6 +9,8 @@ export interface MatrixFormatCodec {
   title: string;
   extension: string;
   mediaType: string;
+  /** Whether this matrix can be written so; left out when every matrix can. */
+  writes?(H: SparseMatrix): boolean;
   write(H: SparseMatrix): Uint8Array;
   read(bytes: Uint8Array): SparseMatrix;
 }
