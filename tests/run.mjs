@@ -1,0 +1,76 @@
+// `npm test`: sets up what the tests need, runs every kind of test, and ends with the count on a line of its own.
+// Plain Node without packages, because it must run before they are installed.
+import { spawn, spawnSync } from 'node:child_process';
+import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { ensurePackages } from '../src/server/start/packages.mjs';
+
+const root = fileURLToPath(new URL('..', import.meta.url));
+const reports = mkdtempSync(join(tmpdir(), 'blockwright-tests-'));
+const totals = { passed: 0, failed: 0 };
+
+function run(title, command, args, env = {}) {
+  return new Promise((done) => {
+    const from = Date.now();
+    console.log(`\n— ${title}`);
+    const child = spawn(command, args, {
+      cwd: root,
+      stdio: ['ignore', 'inherit', 'inherit'],
+      env: { ...process.env, ...env },
+    });
+    child.on('error', () => done(false));
+    child.on('exit', (code) => {
+      console.log(`  ${title}: ${code === 0 ? 'passed' : 'FAILED'} in ${((Date.now() - from) / 1000).toFixed(0)} s`);
+      done(code === 0);
+    });
+  });
+}
+
+/** A check without a count of its own counts as one test. */
+async function check(title, command, args) {
+  const good = await run(title, command, args);
+  totals[good ? 'passed' : 'failed'] += 1;
+}
+
+async function vitest(title, project) {
+  const report = join(reports, `${project}.json`);
+  const args = ['node_modules/vitest/vitest.mjs', 'run', '--project', project, '--reporter=default', '--reporter=json'];
+  const good = await run(title, process.execPath, [...args, `--outputFile.json=${report}`]);
+  if (!existsSync(report)) {
+    totals.failed += 1;
+    return;
+  }
+  const { numPassedTests, numFailedTests, numPendingTests } = JSON.parse(readFileSync(report, 'utf8'));
+  totals.passed += numPassedTests;
+  // A skipped test is one nobody sees, and a run that fails outside any test has failed all the same.
+  totals.failed += numFailedTests + numPendingTests || (good ? 0 : 1);
+}
+
+function ensureChromium() {
+  if (existsSync('/usr/bin/chromium')) return true;
+  const mayInstall = process.getuid?.() === 0 && spawnSync('apt-get', ['--version']).status === 0;
+  if (mayInstall) {
+    console.log('Installing chromium with apt-get (once).');
+    spawnSync('apt-get', ['update', '-qq'], { stdio: 'ignore' });
+    spawnSync('apt-get', ['install', '-y', '-qq', 'chromium'], { stdio: ['ignore', 'ignore', 'inherit'] });
+  }
+  if (existsSync('/usr/bin/chromium')) return true;
+  console.error('The browser tests need Chromium: apt-get install chromium');
+  totals.failed += 1;
+  return false;
+}
+
+await ensurePackages(root);
+await check('types', process.execPath, ['node_modules/astro/astro.js', 'check', '--minimumFailingSeverity', 'warning']);
+await check('lint', process.execPath, ['node_modules/@biomejs/biome/bin/biome', 'ci', '.']);
+await check('build', process.execPath, ['src/server/start/build.mjs']);
+await vitest('engine', 'core');
+await vitest('server and client', 'server');
+await vitest('components', 'components');
+if (ensureChromium()) await vitest('browser', 'browser');
+
+rmSync(reports, { recursive: true, force: true });
+console.log(`\n${totals.passed} passed, ${totals.failed} failed`);
+process.exitCode = totals.failed === 0 ? 0 : 1;
