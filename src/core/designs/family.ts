@@ -42,6 +42,8 @@ export interface DesignPrediction {
   /** Blocks on a point. */
   r: number;
   lambda: number;
+  /** Two points lie on at most one block; said of geometries that are no 2-designs. Then t = 1 and lambda = r. */
+  partialLinear?: boolean;
   resolvable?: boolean;
   cyclic?: boolean;
   /** Codes by orientation, where formulas say something. */

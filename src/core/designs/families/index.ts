@@ -1,7 +1,14 @@
+import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
-import { steinerTriple } from './steiner-triple.ts';
+import { projectivePlane } from './projective-plane.ts';
+import { puncturedAffinePlane } from './punctured-affine-plane.ts';
 
 /** Every family the program builds, in the order shown. A family is added by one file here and one line below. */
-export const families: readonly Family[] = [
-  steinerTriple, //
-];
+export const families: readonly Family[] = [projectivePlane, puncturedAffinePlane];
+
+/** The family with this id. @throws ParamError that lists every id. */
+export function familyById(id: string): Family {
+  const family = families.find((f) => f.id === id);
+  if (!family) throw new ParamError('family', id, `one of ${families.map((f) => f.id).join(', ')}`);
+  return family;
+}
