@@ -2,9 +2,14 @@ import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
 import { projectivePlane } from './projective-plane.ts';
 import { puncturedAffinePlane } from './punctured-affine-plane.ts';
+import { steinerTriple } from './steiner-triple.ts';
 
 /** Every family the program builds, in the order shown. A family is added by one file here and one line below. */
-export const families: readonly Family[] = [projectivePlane, puncturedAffinePlane];
+export const families: readonly Family[] = [
+  projectivePlane, //
+  puncturedAffinePlane,
+  steinerTriple,
+];
 
 /** The family with this id. @throws ParamError that lists every id. */
 export function familyById(id: string): Family {
