@@ -1,13 +1,11 @@
-import type { Estimate } from './curve.ts';
+import type { Estimate } from '@/client/curves/curve.ts';
+import { superscript } from '@/components/ui/numbers.ts';
 
-const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
-const MINUS = '⁻';
+const THIN = '\u202f';
+/** Between a mantissa and its power of ten. */
+const TIMES = `${THIN}×${THIN}10`;
 
 export type Rounding = 'nearest' | 'up' | 'down';
-
-/** An integer as a superscript with a real minus: −4 becomes "⁻⁴". */
-export const superscript = (exponent: number): string =>
-  [...String(exponent)].map((c) => (c === '-' ? MINUS : SUPERSCRIPTS[Number(c)])).join('');
 
 /** A positive number as mantissa and power of ten, the mantissa in [1, 10) after rounding to so many digits. */
 export function decimalParts(
@@ -33,20 +31,20 @@ function carry(mantissa: number, exponent: number, digits: number): [string, num
 export function scientific(x: number, digits = 2, rounding: Rounding = 'nearest'): string {
   const [mantissa, exponent] = decimalParts(x, digits, rounding);
   if (mantissa === '1') return `10${superscript(exponent)}`;
-  return `${mantissa} × 10${superscript(exponent)}`;
+  return `${mantissa}${TIMES}${superscript(exponent)}`;
 }
 
 /** A measured rate as read: "7.4 × 10⁻⁴", or "< 3.0 × 10⁻⁶" with the upper limit when no error was seen. A limit is
  *  rounded away from the claim. */
 export const rateText = (rate: Estimate, digits = 2): string =>
-  rate.value === null ? `< ${scientific(rate.upper, digits, 'up')}` : scientific(rate.value, digits);
+  rate.value === null ? `<${THIN}${scientific(rate.upper, digits, 'up')}` : scientific(rate.value, digits);
 
 /** "(6.1 – 8.9) × 10⁻⁴"; an interval that starts at 0 is a bound: "< 3.0 × 10⁻⁶". Its ends are rounded outward. */
 export function intervalText(rate: Estimate, digits = 2): string {
-  if (rate.value === null || rate.lower <= 0) return `< ${scientific(rate.upper, digits, 'up')}`;
+  if (rate.value === null || rate.lower <= 0) return `<${THIN}${scientific(rate.upper, digits, 'up')}`;
   const [low, lowExponent] = decimalParts(rate.lower, digits, 'down');
   const [high, highExponent] = decimalParts(rate.upper, digits, 'up');
-  if (lowExponent === highExponent) return `(${low} – ${high}) × 10${superscript(lowExponent)}`;
+  if (lowExponent === highExponent) return `(${low} – ${high})${TIMES}${superscript(lowExponent)}`;
   return `${scientific(rate.lower, digits, 'down')} – ${scientific(rate.upper, digits, 'up')}`;
 }
 
@@ -57,11 +55,5 @@ export function parameterText(p: number): string {
   return scientific(p, digits);
 }
 
-/** Whole numbers in groups of three with thin spaces: "1 284 000". */
-export const countText = (count: number): string =>
-  Math.round(count)
-    .toString()
-    .replaceAll(/\B(?=(\d{3})+$)/g, '\u2009');
-
 /** "99 %". */
-export const levelText = (level: number): string => `${Number((level * 100).toPrecision(6))} %`;
+export const levelText = (level: number): string => `${Number((level * 100).toPrecision(6))}${THIN}%`;
