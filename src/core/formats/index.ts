@@ -1,7 +1,14 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { ParamError } from '../errors.ts';
 import { readAlist, writeAlist } from './alist.ts';
+import { readCHeader, writeCHeader } from './c-header.ts';
+import { readCsv, writeCsv } from './csv.ts';
+import { readJson, writeJson } from './json.ts';
+import { readMat, writeMat } from './mat.ts';
 import { readMatrixMarket, writeMatrixMarket } from './matrix-market.ts';
+import { readNpy, writeNpy } from './npy.ts';
+import { readNpz, writeNpz } from './npz.ts';
+import { circulantBlockSize, readQuasiCyclic, writeQuasiCyclic } from './quasi-cyclic.ts';
 
 /** One file format of a parity-check matrix, both ways. */
 export interface MatrixFormatCodec {
@@ -25,6 +32,56 @@ export const matrixFormats: readonly MatrixFormatCodec[] = [
     mediaType: 'text/plain',
     write: writeMatrixMarket,
     read: readMatrixMarket,
+  },
+  {
+    id: 'csv',
+    title: 'CSV of row and column',
+    extension: 'csv',
+    mediaType: 'text/csv',
+    write: writeCsv,
+    read: readCsv,
+  },
+  {
+    id: 'json',
+    title: 'JSON',
+    extension: 'json',
+    mediaType: 'application/json',
+    write: (H) => writeJson(H),
+    read: readJson,
+  },
+  {
+    id: 'npz',
+    title: 'SciPy sparse .npz',
+    extension: 'npz',
+    mediaType: 'application/zip',
+    write: writeNpz,
+    read: readNpz,
+  },
+  {
+    id: 'npy',
+    title: 'NumPy dense .npy',
+    extension: 'npy',
+    mediaType: 'application/octet-stream',
+    write: writeNpy,
+    read: readNpy,
+  },
+  {
+    id: 'mat',
+    title: 'MATLAB level-5 sparse .mat',
+    extension: 'mat',
+    mediaType: 'application/octet-stream',
+    write: writeMat,
+    read: readMat,
+  },
+  { id: 'c', title: 'C header', extension: 'h', mediaType: 'text/x-c', write: writeCHeader, read: readCHeader },
+  {
+    id: 'qc',
+    title: 'quasi-cyclic shift table',
+    extension: 'qc.txt',
+    mediaType: 'text/plain',
+    writes: (H) => circulantBlockSize(H) !== null,
+    write: writeQuasiCyclic,
+    read: readQuasiCyclic,
   },
 ];
 
