@@ -1,0 +1,52 @@
+import type { BuiltCode } from '@workers/build/api.ts';
+import { useCallback, useEffect, useRef, useState } from 'react';
+import type { SheetRequest, SheetStep } from '@/core/codes/sheet.ts';
+import { type Refusal, refusalFrom, refusalOf } from '../refusal.ts';
+
+export type BuildState =
+  | { state: 'idle' }
+  | { state: 'working'; step: SheetStep | null }
+  | { state: 'built'; built: BuiltCode; request: SheetRequest; elapsedMs: number }
+  | { state: 'refused'; refusal: Refusal };
+
+/** Builds in a worker, one build at a time; leaving the page or choosing something else cancels it. */
+export function useBuild() {
+  const [build, setBuild] = useState<BuildState>({ state: 'idle' });
+  const running = useRef<AbortController | null>(null);
+
+  const cancel = useCallback(() => {
+    running.current?.abort();
+    running.current = null;
+    setBuild({ state: 'idle' });
+  }, []);
+
+  const start = useCallback(async (request: SheetRequest) => {
+    running.current?.abort();
+    const controller = new AbortController();
+    running.current = controller;
+    setBuild({ state: 'working', step: null });
+    const from = performance.now();
+    const still = () => running.current === controller;
+    try {
+      const { buildCodeInWorker } = await import('@/client/build-pool.ts');
+      const built = await buildCodeInWorker(request, {
+        signal: controller.signal,
+        onProgress: (step) => still() && setBuild({ state: 'working', step }),
+      });
+      if (still()) setBuild({ state: 'built', built, request, elapsedMs: performance.now() - from });
+    } catch (error) {
+      if (still()) setBuild({ state: 'refused', refusal: refusalOfBuild(error) });
+    }
+  }, []);
+
+  useEffect(() => () => running.current?.abort(), []);
+  return { build, start, cancel };
+}
+
+function refusalOfBuild(error: unknown): Refusal {
+  if (error instanceof Error && 'failure' in error) {
+    const { code, message, data } = error.failure as { code: string; message: string; data: object };
+    return refusalFrom(code, message, data);
+  }
+  return refusalOf(error);
+}
