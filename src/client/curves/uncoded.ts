@@ -5,9 +5,10 @@ import type { RateKind } from './curve.ts';
 export const uncodedRate = (kind: RateKind, p: number, n: number): number =>
   kind === 'ber' ? p : -Math.expm1(n * Math.log1p(-p));
 
-/** The reference line as said beside it. */
-export const uncodedLabel = (kind: RateKind, n: number): string => (kind === 'ber' ? 'uncoded' : `uncoded, ${n} bits`);
+/** The reference lines as named on a chart; frames of different lengths have a line each. */
+export const uncodedLabel = (kind: RateKind, lengths: readonly number[]): string =>
+  kind === 'ber' ? 'uncoded, BER = p' : `uncoded, n = ${lengths.join(', ')}`;
 
-/** The formula, for tooltips and descriptions. */
-export const uncodedFormula = (kind: RateKind, n: number): string =>
-  kind === 'ber' ? 'BER = p' : `FER = 1 − (1 − p)^${n}`;
+/** The formula, for tooltips and captions. */
+export const uncodedFormula = (kind: RateKind): string =>
+  kind === 'ber' ? 'uncoded: BER = p' : 'uncoded: FER = 1 − (1 − p)ⁿ';
