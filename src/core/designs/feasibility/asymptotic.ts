@@ -1,0 +1,33 @@
+import type { FeasibilityRule } from './rule.ts';
+
+/** Theorems that grant every sufficiently large v without saying how large: a reason to hope, never a verdict. */
+export const asymptoticNotes: readonly (Pick<FeasibilityRule, 'id' | 'source'> & {
+  appliesTo(t: number): boolean;
+  statement: string;
+})[] = [
+  {
+    id: 'wilson',
+    appliesTo: (t) => t === 2,
+    statement:
+      'For fixed k and λ every sufficiently large admissible v has a 2-(v,k,λ) design; no bound on "sufficiently large" is used here, so this decides nothing for the v asked.',
+    source: {
+      authors: 'R. M. Wilson',
+      year: 1975,
+      title: 'An existence theory for pairwise balanced designs III',
+      where: 'J. Combin. Theory A 18, 71–79',
+    },
+  },
+  {
+    id: 'keevash',
+    appliesTo: (t) => t >= 3,
+    statement:
+      'For fixed t, k and λ every sufficiently large admissible v has a t-(v,k,λ) design; no bound on "sufficiently large" is known to reach the v asked, so this decides nothing for it.',
+    source: {
+      authors: 'P. Keevash',
+      year: 2018,
+      title: 'The existence of designs II',
+      where: 'arXiv:1802.05900',
+      part: 'after Keevash 2014',
+    },
+  },
+];
