@@ -54,9 +54,15 @@ export function Axes({ frame, window, kind }: Props) {
         <text x={(left + right) / 2} y={height - 8} textAnchor="middle">
           {isNarrow ? 'crossover probability p (BSC)' : 'crossover probability p, binary symmetric channel'}
         </text>
-        <text transform={`translate(${isNarrow ? 11 : 14} ${(top + bottom) / 2}) rotate(-90)`} textAnchor="middle">
-          {RATE_NAME[kind]}
-        </text>
+        {isNarrow ? (
+          <text x={4} y={12}>
+            {RATE_NAME[kind]}
+          </text>
+        ) : (
+          <text transform={`translate(14 ${(top + bottom) / 2}) rotate(-90)`} textAnchor="middle">
+            {RATE_NAME[kind]}
+          </text>
+        )}
       </g>
     </g>
   );

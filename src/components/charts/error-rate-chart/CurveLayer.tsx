@@ -7,13 +7,14 @@ interface Props {
   activePointId: string | null;
 }
 
-/** Whiskers need no feet where they would touch each other. */
-const MOST_FEET = 80;
+/** Beyond so many marks they are drawn small, without feet at the whiskers and halo around the points. */
+const DENSE_FROM = 80;
 
 /** One curve: line through measured points, whiskers, points, and arrows hanging from upper limits. */
 export function CurveLayer({ placed, style, activePointId }: Props) {
   const { marks, path, curve } = placed;
-  const foot = marks.length <= MOST_FEET ? 3 : 0;
+  const isDense = marks.length >= DENSE_FROM;
+  const foot = isDense ? 0 : 3;
   return (
     <g style={{ color: curveColour(style) }} data-curve={curve.key} stroke="currentColor" fill="none">
       {path !== '' && (
@@ -27,7 +28,12 @@ export function CurveLayer({ placed, style, activePointId }: Props) {
       )}
       <path d={marks.map((mark) => whiskerPath(mark, foot)).join('')} strokeWidth="1.2" data-whiskers />
       {marks.map((mark) => (
-        <PointMark key={mark.point.pointId} mark={mark} isActive={mark.point.pointId === activePointId} />
+        <PointMark
+          key={mark.point.pointId}
+          mark={mark}
+          isDense={isDense}
+          isActive={mark.point.pointId === activePointId}
+        />
       ))}
     </g>
   );
@@ -40,8 +46,9 @@ function whiskerPath({ whisker, x }: Mark, foot: number): string {
   return `M${x} ${high}V${low}${feet}`;
 }
 
-function PointMark({ mark, isActive }: { mark: Mark; isActive: boolean }) {
+function PointMark({ mark, isActive, isDense }: { mark: Mark; isActive: boolean; isDense: boolean }) {
   const { x, y } = mark;
+  const size = isDense ? 0.6 : 1;
   return (
     <>
       {isActive && <circle cx={x} cy={y} r="9" strokeWidth="1.5" stroke="var(--ink)" />}
@@ -51,10 +58,10 @@ function PointMark({ mark, isActive }: { mark: Mark; isActive: boolean }) {
         <circle
           cx={x}
           cy={y}
-          r={mark.isThin ? 3.6 : 4.2}
+          r={size * (mark.isThin ? 3.6 : 4.2)}
           fill={mark.isThin ? 'var(--sheet)' : 'currentColor'}
-          stroke={mark.isThin ? 'currentColor' : 'var(--sheet)'}
-          strokeWidth={mark.isThin ? 1.8 : 1.4}
+          stroke={mark.isThin || isDense ? 'currentColor' : 'var(--sheet)'}
+          strokeWidth={isDense ? 1 : mark.isThin ? 1.8 : 1.4}
           data-point={mark.isThin ? 'thin' : 'firm'}
         />
       )}

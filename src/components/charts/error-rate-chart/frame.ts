@@ -31,9 +31,9 @@ interface LabelRoom {
 export function chartFrame(width: number, window: ChartWindow, labels: readonly LabelRoom[]): Frame {
   const isNarrow = width < NARROW_BELOW;
   const height = isNarrow ? Math.max(320, width * 0.95) : Math.min(620, Math.max(380, width * 0.56));
-  const left = isNarrow ? 46 : 66;
+  const left = isNarrow ? 42 : 66;
   const rightMost = plotRight(width, left, window, isNarrow ? [] : labels);
-  const top = 22;
+  const top = isNarrow ? 30 : 22;
   const bottom = height - (isNarrow ? 48 : 56);
   return {
     width,
