@@ -1,0 +1,84 @@
+import { type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
+import { LimitError } from '../errors.ts';
+import { PACKED_LIMIT_BYTES } from './bit-matrix.ts';
+import { cyclicRank } from './cyclic.ts';
+import { peel } from './peel.ts';
+
+/** Rank over GF(2). Matrices whose rows are closed under the cyclic shift of the columns are ranked by a polynomial gcd,
+ *  all others by elimination.
+ *  @throws LimitError when the packed matrix does not fit. */
+export function rank(H: SparseMatrix): number {
+  return cyclicRank(H) ?? eliminationRank(H);
+}
+
+/** Rank by sparse pre-elimination, then packed elimination of what is left; assumes nothing of the matrix. */
+export function eliminationRank(H: SparseMatrix): number {
+  const { pivots, core } = peel(H);
+  // A basis holds vectors of the shorter side, so its size is bounded by the square of that side.
+  return pivots + insertionRank(core.cols <= core.rows ? core : transpose(core));
+}
+
+/** Rows reduced together, so that each basis row is fetched once for all of them. */
+const BATCH = 32;
+
+/** Rank by inserting rows, a batch at a time, into an echelon basis; the plain way, and the twin of the WebAssembly
+ *  kernel. */
+export function insertionRank(H: SparseMatrix): number {
+  const stride = (H.cols + 31) >>> 5;
+  const most = Math.min(H.rows, H.cols);
+  const bytes = 4 * stride * most;
+  if (bytes > PACKED_LIMIT_BYTES) throw new LimitError('rank over GF(2)', bytes, PACKED_LIMIT_BYTES, 'bytes');
+  const basis = new EchelonBasis(most, H.cols);
+  const batch = new Int32Array(BATCH * stride);
+  for (let r = 0; r < H.rows && basis.size < most; r += BATCH) {
+    const count = Math.min(BATCH, H.rows - r);
+    batch.fill(0);
+    for (let i = 0; i < count; i++) {
+      for (let e = H.rowStart[r + i]!; e < H.rowStart[r + i + 1]!; e++) {
+        const c = H.colIndex[e]!;
+        batch[i * stride + (c >>> 5)]! ^= 1 << (c & 31);
+      }
+    }
+    basis.insert(batch, count);
+  }
+  return basis.size;
+}
+
+/** Vectors with distinct leading columns; `order` names them by ascending leading column. */
+class EchelonBasis {
+  size = 0;
+  private readonly stride: number;
+  private readonly words: Int32Array;
+  private readonly pivotRow: Int32Array;
+
+  constructor(
+    most: number,
+    private readonly cols: number,
+  ) {
+    this.stride = (cols + 31) >>> 5;
+    this.words = new Int32Array(most * this.stride);
+    this.pivotRow = new Int32Array(cols).fill(-1);
+  }
+
+  insert(batch: Int32Array, count: number): void {
+    const { stride, pivotRow } = this;
+    for (let c = 0; c < this.cols; c++) {
+      const word = c >>> 5;
+      const bit = c & 31;
+      for (let i = 0; i < count; i++) {
+        if (((batch[i * stride + word]! >>> bit) & 1) === 0) continue;
+        const p = pivotRow[c]!;
+        if (p >= 0) addWords(batch, i * stride, this.words, p * stride, word, stride);
+        else {
+          pivotRow[c] = this.size;
+          this.words.set(batch.subarray(i * stride, (i + 1) * stride), this.size++ * stride);
+          batch.fill(0, i * stride, (i + 1) * stride);
+        }
+      }
+    }
+  }
+}
+
+function addWords(target: Int32Array, t: number, source: Int32Array, s: number, from: number, to: number): void {
+  for (let w = from; w < to; w++) target[t + w]! ^= source[s + w]!;
+}
