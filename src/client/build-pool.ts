@@ -1,4 +1,4 @@
-import type { BuildApi, BuildFailure, BuiltCode } from '@workers/build/api.ts';
+import type { BuildAnswer, BuildApi, BuildFailure, BuiltCode } from '@workers/build/api.ts';
 import { proxy } from 'comlink';
 import type { SheetRequest, SheetStep } from '@/core/codes/sheet.ts';
 import { createWorkerPool, type WorkerPool } from './worker-pool.ts';
@@ -23,7 +23,7 @@ export async function buildCodeInWorker(
 ): Promise<BuiltCode> {
   pool ??= createWorkerPool<BuildApi>(spawn, 1);
   const onStep = proxy((step: SheetStep) => options.onProgress?.(step));
-  const answer = await pool.run((remote) => remote.build(request, onStep), options.signal);
+  const answer = await pool.run<BuildAnswer>(async (remote) => await remote.build(request, onStep), options.signal);
   if (!answer.ok) throw new BuildRefusal(answer.failure);
   return answer.built;
 }

@@ -1,0 +1,76 @@
+import type { BlockDesign, DesignSpec } from '../designs/block-design.ts';
+import { buildDesign, predictDesign } from '../designs/design.ts';
+import { designTitle } from '../designs/design-title.ts';
+import type { DesignPrediction } from '../designs/family.ts';
+import { type DesignCertificate, verifyDesign } from '../designs/verify.ts';
+import { verifyPartialLinear } from '../designs/verify-partial-linear.ts';
+import { ParamError } from '../errors.ts';
+import { analyseLdpc } from './analyse-ldpc.ts';
+import { deriveLdpc, type LdpcCode, type Transform } from './ldpc.ts';
+import { type Property, propertiesOf } from './properties.ts';
+import type { SparseMatrix } from './sparse-matrix.ts';
+
+/** What to build: a design, and how its code comes from it. */
+export interface SheetRequest {
+  design: DesignSpec;
+  derivation: { kind: 'ldpc'; checks: 'blocks' | 'points'; transforms?: Transform[] };
+}
+
+export type SheetStep = 'build' | 'verify' | 'derive' | 'analyse';
+
+/** A certificate with the time it took. */
+export type TimedCertificate = DesignCertificate & { elapsedMs: number };
+
+/** A code with all that is known of it, ready to be kept and shown. */
+export interface CodeSheet {
+  H: SparseMatrix;
+  n: number;
+  k: number;
+  designTitle: string;
+  certificate: TimedCertificate;
+  properties: Property[];
+  /** Pairs of weight and how many rows (columns) have it, ascending. */
+  rowWeights: [number, number][];
+  columnWeights: [number, number][];
+}
+
+/** Builds the design, proves it, derives the matrix and analyses it: the one road from a spec to a code.
+ *  `clock` gives milliseconds, since the engine itself reads no clock.
+ *  @throws ParamError, InfeasibleError or LimitError as the family does; ParamError when the design's blocks do not
+ *  hold up its claim, which would be a fault of this program. */
+export function codeSheet(
+  request: SheetRequest,
+  options: { clock(): number; onStep?(step: SheetStep): void },
+): CodeSheet {
+  const { clock, onStep } = options;
+  if (request.derivation.kind !== 'ldpc') throw new ParamError('derivation.kind', request.derivation.kind, '"ldpc"');
+  const prediction = predictDesign(request.design);
+  onStep?.('build');
+  const design = buildDesign(request.design);
+  onStep?.('verify');
+  const certificate = certify(design, prediction, clock);
+  if (!certificate.holds)
+    throw new ParamError('design', request.design.family, `a design whose blocks verify (${certificate.reason})`);
+  onStep?.('derive');
+  const code = deriveLdpc(design, request.derivation);
+  onStep?.('analyse');
+  return { ...describeCode(code, prediction, clock), designTitle: designTitle(request.design), certificate };
+}
+
+function certify(design: BlockDesign, prediction: DesignPrediction, clock: () => number): TimedCertificate {
+  const from = clock();
+  const { t, lambda } = prediction;
+  const certificate = prediction.partialLinear
+    ? verifyPartialLinear(design, lambda)
+    : verifyDesign(design, { t, lambda });
+  return { ...certificate, elapsedMs: clock() - from };
+}
+
+function describeCode(code: LdpcCode, prediction: DesignPrediction, clock: () => number) {
+  const from = clock();
+  const analysis = analyseLdpc(code, { cycles: true });
+  const properties = propertiesOf(code, analysis, prediction, clock() - from);
+  const { H } = code;
+  const { n, k, rowWeights, columnWeights } = analysis;
+  return { H, n, k, properties, rowWeights, columnWeights };
+}
