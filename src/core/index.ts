@@ -1,0 +1,21 @@
+/** The one door to the engine. Names and shapes exported here are kept stable; a change of one is noted in CHANGELOG.md. */
+export { type Channel, channelSchema } from './channels/channel.ts';
+export { analyseLdpc, type LdpcAnalysis } from './codes/analyse-ldpc.ts';
+export { fingerprint } from './codes/fingerprint.ts';
+export { deriveLdpc, type LdpcCode, type Transform } from './codes/ldpc.ts';
+export { type CodeSheet, codeSheet, type SheetRequest } from './codes/sheet.ts';
+export { type SparseMatrix, syndrome } from './codes/sparse-matrix.ts';
+export { type DecoderSpec, decoderSchema } from './decoders/decoder-spec.ts';
+export type { BlockDesign, DesignSpec } from './designs/block-design.ts';
+export { buildDesign, listFamilies, predictDesign } from './designs/design.ts';
+export { designTitle } from './designs/design-title.ts';
+export type { CodePrediction, DesignPrediction, ParamInfo } from './designs/family.ts';
+export { type Feasibility, feasibility } from './designs/feasibility/feasibility.ts';
+export { type DesignCertificate, verifyDesign } from './designs/verify.ts';
+export { type Citation, FormatError, InfeasibleError, LimitError, ParamError } from './errors.ts';
+export type { Enclosure, Grade, Graded } from './evidence.ts';
+export { exportMatrix, importMatrix, matrixFormats } from './formats/index.ts';
+export type { RunSpec } from './simulation/run-spec.ts';
+export { runShard } from './simulation/shard.ts';
+export { emptyTally, mergeTallies, type Tally, tallySchema } from './simulation/tally.ts';
+export { binomialInterval } from './statistics/binomial-interval.ts';
