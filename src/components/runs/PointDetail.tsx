@@ -1,0 +1,40 @@
+import type { Point } from '@/api/runs.ts';
+import { crossoverOf } from '@/client/curves/curve.ts';
+import { curveKey } from '@/client/curves/group-points.ts';
+import { SelectField } from '@/components/ui/fields.tsx';
+import type { ChartCurve } from '../charts/chart-curve.ts';
+import { HistogramWhenVisible } from '../charts/HistogramWhenVisible.tsx';
+import { parameterText } from '../charts/rate-text.ts';
+
+interface Props {
+  points: readonly Point[];
+  curves: readonly ChartCurve[];
+  selectedId: string | null;
+  onSelect: (pointId: string) => void;
+}
+
+/** The iterations of one point, chosen here, in the table or on the chart. */
+export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
+  const labels = new Map(curves.map(({ curve, label }) => [curve.key, label]));
+  const selected = points.find((point) => point.id === selectedId) ?? points[0];
+  if (!selected) return null;
+  return (
+    <section className="grid gap-2" aria-label="Iterations of a point">
+      <h2>Iterations</h2>
+      <SelectField
+        label="Point"
+        value={selected.id}
+        onChange={(event) => onSelect(event.target.value)}
+        choices={points.map((point) => ({
+          value: point.id,
+          label: `${labels.get(curveKey(point)) ?? point.codeLabel}, p = ${parameterText(crossoverOf(point) ?? 0)}`,
+        }))}
+      />
+      {selected.tally.frames === 0 ? (
+        <p className="text-quiet">No frames at this point yet.</p>
+      ) : (
+        <HistogramWhenVisible histogram={selected.tally.iterationHistogram} />
+      )}
+    </section>
+  );
+}

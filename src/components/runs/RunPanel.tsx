@@ -1,0 +1,100 @@
+import { useState } from 'react';
+import type { Point, Run } from '@/api/runs.ts';
+import type { RunDriverHandle } from '@/client/use-run-driver.ts';
+import { Button } from '@/components/ui/Button.tsx';
+import { Notice } from '@/components/ui/Notice.tsx';
+import { counted } from '@/components/ui/numbers.ts';
+import { Progress } from '@/components/ui/Progress.tsx';
+import { DRIVER_WORD, progressText, rateText, sumText } from './run-progress.ts';
+import { StopDialog } from './StopDialog.tsx';
+
+interface Props {
+  run: Run;
+  points: readonly Point[];
+  driver: RunDriverHandle;
+}
+
+/** Progress and the controls, for those who may run. */
+export function RunPanel({ run, points, driver }: Props) {
+  const [asksToStop, setAsksToStop] = useState(false);
+  const { status } = driver;
+  const isOver = run.state === 'finished' || run.state === 'stopped' || status === 'finished' || status === 'stopped';
+  const isAtWork = status === 'running' || status === 'pausing' || status === 'waiting-for-server';
+  const word = isOver && !isAtWork ? (run.state === 'stopped' ? 'Stopped' : 'Finished') : DRIVER_WORD[status];
+  const fraction = run.state === 'finished' ? 1 : driver.fractionDone;
+  return (
+    <section className="grid gap-2 border border-rule bg-sheet px-4 py-3" aria-label="Progress">
+      <p className="flex flex-wrap items-baseline gap-x-2" role="status">
+        <span className="font-semibold">{word}</span>
+        {isAtWork && <span className="text-quiet">in this browser, {counted(driver.workers, 'worker')}</span>}
+      </p>
+      <Progress
+        label="Share of the run that is done"
+        value={fraction}
+        left={progressText(fraction, isAtWork ? driver.timeLeftMs : null)}
+        right={isAtWork ? rateText(driver.framesPerSecond) : ''}
+      />
+      <p className="text-quiet text-tiny">{sumText(points)}</p>
+      {status === 'waiting-for-server' && (
+        <Notice kind="caution" word="Waiting for the server" live>
+          {driver.message ?? 'It cannot write just now.'} Nothing acknowledged is lost; the run goes on by itself.
+        </Notice>
+      )}
+      {status === 'failed' && (
+        <Notice kind="fail" word="The run halted" live>
+          {driver.message} What was acknowledged is kept.
+        </Notice>
+      )}
+      {status !== 'waiting-for-server' && status !== 'failed' && driver.message && (
+        <Notice kind="caution" word="Note" live>
+          {driver.message}
+        </Notice>
+      )}
+      {run.state === 'running' && status === 'idle' && (
+        <p className="text-quiet text-tiny">
+          This run was under way and is not being worked on from this tab. Go on here: every acknowledged shard is kept,
+          and a shard computed twice counts once.
+        </p>
+      )}
+      {!isOver && (
+        <div className="flex flex-wrap gap-2" data-screen-only>
+          <MainButton run={run} driver={driver} />
+          <Button kind="quiet" disabled={status === 'pausing'} onClick={() => setAsksToStop(true)}>
+            Stop
+          </Button>
+        </div>
+      )}
+      <StopDialog
+        open={asksToStop}
+        onClose={() => setAsksToStop(false)}
+        onStop={() => {
+          setAsksToStop(false);
+          driver.stop();
+        }}
+      />
+    </section>
+  );
+}
+
+function MainButton({ run, driver }: { run: Run; driver: RunDriverHandle }) {
+  switch (driver.status) {
+    case 'running':
+    case 'waiting-for-server':
+      return <Button onClick={driver.pause}>Pause</Button>;
+    case 'pausing':
+      return <Button busy>Pausing</Button>;
+    case 'paused':
+    case 'failed':
+      return (
+        <Button kind="primary" onClick={driver.resume}>
+          {driver.status === 'failed' ? 'Try again' : 'Resume'}
+        </Button>
+      );
+    default:
+      return (
+        <Button kind="primary" onClick={driver.start}>
+          {run.state === 'running' ? 'Go on here' : run.state === 'paused' ? 'Resume' : 'Start'}
+        </Button>
+      );
+  }
+}

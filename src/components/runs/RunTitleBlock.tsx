@@ -1,0 +1,54 @@
+import type { Point, Run } from '@/api/runs.ts';
+import { counted, wholeNumber } from '@/components/ui/numbers.ts';
+import { TitleBlock, type TitleRow } from '@/components/ui/TitleBlock.tsx';
+import { INTERVAL_METHOD } from '../charts/interval-method.ts';
+import { levelText } from '../charts/rate-text.ts';
+import { STATE_WORD } from './run-progress.ts';
+
+interface Props {
+  run: Run;
+  points: readonly Point[];
+}
+
+/** What the run is, so that it can be done again to the last bit. */
+export function RunTitleBlock({ run, points }: Props) {
+  const { stopping } = run;
+  const level = points[0]?.level;
+  const rows: TitleRow[] = [
+    {
+      label: 'Run',
+      value: run.name,
+      note: run.isDemo ? 'part of the demonstration, computed from this seed' : undefined,
+    },
+    { label: 'State', value: STATE_WORD[run.state] },
+    { label: 'Seed', value: <span className="font-mono">{run.seed}</span> },
+    { label: 'Shard', value: counted(run.framesPerShard, 'frame') },
+    {
+      label: 'A point ends',
+      value: `at ${counted(stopping.frameErrors, 'frame error')}`,
+      note: `or at ${wholeNumber(stopping.maxFrames)} frames`,
+    },
+    { label: 'Place', value: PLACE[run.place] },
+    { label: 'Points', value: `${run.pointCount}` },
+    ...(level === undefined
+      ? []
+      : [
+          {
+            label: 'Intervals',
+            value: levelText(level),
+            note: `FER: ${INTERVAL_METHOD.fer}; BER: ${INTERVAL_METHOD.ber}`,
+          },
+        ]),
+    { label: 'Stated', value: dateText(run.createdAt), note: `by ${run.createdBy}` },
+  ];
+  return <TitleBlock title="Run" rows={rows} />;
+}
+
+const PLACE: Record<Run['place'], string> = {
+  browser: 'in the browser',
+  server: 'on the server',
+  fleet: 'on the fleet',
+};
+
+/** The same on the server and in every browser: "2026-12-01 05:00 UTC". */
+export const dateText = (iso: string): string => `${iso.slice(0, 10)} ${iso.slice(11, 16)} UTC`;
