@@ -1,0 +1,132 @@
+import { type FormEvent, type ReactNode, useRef, useState } from 'react';
+import { endpoints } from '@/api/endpoints.ts';
+import { ApiFailure, call } from '@/client/api.ts';
+import { useApi } from '@/client/hooks.ts';
+import { Button } from '@/components/ui/Button.tsx';
+import { TextField } from '@/components/ui/fields.tsx';
+import { Notice } from '@/components/ui/Notice.tsx';
+import { counted } from '@/components/ui/numbers.ts';
+import { paths } from '@/paths.ts';
+import { CodeChoice } from './CodeChoice.tsx';
+import { DecoderFields } from './DecoderFields.tsx';
+import { type FieldErrors, type Judged, OFFERED_DECODERS, serverErrors } from './run-draft.ts';
+import { StoppingFields } from './StoppingFields.tsx';
+import { SweepFields } from './SweepFields.tsx';
+import { useRunDraft } from './use-run-draft.ts';
+
+interface Props {
+  projectId: string;
+}
+
+/** States a run: codes × decoders × channel points, seed and stopping rule. */
+export function NewRunForm({ projectId }: Props) {
+  const codes = useApi(endpoints.listCodes, { params: { id: projectId }, query: { limit: 500 } });
+  const requirements = useApi(endpoints.getRequirements, { params: { id: projectId } });
+  const { draft, name, judged, change } = useRunDraft(codes.data?.codes, requirements.data?.requirements);
+  const [wasSent, setWasSent] = useState(false);
+  const [refusal, setRefusal] = useState<{ message: string; fields: FieldErrors } | null>(null);
+  const [isBusy, setIsBusy] = useState(false);
+  const form = useRef<HTMLFormElement>(null);
+  const errors = { ...(refusal?.fields ?? {}), ...(wasSent ? judged.errors : {}) };
+
+  const onSubmit = async (event: FormEvent) => {
+    event.preventDefault();
+    setWasSent(true);
+    setRefusal(null);
+    const { run } = judged;
+    if (!run) return focusFirstError(form.current);
+    setIsBusy(true);
+    try {
+      const answer = await call(endpoints.createRun, { params: { id: projectId }, body: run });
+      location.assign(paths.run(projectId, answer.run.id));
+    } catch (error) {
+      setIsBusy(false);
+      if (!(error instanceof ApiFailure)) throw error;
+      setRefusal({ message: error.message, fields: serverErrors(error.fields, run) });
+      focusFirstError(form.current);
+    }
+  };
+
+  return (
+    <form ref={form} onSubmit={onSubmit} noValidate className="grid max-w-3xl gap-7" aria-label="New run">
+      <Part title="Codes">
+        {codes.data ? (
+          <CodeChoice
+            projectId={projectId}
+            codes={codes.data.codes}
+            chosen={draft.codeIds}
+            error={errors.codeIds}
+            onChange={(codeIds) => change({ codeIds })}
+          />
+        ) : (
+          <p className="text-quiet">{codes.error?.message ?? 'The codes are being fetched.'}</p>
+        )}
+      </Part>
+      <Part title="Decoders" error={errors.decoders}>
+        {OFFERED_DECODERS.map((kind) => (
+          <DecoderFields
+            key={kind}
+            kind={kind}
+            draft={draft.decoders[kind]}
+            errors={errors}
+            onChange={(part) =>
+              change({ decoders: { ...draft.decoders, [kind]: { ...draft.decoders[kind], ...part } } })
+            }
+          />
+        ))}
+      </Part>
+      <Part title="Channel: binary symmetric">
+        <SweepFields draft={draft} errors={errors} sweep={judged.sweep} onChange={change} />
+      </Part>
+      <Part title="Stopping, shards and seed">
+        <StoppingFields draft={draft} errors={errors} onChange={change} />
+      </Part>
+      <Part title="Name">
+        <TextField
+          label="Name of the run"
+          value={draft.name}
+          placeholder={name}
+          error={errors.name}
+          hint="left empty, the name shown is taken"
+          onChange={(event) => change({ name: event.target.value })}
+        />
+      </Part>
+      {refusal && (
+        <Notice kind="fail" word="Refused" live>
+          {refusal.message} Nothing was stored.
+        </Notice>
+      )}
+      <div className="flex flex-wrap items-center gap-x-5 gap-y-2 border-ink border-t pt-4">
+        <Button kind="primary" type="submit" busy={isBusy}>
+          State the run
+        </Button>
+        <p className="text-quiet">{countText(judged, draft.codeIds.length)} It is computed in this browser.</p>
+      </div>
+    </form>
+  );
+}
+
+/** "12 points, at most 6 000 shards." */
+function countText({ points, mostShards }: Judged, codes: number): string {
+  if (points === 0) return `${counted(codes, 'code')} chosen, no points yet.`;
+  const shards = mostShards === null ? '' : `, at most ${counted(mostShards, 'shard')}`;
+  return `${counted(points, 'point')}${shards}.`;
+}
+
+function focusFirstError(form: HTMLFormElement | null): void {
+  requestAnimationFrame(() => form?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus());
+}
+
+function Part({ title, error, children }: { title: string; error?: string | undefined; children: ReactNode }) {
+  return (
+    <fieldset className="min-w-0">
+      <legend className="mb-2 w-full border-ink border-b pb-1 font-semibold text-lead">{title}</legend>
+      {children}
+      {error && (
+        <p className="mt-1 text-fail text-tiny">
+          <span className="font-semibold">Not accepted:</span> {error}
+        </p>
+      )}
+    </fieldset>
+  );
+}

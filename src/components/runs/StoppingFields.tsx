@@ -1,0 +1,56 @@
+import { Button } from '@/components/ui/Button.tsx';
+import { NumberField, TextField } from '@/components/ui/fields.tsx';
+import type { FieldErrors, RunDraft } from './run-draft.ts';
+import { freshSeed } from './run-proposals.ts';
+
+interface Props {
+  draft: RunDraft;
+  errors: FieldErrors;
+  onChange: (change: Partial<RunDraft>) => void;
+}
+
+/** When a point ends, how the work is cut, and from which seed the frames are drawn. */
+export function StoppingFields({ draft, errors, onChange }: Props) {
+  return (
+    <div className="grid gap-4">
+      <div className="grid gap-4 sm:grid-cols-3">
+        <NumberField
+          label="A point ends at frame errors"
+          value={draft.frameErrors}
+          error={errors.frameErrors}
+          hint="100 gives about 10 % standard error"
+          onChange={(event) => onChange({ frameErrors: event.target.value })}
+        />
+        <NumberField
+          label="or at frames"
+          value={draft.maxFrames}
+          error={errors.maxFrames}
+          hint="the cap for each point; 1e8 is understood"
+          onChange={(event) => onChange({ maxFrames: event.target.value })}
+        />
+        <NumberField
+          label="Frames per shard"
+          value={draft.framesPerShard}
+          error={errors.framesPerShard}
+          hint="a shard is the piece that is handed in at once"
+          onChange={(event) => onChange({ framesPerShard: event.target.value })}
+        />
+      </div>
+      <div className="flex flex-wrap items-start gap-3">
+        <TextField
+          label="Seed"
+          className="min-w-60 grow"
+          value={draft.seed}
+          error={errors.seed}
+          hint="any text; the same seed gives the same frames everywhere"
+          autoComplete="off"
+          spellCheck={false}
+          onChange={(event) => onChange({ seed: event.target.value })}
+        />
+        <Button size="small" className="mt-6" onClick={() => onChange({ seed: freshSeed() })}>
+          Another seed
+        </Button>
+      </div>
+    </div>
+  );
+}
