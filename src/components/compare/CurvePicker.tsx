@@ -1,0 +1,85 @@
+import { useState } from 'react';
+import type { Run } from '@/api/runs.ts';
+import type { Curve } from '@/client/curves/curve.ts';
+import { decoderText } from '@/client/curves/decoder-text.ts';
+import { TextField } from '@/components/ui/fields.tsx';
+import { counted } from '@/components/ui/numbers.ts';
+import { CurveSwatch } from '../charts/CurveSwatch.tsx';
+import type { ChartCurve } from '../charts/chart-curve.ts';
+import { RunState } from '../runs/RunState.tsx';
+
+interface Props {
+  runs: readonly Run[];
+  curves: readonly Curve[];
+  chosen: readonly ChartCurve[];
+  onChange: (keys: string[]) => void;
+}
+
+const FILTER_FROM = 12;
+
+/** All measured curves of the project by run; those ticked are overlaid. */
+export function CurvePicker({ runs, curves, chosen, onChange }: Props) {
+  const [filter, setFilter] = useState('');
+  const chosenKeys = chosen.map(({ curve }) => curve.key);
+  const matches = (curve: Curve, run: Run) =>
+    `${run.name} ${curve.codeLabel} ${decoderText(curve.decoder)}`.toLowerCase().includes(filter.toLowerCase());
+  const toggle = (key: string, isChosen: boolean) =>
+    onChange(isChosen ? [...chosenKeys, key] : chosenKeys.filter((other) => other !== key));
+  return (
+    <section className="grid gap-2" aria-label="Curves to overlay">
+      <h2>Curves</h2>
+      {curves.length > FILTER_FROM && (
+        <TextField label="Filter" value={filter} onChange={(event) => setFilter(event.target.value)} />
+      )}
+      <div className="grid max-h-[32rem] gap-3 overflow-y-auto pr-1">
+        {runs.map((run) => {
+          const own = curves.filter((curve) => curve.runId === run.id && matches(curve, run));
+          if (own.length === 0) return null;
+          return (
+            <fieldset key={run.id} className="min-w-0">
+              <legend className="flex w-full items-baseline justify-between gap-3 border-ink border-b pb-0.5">
+                <span className="font-semibold">{run.name}</span>
+                <RunState run={run} />
+              </legend>
+              {own.map((curve) => (
+                <Choice
+                  key={curve.key}
+                  curve={curve}
+                  chartCurve={chosen.find((other) => other.curve.key === curve.key)}
+                  onChange={(isChosen) => toggle(curve.key, isChosen)}
+                />
+              ))}
+            </fieldset>
+          );
+        })}
+      </div>
+    </section>
+  );
+}
+
+interface ChoiceProps {
+  curve: Curve;
+  /** Its look, when it is overlaid. */
+  chartCurve: ChartCurve | undefined;
+  onChange: (isChosen: boolean) => void;
+}
+
+function Choice({ curve, chartCurve, onChange }: ChoiceProps) {
+  return (
+    <label className="flex cursor-pointer items-baseline gap-2.5 border-hair border-b py-1.5">
+      <input
+        type="checkbox"
+        className="accent-act"
+        checked={chartCurve !== undefined}
+        onChange={(event) => onChange(event.target.checked)}
+      />
+      <span className="min-w-0 grow">
+        {curve.codeLabel}
+        <span className="block text-quiet text-tiny">
+          {decoderText(curve.decoder)}, {counted(curve.points.length, 'point')}
+        </span>
+      </span>
+      {chartCurve && <CurveSwatch style={chartCurve.style} showLetter />}
+    </label>
+  );
+}
