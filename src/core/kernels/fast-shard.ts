@@ -1,0 +1,100 @@
+import { hardCrossover } from '../channels/awgn.ts';
+import type { DecoderSpec } from '../decoders/decoder-spec.ts';
+import { flippingThresholds, iterationCap } from '../decoders/settings.ts';
+import { columnDegrees } from '../decoders/tanner-graph.ts';
+import { streamState } from '../simulation/random.ts';
+import type { RunSpec } from '../simulation/run-spec.ts';
+import type { Tally } from '../simulation/tally.ts';
+import { bscWeightTable } from '../simulation/weight-table.ts';
+import { bitFlippingKernel } from './bit-flipping-kernel.ts';
+import { begin, type CompiledKernel, type Draws, giveBack, kernelOf, readTally } from './compiled-kernel.ts';
+import { planGraph } from './graph-plan.ts';
+import type { KernelImage } from './kernel-image.ts';
+import { simdAvailable } from './simd-available.ts';
+
+export interface FastShardOptions {
+  /** Looked at before each slice of work; once aborted the shard rejects with the signal's reason. */
+  signal?: AbortSignal;
+  /** Awaited between slices of about 10 ms, so that messages get in. */
+  pause?: () => Promise<void>;
+}
+
+/** The shard decoded by a kernel made for its matrix; null where there is none for the decoder, the channel or this
+ *  engine. Equal to the reference to the last integer; the sum-product kernel within its interval.
+ *  @throws ParamError on settings that the matrix does not allow, as the reference does. */
+export function fastShard(spec: RunSpec, index: number, options: FastShardOptions = {}): Promise<Tally> | null {
+  if (!simdAvailable()) return null;
+  const weights = patternWeights(spec);
+  if (weights === null) return null;
+  const kernel = kernelFor(spec);
+  if (kernel === null) return null;
+  return runOn(kernel, spec, index, weights, options);
+}
+
+/** How the channel's patterns are weighted; null where they are not independent of what is sent or of each other. */
+function patternWeights({ H, channel, rate }: RunSpec): (() => Draws['weights']) | null {
+  switch (channel.kind) {
+    case 'bsc':
+      return () => bscWeightTable(H.cols, channel.p);
+    case 'bec':
+      return () => bscWeightTable(H.cols, channel.e);
+    case 'awgn-hard':
+      return rate === undefined ? null : () => bscWeightTable(H.cols, hardCrossover(channel.ebn0Db, rate));
+    case 'stratum':
+      return () => channel.weight;
+    default:
+      return null;
+  }
+}
+
+function kernelFor({ H, decoder, channel }: RunSpec): Promise<CompiledKernel> | null {
+  if (channel.kind === 'bec' && decoder.kind !== 'peeling') return null;
+  const emit = emitterFor(decoder, H);
+  return emit && kernelOf(H, JSON.stringify(decoder), emit);
+}
+
+/** Settings are checked here, before anything is compiled. */
+function emitterFor(decoder: DecoderSpec, H: RunSpec['H']): (() => KernelImage) | null {
+  const degrees = columnDegrees(H);
+  const cap = iterationCap(decoder);
+  switch (decoder.kind) {
+    case 'majority-logic': {
+      const thresholds = degrees.map((d) => Math.floor(d / 2) + 1);
+      const rule = { cap, remembersReceived: false, stopsWhenStuck: false };
+      return () => bitFlippingKernel(planGraph(H, [thresholds]), rule);
+    }
+    case 'bit-flipping': {
+      const thresholds = flippingThresholds(degrees, decoder);
+      const rule = { cap, remembersReceived: false, stopsWhenStuck: true };
+      return () => bitFlippingKernel(planGraph(H, [thresholds]), rule);
+    }
+    default:
+      return null;
+  }
+}
+
+/** Work between two pauses. */
+const sliceNs = 8e6;
+
+async function runOn(
+  compiling: Promise<CompiledKernel>,
+  spec: RunSpec,
+  index: number,
+  weights: () => Draws['weights'],
+  { signal, pause }: FastShardOptions,
+): Promise<Tally> {
+  const kernel = await compiling;
+  const { image } = kernel;
+  const instance = await kernel.take();
+  const random = await streamState(spec.seed, index);
+  begin(instance, image, { frames: spec.framesPerShard, random, weights: weights() });
+  const steps = Math.max(1, Math.floor(sliceNs / image.stepNs));
+  signal?.throwIfAborted();
+  while (instance.run(steps) === 0) {
+    if (pause) await pause();
+    signal?.throwIfAborted();
+  }
+  const tally = readTally(instance, image, spec.framesPerShard);
+  giveBack(kernel, instance);
+  return tally;
+}

@@ -1,0 +1,123 @@
+/** How a kernel walks a matrix: as a circulant, offsets in the instructions themselves, or by tables of places; rows and
+ *  columns of one weight together, so that each weight has its own unrolled code. */
+
+import { rowOf, type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
+
+/** Rows (or columns) that share one piece of code. `weight` is null for the mixed rest, whose weights the code reads
+ *  from the table. */
+export interface WeightClass {
+  weight: number | null;
+  from: number;
+  to: number;
+  /** The kernel's constants for these columns (thresholds); empty for rows and for the mixed rest. */
+  settings: readonly number[];
+}
+
+export interface GraphPlan {
+  H: SparseMatrix;
+  /** Columns of row 0, when row j is row 0 moved by j places (mod n); rows in any circulant order otherwise do not
+   *  count. */
+  circulant: readonly number[] | null;
+  /** Row at each place of the kernel's own order, class by class. */
+  rowOrder: Uint32Array;
+  rowClasses: readonly WeightClass[];
+  columnOrder: Uint32Array;
+  columnClasses: readonly WeightClass[];
+  /** Whether the kernel's order of columns is that of the matrix. */
+  plainColumns: boolean;
+  largestColumn: number;
+  /** Rows of the transpose: the checks of each bit. */
+  columns: SparseMatrix;
+  /** The kernel's constants a column, as given. */
+  settings: readonly Uint32Array[];
+}
+
+/** Longest row or column whose code is unrolled, and most classes with code of their own. */
+const longestUnrolled = 300;
+const mostClasses = 10;
+
+/** @param settings Lists of a constant for each column; columns of one class agree in all of them.
+ *  @param rowsInOrder Keeps rows in index order, for schedules that depend on it. */
+export function planGraph(
+  H: SparseMatrix,
+  settings: readonly Uint32Array[] = [],
+  { rowsInOrder = false }: { rowsInOrder?: boolean } = {},
+): GraphPlan {
+  const columns = transpose(H);
+  const circulant = circulantOffsets(H);
+  const byWeight = classify(H, [], rowsInOrder);
+  const byDegree = classify(columns, settings, false);
+  return {
+    H,
+    circulant: circulant && byDegree.classes.length === 1 ? circulant : null,
+    rowOrder: byWeight.order,
+    rowClasses: byWeight.classes,
+    columnOrder: byDegree.order,
+    columnClasses: byDegree.classes,
+    plainColumns: byDegree.order.every((j, s) => j === s),
+    largestColumn: largestRow(columns),
+    columns,
+    settings,
+  };
+}
+
+const weightOfRow = (M: SparseMatrix, i: number) => M.rowStart[i + 1]! - M.rowStart[i]!;
+
+export function largestRow(M: SparseMatrix): number {
+  let most = 0;
+  for (let i = 0; i < M.rows; i++) most = Math.max(most, weightOfRow(M, i));
+  return most;
+}
+
+/** Row 0's columns when row j is {d + j} or {d − j} (mod n) for all j. The second kind is the first with its rows
+ *  counted backwards, which only schedules in index order could tell apart; those do not ask. */
+function circulantOffsets(H: SparseMatrix): number[] | null {
+  const n = H.cols;
+  if (H.rows !== n || n < 2) return null;
+  const first = [...rowOf(H, 0)];
+  if (first.length === 0 || first.length > longestUnrolled || H.colIndex.length !== n * first.length) return null;
+  const isMoved = (sign: 1 | -1) => {
+    for (let j = 1; j < n; j++) {
+      const row = rowOf(H, j);
+      if (row.length !== first.length) return false;
+      const moved = first.map((d) => (d + sign * j + n) % n).sort((a, b) => a - b);
+      for (let t = 0; t < row.length; t++) if (row[t] !== moved[t]) return false;
+    }
+    return true;
+  };
+  return isMoved(1) || isMoved(-1) ? first : null;
+}
+
+/** Groups rows by weight and settings; the commonest groups get code of their own, the rest is mixed. */
+function classify(M: SparseMatrix, settings: readonly Uint32Array[], inOrder: boolean) {
+  const key = (i: number) => [weightOfRow(M, i), ...settings.map((list) => list[i]!)].join();
+  const groups = new Map<string, number[]>();
+  for (let i = 0; i < M.rows; i++) {
+    const name = key(i);
+    const members = groups.get(name);
+    if (members) members.push(i);
+    else groups.set(name, [i]);
+  }
+  const unrolled = (members: number[]) => weightOfRow(M, members[0]!) <= longestUnrolled;
+  if (inOrder && groups.size > 1) return { order: identity(M.rows), classes: [mixedClass(0, M.rows)] };
+  const own = [...groups.values()]
+    .filter(unrolled)
+    .sort((a, b) => b.length * weightOfRow(M, b[0]!) - a.length * weightOfRow(M, a[0]!))
+    .slice(0, mostClasses);
+  const chosen = new Set(own);
+  const rest = [...groups.values()].filter((members) => !chosen.has(members)).flat();
+  const order = Uint32Array.from([...own.flat(), ...rest]);
+  const classes: WeightClass[] = [];
+  let from = 0;
+  for (const members of own) {
+    const [i] = members as [number];
+    const values = settings.map((list) => list[i]!);
+    classes.push({ weight: weightOfRow(M, i), from, to: from + members.length, settings: values });
+    from += members.length;
+  }
+  if (rest.length > 0) classes.push(mixedClass(from, M.rows));
+  return { order, classes };
+}
+
+const mixedClass = (from: number, to: number): WeightClass => ({ weight: null, from, to, settings: [] });
+const identity = (length: number) => Uint32Array.from({ length }, (_, i) => i);
