@@ -46,6 +46,8 @@ export const errorSchema = z.object({
     code: z.string(),
     message: z.string(),
     fields: z.record(z.string(), z.string()).optional(),
+    /** Id of the object that is there already, for `duplicate`. */
+    existing: z.string().optional(),
     /** The rule and source behind an `infeasible` refusal. */
     reason: z.object({ rule: z.string(), statement: z.string(), source: z.unknown() }).optional(),
   }),

@@ -1,4 +1,10 @@
 import { z } from 'zod';
+import {
+  catalogueAnswerSchema,
+  catalogueQueryParams,
+  feasibilityAnswerSchema,
+  feasibilityQuerySchema,
+} from './catalogue.ts';
 import { codeSchema, jobSchema, matrixFormatSchema, newCodeSchema } from './codes.ts';
 import { endpoint } from './endpoint.ts';
 import { newProjectSchema, projectSchema, requirementsSchema } from './projects.ts';
@@ -25,6 +31,14 @@ export const endpoints = {
   putRequirements: endpoint('PUT', '/projects/:id/requirements', 'State what the project needs', {
     body: requirementsSchema,
     response: storedRequirements,
+  }),
+  searchCatalogue: endpoint('GET', '/catalogue', 'Constructions that could meet requirements, from closed formulas', {
+    query: catalogueQueryParams,
+    response: catalogueAnswerSchema,
+  }),
+  feasibility: endpoint('POST', '/feasibility', 'Whether a design exists, with the theorem that says so', {
+    body: feasibilityQuerySchema,
+    response: feasibilityAnswerSchema,
   }),
   listCodes: endpoint('GET', '/projects/:id/codes', 'Codes kept in the project', {
     query: z.object(page),
@@ -61,6 +75,7 @@ export const endpoints = {
   getRun: endpoint('GET', '/runs/:id', 'A run with the tallies of its points', {
     response: z.object({ run: runSchema, points: z.array(pointSchema) }),
   }),
+  runEvents: endpoint('GET', '/runs/:id/events', 'Server-sent `run` events: the run, and its points as they change'),
   patchRun: endpoint('PATCH', '/runs/:id', 'Pause, resume, stop or rename a run', {
     body: runPatchSchema,
     response: z.object({ run: runSchema }),

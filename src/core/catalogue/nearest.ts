@@ -1,14 +1,15 @@
 import type { Entry } from './entry.ts';
 import type { CatalogueQuery } from './query.ts';
-import { matchingEntries } from './search.ts';
+import { type Candidate, candidateOf, matchingEntries } from './search.ts';
 import type { CatalogueTable } from './table.ts';
+import { testsFor } from './verdict.ts';
 
 /** What one requirement stands in the way of: the nearest entry when only that one is given up. */
 export interface Nearest {
   /** The requirement given up, e.g. "length" or "rate". */
   givenUp: string;
   direction: 'below' | 'above' | 'other';
-  entry: Entry;
+  entry: Candidate;
   /** In words: "n = 1057, above 1000". */
   words: string;
 }
@@ -36,6 +37,8 @@ const others = ['structure', 'resolvable', 'families', 'payloadBits', 'parityBit
  *  queries that nothing meets. */
 export function nearestAlternatives(table: CatalogueTable, query: CatalogueQuery): Nearest[] {
   const found: Nearest[] = [];
+  const tests = testsFor(query);
+  const asCandidate = (entry: Entry) => candidateOf(entry, query, tests);
   const without = (part: keyof CatalogueQuery) => matchingEntries(table, { ...query, [part]: undefined });
   for (const { part, name, value } of windows) {
     const window = query[part];
@@ -54,14 +57,14 @@ export function nearestAlternatives(table: CatalogueTable, query: CatalogueQuery
       found.push({
         givenUp: name,
         direction: 'below',
-        entry: below,
+        entry: asCandidate(below),
         words: `${name} ${shown(value(below))}, below ${min}`,
       });
     if (above)
       found.push({
         givenUp: name,
         direction: 'above',
-        entry: above,
+        entry: asCandidate(above),
         words: `${name} ${shown(value(above))}, above ${max}`,
       });
   }
@@ -72,14 +75,15 @@ export function nearestAlternatives(table: CatalogueTable, query: CatalogueQuery
       found.push({
         givenUp: name,
         direction: 'below',
-        entry: nearest,
+        entry: asCandidate(nearest),
         words: `${name} ${value(nearest)}, below ${query[part]}`,
       });
   }
   for (const part of others) {
     if (query[part] === undefined) continue;
     const [entry] = without(part);
-    if (entry) found.push({ givenUp: part, direction: 'other', entry, words: `without asking for ${part}` });
+    if (entry)
+      found.push({ givenUp: part, direction: 'other', entry: asCandidate(entry), words: `without asking for ${part}` });
   }
   return found;
 }

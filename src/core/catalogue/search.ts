@@ -56,7 +56,8 @@ export function matchingEntries(table: CatalogueTable, query: CatalogueQuery): E
   return found;
 }
 
-function candidateOf(
+/** An entry as a candidate, with its name, its transforms and a verdict from each test. */
+export function candidateOf(
   entry: Entry,
   { payloadBits }: CatalogueQuery,
   tests: readonly ((entry: Entry) => Verdict)[],
