@@ -1,0 +1,20 @@
+import { defineMiddleware } from 'astro:middleware';
+import { currentUser } from './server/auth/current-user.ts';
+import { database, ready } from './server/db/database.ts';
+import { checkOrigin } from './server/http/check-origin.ts';
+import { errorResponse } from './server/http/error-response.ts';
+
+/** Before every route: the database is ready, the change comes from our own pages, and `locals.user` says who asks.
+ *  Headers are set in src/server/main.mjs, where static files pass too. */
+export const onRequest = defineMiddleware(async (context, next) => {
+  const { request, url, locals } = context;
+  locals.user = null;
+  try {
+    await ready();
+    checkOrigin(request, url.origin);
+    locals.user = await currentUser(database(), request);
+  } catch (error) {
+    return errorResponse(error, `${request.method} ${url.pathname}`);
+  }
+  return next();
+});

@@ -1,0 +1,4 @@
+import type { APIRoute } from 'astro';
+import { openApiDocument } from '@/server/http/openapi.ts';
+
+export const GET: APIRoute = () => Response.json(openApiDocument());

@@ -1,0 +1,88 @@
+// What the environment says, checked once before anything is loaded. Plain JavaScript, because the production entry
+// and `npm start` run it before any TypeScript is built.
+import { randomBytes } from 'node:crypto';
+import { chmodSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { join, resolve } from 'node:path';
+
+const loopbackHosts = ['127.0.0.1', '::1', 'localhost'];
+
+/** A setting that cannot be used; the message names it, what was given and what would be accepted. */
+export class SettingError extends Error {}
+
+/** @param {string} name @param {unknown} given @param {string} accepted @returns {never} */
+function refuse(name, given, accepted) {
+  throw new SettingError(`${name}: got ${JSON.stringify(given)}; accepted is ${accepted}.`);
+}
+
+/** Reads HOST, PORT, DATA_DIR, PUBLIC_URL, AUTH_SECRET and TRUST_PROXY. Makes the data folder, and in local mode the
+ *  secret in it. What later modules read is written back to process.env: DATA_DIR as an absolute path, AUTH_SECRET.
+ *  @throws SettingError */
+export function prepareEnvironment(env = process.env) {
+  const publicUrl = readPublicUrl(env.PUBLIC_URL);
+  const host = env.HOST ?? '127.0.0.1';
+  if (host === '') refuse('HOST', host, 'an address to listen on, or no setting for 127.0.0.1');
+  if (!publicUrl && !loopbackHosts.includes(host)) {
+    refuse('HOST', host, `${loopbackHosts.join(', ')} in local mode; other addresses need PUBLIC_URL`);
+  }
+  const port = readPort(env.PORT);
+  const dataDir = readDataDir(env.DATA_DIR);
+  env.DATA_DIR = dataDir;
+  env.AUTH_SECRET = publicUrl ? productionSecret(env.AUTH_SECRET) : localSecret(dataDir);
+  return { host, port, dataDir, publicUrl, trustProxy: env.TRUST_PROXY === '1' || env.TRUST_PROXY === 'true' };
+}
+
+/** @param {string | undefined} value */
+function readPublicUrl(value) {
+  if (value === undefined) return undefined;
+  const accepted = 'an https address without a path, such as https://bench.example.org; http only for loopback';
+  if (!URL.canParse(value)) refuse('PUBLIC_URL', value, accepted);
+  const url = new URL(value);
+  const secure = url.protocol === 'https:' || (url.protocol === 'http:' && loopbackHosts.includes(url.hostname));
+  if (!secure || url.pathname !== '/' || url.search !== '' || url.username !== '')
+    refuse('PUBLIC_URL', value, accepted);
+  return url;
+}
+
+/** @param {string | undefined} value */
+function readPort(value) {
+  if (value === undefined) return 4321;
+  if (!/^\d{1,5}$/.test(value) || Number(value) > 65535) refuse('PORT', value, 'a whole number from 0 to 65535');
+  return Number(value);
+}
+
+/** @param {string | undefined} value */
+function readDataDir(value) {
+  // An empty name would make SQLite open a throw-away database.
+  if (value !== undefined && value.trim() === '') {
+    refuse('DATA_DIR', value, 'a folder for the database, or no setting for ./data');
+  }
+  const dataDir = resolve(value ?? 'data');
+  try {
+    mkdirSync(dataDir, { recursive: true, mode: 0o700 });
+  } catch (error) {
+    throw new SettingError(`DATA_DIR: ${dataDir} cannot be made or used (${/** @type {Error} */ (error).message}).`);
+  }
+  return dataDir;
+}
+
+/** @param {string | undefined} value */
+function productionSecret(value) {
+  if ((value ?? '').length < 32) {
+    throw new SettingError('AUTH_SECRET: with PUBLIC_URL set, a random secret of at least 32 characters is required.');
+  }
+  return value;
+}
+
+/** The secret of local mode, made once and readable by its owner alone. @param {string} dataDir */
+function localSecret(dataDir) {
+  const file = join(dataDir, 'secret');
+  try {
+    writeFileSync(file, `${randomBytes(48).toString('base64url')}\n`, { flag: 'wx', mode: 0o600 });
+  } catch (error) {
+    if (/** @type {NodeJS.ErrnoException} */ (error).code !== 'EEXIST') throw error;
+    chmodSync(file, 0o600);
+  }
+  const secret = readFileSync(file, 'utf8').trim();
+  if (secret.length < 32) throw new SettingError(`${file}: holds no secret; remove it and a new one is made.`);
+  return secret;
+}

@@ -1,0 +1,23 @@
+import type { Context } from '../../context.ts';
+import { inTransaction } from '../../db/database.ts';
+import { Refusal } from '../../refusal.ts';
+import { recordEvent } from '../../repositories/audit-events.ts';
+import { deleteCode as deleteRow, runsUsingCode } from '../../repositories/codes.ts';
+import { codeToWrite } from './get-code.ts';
+
+/** Removes a code; one that a run measures stays, since its results would lose their subject. */
+export async function deleteCode(context: Context, codeId: string): Promise<void> {
+  const { projectId, name, fingerprint } = await codeToWrite(context, codeId);
+  await inTransaction(context.db, async (trx) => {
+    const runs = await runsUsingCode(trx, codeId);
+    if (runs > 0) {
+      throw new Refusal(
+        'in-use',
+        `${runs === 1 ? 'One run measures' : `${runs} runs measure`} this code, so it stays.`,
+      );
+    }
+    await deleteRow(trx, codeId);
+    const content = { name, fingerprint };
+    await recordEvent(trx, context.caller, { projectId, kind: 'code.deleted', subject: codeId, content });
+  });
+}

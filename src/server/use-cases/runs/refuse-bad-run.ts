@@ -1,0 +1,34 @@
+import type { NewRun } from '@/api/runs.ts';
+import { badFields } from '../../refusal.ts';
+
+const largestIndex = 1e9;
+
+/** What the schema cannot see: codes of the project, and figures that must fit each other.
+ *  @param lengths n of each code of the project that the points name.
+ *  @throws Refusal naming every bad field. */
+export function refuseBadRun(run: NewRun, lengths: ReadonlyMap<string, number>): void {
+  const fields: Record<string, string> = {};
+  if (run.place !== 'browser') fields.place = '"browser"; this server does not compute shards itself yet';
+  if (run.stopping.maxFrames / run.framesPerShard > largestIndex) {
+    fields.framesPerShard = `at least ${Math.ceil(run.stopping.maxFrames / largestIndex)} for so many frames`;
+  }
+  const seen = new Map<string, number>();
+  run.points.forEach((point, i) => {
+    const n = lengths.get(point.codeId);
+    if (n === undefined) {
+      fields[`points.${i}.codeId`] = 'the id of a code of this project';
+      return;
+    }
+    if (point.channel.kind === 'stratum' && point.channel.weight > n) {
+      fields[`points.${i}.channel.weight`] = `a whole number from 0 to ${n}, the code's length`;
+    }
+    // The sum of squared bit errors of a shard must stay an exact integer.
+    const mostFrames = Math.floor(Number.MAX_SAFE_INTEGER / n ** 2);
+    if (run.framesPerShard > mostFrames) fields.framesPerShard = `at most ${mostFrames} for a code of length ${n}`;
+    const key = JSON.stringify([point.codeId, point.channel, point.decoder]);
+    const twin = seen.get(key);
+    if (twin !== undefined) fields[`points.${i}`] = `a point that differs from point ${twin}`;
+    else seen.set(key, i);
+  });
+  if (Object.keys(fields).length > 0) throw badFields(fields);
+}
