@@ -88,10 +88,18 @@ export function atLeast(planes: readonly V128[], threshold: number): V128 {
 }
 
 /** The same with a threshold of each frame's own, or one known at run time only, as planes. */
-export function atLeastPlanes(planes: readonly V128[], threshold: readonly V128[]): V128 {
-  let met: V128 = v128.ones;
-  planes.forEach((digit, k) => {
-    met = v128.bitselect(v128.and(digit, met), v128.or(digit, met), threshold[k]!);
-  });
-  return met;
+export const atLeastPlanes = (planes: readonly V128[], threshold: readonly V128[]): V128 =>
+  comparePlanes(planes, threshold, v128.ones);
+
+/** Frames whose number is above the threshold. */
+export const abovePlanes = (planes: readonly V128[], threshold: readonly V128[]): V128 =>
+  comparePlanes(planes, threshold, v128.zero);
+
+/** Digit by digit from the lowest: the higher digit decides where they differ. `tie` is the answer at equality. The
+ *  threshold has as many digits as the number, or more. */
+function comparePlanes(planes: readonly V128[], threshold: readonly V128[], tie: V128): V128 {
+  return threshold.reduce((met, limit, k) => {
+    const digit = planes[k];
+    return digit ? v128.bitselect(v128.and(digit, met), v128.or(digit, met), limit) : v128.andnot(met, limit);
+  }, tie);
 }

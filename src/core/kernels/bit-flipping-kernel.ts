@@ -44,7 +44,12 @@ export function bitFlippingKernel(plan: GraphPlan, rule: FlippingRule): KernelIm
     positions: positions.space,
     word: bitLanes(arrays.word),
     clear: emitClear(m, H.cols, arrays.word),
-    filled: emitFilled(m, plan, arrays.word, arrays.received),
+    filled: emitFilled(
+      m,
+      plan,
+      arrays.word,
+      arrays.received === null ? [] : [{ array: arrays.received, twice: false }],
+    ),
     syndrome: emitSyndrome(m, plan, rows, arrays),
     iterate: emitFlips(m, plan, columns, arrays, rule),
     ...emitWeighing(m, layout, H.cols, arrays.word),

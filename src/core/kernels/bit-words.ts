@@ -1,9 +1,20 @@
 /** The words of 128 frames, a bit each, and the passes over them that the hard-decision kernels share. */
 
-import { base, type FunctionRef, i32, type ModuleBuilder, memoryCopy, v128 } from './assembler/index.ts';
+import {
+  base,
+  type FunctionBuilder,
+  type FunctionRef,
+  i32,
+  type ModuleBuilder,
+  memoryCopy,
+  type Statement,
+  sequence,
+  type V128,
+  v128,
+} from './assembler/index.ts';
 import { eachVector } from './conductor.ts';
 import type { GraphPlan } from './graph-plan.ts';
-import { type SideTables, walk } from './graph-walk.ts';
+import { type Place, type SideTables, walk } from './graph-walk.ts';
 import { control, vectorBytes } from './memory-layout.ts';
 import { at, parityInto, put } from './votes.ts';
 
@@ -25,16 +36,31 @@ export function emitClear(m: ModuleBuilder, n: number, word: number): FunctionRe
   });
 }
 
-/** Spreads what was drawn into the word: the second copy of a circulant, and the received word where it is kept. */
-export function emitFilled(m: ModuleBuilder, plan: GraphPlan, word: number, received: number | null): FunctionRef {
+/** An array that takes the drawn words of fresh lanes; kept twice over, in a circulant, where `twice`. */
+export interface TakingArray {
+  array: number;
+  twice: boolean;
+}
+
+/** Spreads what was drawn into the word: the second copy of a circulant, and the arrays that begin as the word. */
+export function emitFilled(
+  m: ModuleBuilder,
+  plan: GraphPlan,
+  word: number,
+  takers: readonly TakingArray[],
+): FunctionRef {
   const bytes = vectorBytes * plan.H.cols;
+  const double = (array: number) => memoryCopy(i32.of(array + bytes), i32.of(array), i32.of(bytes));
   return m.func(nothing, (f) => {
     const i = f.local('i32');
     const fresh = f.local('v128');
-    if (plan.circulant) f.emit(memoryCopy(i32.of(word + bytes), i32.of(word), i32.of(bytes)));
-    if (received === null) return;
-    const taken = v128.bitselect(v128.load(i, word), v128.load(i, received), fresh);
-    f.emit(fresh.set(mask(control.fresh)), eachVector(i, plan.H.cols, [v128.store(i, taken, received)]));
+    if (plan.circulant) f.emit(double(word));
+    f.emit(fresh.set(mask(control.fresh)));
+    for (const { array, twice } of takers) {
+      const taken = v128.bitselect(v128.load(i, word), v128.load(i, array), fresh);
+      f.emit(eachVector(i, plan.H.cols, [v128.store(i, taken, array)]));
+      if (plan.circulant && twice) f.emit(double(array));
+    }
   });
 }
 
@@ -56,28 +82,22 @@ export function emitSyndrome(
       ]),
       v128.store(base, failing, control.failing),
     );
-    const i = f.local('i32');
-    const wrong = f.local('v128');
-    f.emit(
-      eachVector(i, plan.H.cols, [wrong.set(v128.or(wrong, v128.load(i, word)))]),
-      v128.store(base, wrong, control.wrong),
-    );
+    f.emit(noteWrong(f, plan.H.cols, word));
   });
 }
 
-/** Stores a vector, in both copies of an array that is kept twice over. */
-export function putTwice(
-  plan: GraphPlan,
-  place: Parameters<typeof put>[0],
-  array: number,
-  count: number,
-  value: Parameters<typeof put>[2],
-) {
-  const once = put(place, array, value);
-  return plan.circulant ? both(once, put(place, array + vectorBytes * count, value)) : once;
+/** Sets `wrong`: the lanes with a one anywhere in the word. */
+export function noteWrong(f: FunctionBuilder, n: number, word: number): Statement {
+  const i = f.local('i32');
+  const wrong = f.local('v128');
+  return sequence(
+    eachVector(i, n, [wrong.set(v128.or(wrong, v128.load(i, word)))]),
+    v128.store(base, wrong, control.wrong),
+  );
 }
 
-const both = (a: ReturnType<typeof put>, b: ReturnType<typeof put>): ReturnType<typeof put> => ({
-  type: 'void',
-  code: [a.code, b.code],
-});
+/** Stores a vector, in both copies of an array that is kept twice over. */
+export function putTwice(plan: GraphPlan, place: Place, array: number, count: number, value: V128): Statement {
+  const once = put(place, array, value);
+  return plan.circulant ? sequence(once, put(place, array + vectorBytes * count, value)) : once;
+}

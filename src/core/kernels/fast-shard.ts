@@ -1,15 +1,10 @@
 import { hardCrossover } from '../channels/awgn.ts';
-import type { DecoderSpec } from '../decoders/decoder-spec.ts';
-import { flippingThresholds, iterationCap } from '../decoders/settings.ts';
-import { columnDegrees } from '../decoders/tanner-graph.ts';
 import { streamState } from '../simulation/random.ts';
 import type { RunSpec } from '../simulation/run-spec.ts';
 import type { Tally } from '../simulation/tally.ts';
 import { bscWeightTable } from '../simulation/weight-table.ts';
-import { bitFlippingKernel } from './bit-flipping-kernel.ts';
 import { begin, type CompiledKernel, type Draws, giveBack, kernelOf, readTally } from './compiled-kernel.ts';
-import { planGraph } from './graph-plan.ts';
-import type { KernelImage } from './kernel-image.ts';
+import { emitterFor } from './kernel-for.ts';
 import { simdAvailable } from './simd-available.ts';
 
 export interface FastShardOptions {
@@ -51,26 +46,6 @@ function kernelFor({ H, decoder, channel }: RunSpec): Promise<CompiledKernel> | 
   if (channel.kind === 'bec' && decoder.kind !== 'peeling') return null;
   const emit = emitterFor(decoder, H);
   return emit && kernelOf(H, JSON.stringify(decoder), emit);
-}
-
-/** Settings are checked here, before anything is compiled. */
-function emitterFor(decoder: DecoderSpec, H: RunSpec['H']): (() => KernelImage) | null {
-  const degrees = columnDegrees(H);
-  const cap = iterationCap(decoder);
-  switch (decoder.kind) {
-    case 'majority-logic': {
-      const thresholds = degrees.map((d) => Math.floor(d / 2) + 1);
-      const rule = { cap, remembersReceived: false, stopsWhenStuck: false };
-      return () => bitFlippingKernel(planGraph(H, [thresholds]), rule);
-    }
-    case 'bit-flipping': {
-      const thresholds = flippingThresholds(degrees, decoder);
-      const rule = { cap, remembersReceived: false, stopsWhenStuck: true };
-      return () => bitFlippingKernel(planGraph(H, [thresholds]), rule);
-    }
-    default:
-      return null;
-  }
 }
 
 /** Work between two pauses. */

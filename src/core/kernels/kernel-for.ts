@@ -1,0 +1,62 @@
+import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import type { DecoderSpec } from '../decoders/decoder-spec.ts';
+import { flippingThresholds, iterationCap, messageThresholds } from '../decoders/settings.ts';
+import { columnDegrees } from '../decoders/tanner-graph.ts';
+import { bitFlippingKernel } from './bit-flipping-kernel.ts';
+import { gallagerKernel } from './gallager-kernel.ts';
+import { planGraph } from './graph-plan.ts';
+import type { KernelImage } from './kernel-image.ts';
+
+type Emitter = () => KernelImage;
+type Of<K extends DecoderSpec['kind']> = Extract<DecoderSpec, { kind: K }>;
+
+/** What emits the kernel of a decoder for a matrix; null where there is none. Settings are checked here, before anything
+ *  is emitted.
+ *  @throws ParamError on settings that the matrix does not allow. */
+export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | null {
+  const degrees = columnDegrees(H);
+  const cap = iterationCap(decoder);
+  switch (decoder.kind) {
+    case 'majority-logic': {
+      const thresholds = degrees.map((d) => Math.floor(d / 2) + 1);
+      return () =>
+        bitFlippingKernel(planGraph(H, [thresholds]), { cap, remembersReceived: false, stopsWhenStuck: false });
+    }
+    case 'bit-flipping': {
+      const thresholds = flippingThresholds(degrees, decoder);
+      return () =>
+        bitFlippingKernel(planGraph(H, [thresholds]), { cap, remembersReceived: false, stopsWhenStuck: true });
+    }
+    case 'gradient-descent':
+      return gradientDescent(H, degrees, decoder, cap);
+    case 'gallager-a':
+    case 'gallager-b':
+      return gallager(H, degrees, decoder, cap);
+    default:
+      return null;
+  }
+}
+
+/** Δ_j = ±1 + d_j − 2·(failing checks) is below θ when the failing checks, and one more where the bit differs from the
+ *  received one, are more than (1 + d_j − θ)/2. */
+function gradientDescent(
+  H: SparseMatrix,
+  degrees: Uint32Array,
+  spec: Of<'gradient-descent'>,
+  cap: number,
+): Emitter | null {
+  if (spec.flips === 'single') return null;
+  const theta = spec.threshold ?? -0.5;
+  const least = degrees.map((d) => Math.min(d + 2, Math.max(0, Math.floor((1 + d - theta) / 2) + 1)));
+  return () => bitFlippingKernel(planGraph(H, [least]), { cap, remembersReceived: true, stopsWhenStuck: true });
+}
+
+function gallager(H: SparseMatrix, degrees: Uint32Array, spec: Of<'gallager-a' | 'gallager-b'>, cap: number): Emitter {
+  const thresholds = messageThresholds(degrees, spec);
+  const half = degrees.map((d) => Math.ceil(d / 2));
+  const changes = thresholds.length > 1;
+  const messagesAreDecisions = !changes && thresholds[0]!.every((b, j) => b === half[j]);
+  // Thresholds that change are given by iteration and the same for all columns.
+  const schedule = changes ? thresholds.map((list) => list[0]!) : null;
+  return () => gallagerKernel(planGraph(H, [thresholds[0]!, half]), { cap, schedule, messagesAreDecisions });
+}
