@@ -3,6 +3,7 @@ import { type Column, DataTable } from '@/components/ui/DataTable.tsx';
 import { CurveSwatch } from './CurveSwatch.tsx';
 import type { ChartCurve } from './chart-curve.ts';
 import type { Requirement } from './error-rate-chart/domain.ts';
+import { Figure } from './Figure.tsx';
 import { parameterText, scientific } from './rate-text.ts';
 import { type Verdict, verdictOn } from './requirement.ts';
 
@@ -29,7 +30,7 @@ export function RequirementTable({ curves, requirement }: Props) {
       key: 'curve',
       header: `at p = ${parameterText(p)}`,
       cell: (row) => (
-        <span className="inline-flex items-center gap-2">
+        <span className="inline-grid text-tiny">
           <CurveSwatch style={row.style} />
           {row.label}
         </span>
@@ -41,7 +42,7 @@ export function RequirementTable({ curves, requirement }: Props) {
       kind: 'number',
       cell: (row) => {
         const point = pointOf(row);
-        return <span className="whitespace-nowrap">{point ? scientific(point[kind].upper, 2, 'up') : 'no point'}</span>;
+        return <Figure text={point ? scientific(point[kind].upper, 2, 'up') : 'no point'} />;
       },
     },
     {
@@ -50,9 +51,12 @@ export function RequirementTable({ curves, requirement }: Props) {
       cell: (row) => {
         const point = pointOf(row);
         const verdict = verdictOn(point?.[kind], target);
-        const word = verdict === 'no point' ? 'thin' : verdict;
-        const thin = point && isThin(point) && verdict !== 'no point' ? ', thin' : '';
-        return <span className={`whitespace-nowrap font-semibold ${LOOK[verdict]}`}>{word + thin}</span>;
+        return (
+          <span className={`inline-grid font-semibold ${LOOK[verdict]}`}>
+            {point && <span>{verdict}</span>}
+            {(!point || isThin(point)) && <span className="text-thin">thin</span>}
+          </span>
+        );
       },
     },
   ];

@@ -42,7 +42,7 @@ export function CompareBench({ runs, curves, requirements }: Props) {
   const title = `${kind === 'fer' ? 'Frame' : 'Bit'} error rates compared`;
 
   return (
-    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem]">
+    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] wide:grid-rows-[auto_1fr]">
       <div className="min-w-0">
         <h1 className="mb-3">{title}</h1>
         <ErrorRateChart

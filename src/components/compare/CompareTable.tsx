@@ -6,6 +6,7 @@ import { Grade } from '@/components/ui/Grade.tsx';
 import { counted } from '@/components/ui/numbers.ts';
 import { CurveSwatch } from '../charts/CurveSwatch.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
+import { Figure } from '../charts/Figure.tsx';
 import { intervalText, parameterText, rateText, scientific } from '../charts/rate-text.ts';
 import { comparisonGrid, type GridRow, uncodedColumns } from './comparison-grid.ts';
 
@@ -35,7 +36,11 @@ export function CompareTable({ curves, kind }: Props) {
         key: `uncoded-${n}`,
         header: <span className="font-normal">uncoded{kind === 'fer' && <span className="block">n = {n}</span>}</span>,
         kind: 'number',
-        cell: (row) => <span className="whitespace-nowrap text-quiet">{scientific(uncodedRate(kind, row.p, n))}</span>,
+        cell: (row) => (
+          <span className="text-quiet">
+            <Figure text={scientific(uncodedRate(kind, row.p, n))} />
+          </span>
+        ),
       }),
     ),
   ];
@@ -76,8 +81,12 @@ function Cell({ point, kind }: { point: CurvePoint | null; kind: RateKind }) {
   const counts = `${counted(point.frameErrors, 'frame error')} in ${counted(point.frames, 'frame')}`;
   return (
     <span className="inline-grid whitespace-nowrap" title={counts}>
-      <span>{rateText(rate)}</span>
-      {rate.value !== null && <span className="text-quiet text-tiny">{intervalText(rate)}</span>}
+      <Figure text={rateText(rate)} />
+      {rate.value !== null && (
+        <span className="text-quiet text-tiny">
+          <Figure text={intervalText(rate)} />
+        </span>
+      )}
       {isThin(point) && <span className="font-sans font-semibold text-thin text-tiny">thin</span>}
     </span>
   );

@@ -26,7 +26,7 @@ export function CurvePicker({ runs, curves, chosen, onChange }: Props) {
   const toggle = (key: string, isChosen: boolean) =>
     onChange(isChosen ? [...chosenKeys, key] : chosenKeys.filter((other) => other !== key));
   return (
-    <section className="grid gap-2" aria-label="Curves to overlay">
+    <section className="grid gap-2" aria-label="Curves to overlay" data-screen-only>
       <h2>Curves</h2>
       {curves.length > FILTER_FROM && (
         <TextField label="Filter" value={filter} onChange={(event) => setFilter(event.target.value)} />

@@ -5,6 +5,7 @@ import { EmptyState } from '@/components/ui/EmptyState.tsx';
 import { TextField } from '@/components/ui/fields.tsx';
 import { wholeNumber } from '@/components/ui/numbers.ts';
 import { paths } from '@/paths.ts';
+import { PartError } from './PartError.tsx';
 
 interface Props {
   projectId: string;
@@ -52,11 +53,7 @@ export function CodeChoice({ projectId, codes, chosen, error, onChange }: Props)
           </li>
         ))}
       </ul>
-      {error && (
-        <p className="mt-1 text-fail text-tiny">
-          <span className="font-semibold">Not accepted:</span> {error}
-        </p>
-      )}
+      <PartError text={error} />
     </div>
   );
 }

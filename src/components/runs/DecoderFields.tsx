@@ -34,7 +34,7 @@ export function DecoderFields({ kind, draft, errors, onChange }: Props) {
           onChange={(event) => onChange({ isChosen: event.target.checked })}
         />
         <span>
-          <span className="font-semibold first-letter:uppercase">{decoderName({ kind })}</span>
+          <span className="inline-block font-semibold first-letter:uppercase">{decoderName({ kind })}</span>
           <span className="block text-quiet text-tiny">{ABOUT[kind]}</span>
         </span>
       </label>

@@ -9,6 +9,7 @@ import { counted } from '@/components/ui/numbers.ts';
 import { paths } from '@/paths.ts';
 import { CodeChoice } from './CodeChoice.tsx';
 import { DecoderFields } from './DecoderFields.tsx';
+import { PartError } from './PartError.tsx';
 import { type FieldErrors, type Judged, OFFERED_DECODERS, serverErrors } from './run-draft.ts';
 import { StoppingFields } from './StoppingFields.tsx';
 import { SweepFields } from './SweepFields.tsx';
@@ -114,7 +115,7 @@ function countText({ points, mostShards }: Judged, codes: number): string {
 }
 
 function focusFirstError(form: HTMLFormElement | null): void {
-  requestAnimationFrame(() => form?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus());
+  requestAnimationFrame(() => form?.querySelector<HTMLElement>('[aria-invalid="true"], [data-error]')?.focus());
 }
 
 function Part({ title, error, children }: { title: string; error?: string | undefined; children: ReactNode }) {
@@ -122,11 +123,7 @@ function Part({ title, error, children }: { title: string; error?: string | unde
     <fieldset className="min-w-0">
       <legend className="mb-2 w-full border-ink border-b pb-1 font-semibold text-lead">{title}</legend>
       {children}
-      {error && (
-        <p className="mt-1 text-fail text-tiny">
-          <span className="font-semibold">Not accepted:</span> {error}
-        </p>
-      )}
+      <PartError text={error} />
     </fieldset>
   );
 }

@@ -6,6 +6,7 @@ import { Grade } from '@/components/ui/Grade.tsx';
 import { wholeNumber } from '@/components/ui/numbers.ts';
 import { CurveSwatch } from '../charts/CurveSwatch.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
+import { Figure } from '../charts/Figure.tsx';
 import { intervalText, parameterText, rateText } from '../charts/rate-text.ts';
 
 interface Props {
@@ -54,20 +55,20 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
       key: 'fer',
       header: 'FER',
       kind: 'number',
-      cell: ({ measured }) => <NoWrap>{measured ? rateText(measured.fer) : '–'}</NoWrap>,
+      cell: ({ measured }) => (measured ? <Figure text={rateText(measured.fer)} /> : '–'),
       sortBy: ({ measured }) => measured?.fer.value ?? measured?.fer.upper ?? 2,
     },
     {
       key: 'interval',
       header: 'interval',
       kind: 'number',
-      cell: ({ measured }) => <NoWrap>{measured ? intervalText(measured.fer) : '–'}</NoWrap>,
+      cell: ({ measured }) => (measured ? <Figure text={intervalText(measured.fer)} /> : '–'),
     },
     {
       key: 'ber',
       header: 'BER',
       kind: 'number',
-      cell: ({ measured }) => <NoWrap>{measured ? rateText(measured.ber) : '–'}</NoWrap>,
+      cell: ({ measured }) => (measured ? <Figure text={rateText(measured.ber)} /> : '–'),
       sortBy: ({ measured }) => measured?.ber.value ?? measured?.ber.upper ?? 2,
     },
     count('undetected', 'undetected', (point) => point.tally.undetected),
@@ -96,7 +97,7 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
     },
   ];
   return (
-    <div className="grid gap-2">
+    <div className="grid gap-2 text-tiny">
       <DataTable
         caption="Points"
         showCaption
@@ -106,7 +107,7 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
         selected={({ point }) => point.id === selectedId}
       />
       {points.length > MOST_ROWS && (
-        <p className="text-quiet text-tiny">
+        <p className="text-quiet">
           The first {MOST_ROWS} of {wholeNumber(points.length)} points; the file has them all.
         </p>
       )}
@@ -141,8 +142,4 @@ function CurveName({ chartCurve, fallback }: { chartCurve: ChartCurve | undefine
       {chartCurve.label}
     </span>
   );
-}
-
-function NoWrap({ children }: { children: React.ReactNode }) {
-  return <span className="whitespace-nowrap">{children}</span>;
 }

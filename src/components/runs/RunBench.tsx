@@ -59,7 +59,7 @@ export function RunBench({ projectId, run, points, panel }: Props) {
     );
 
   return (
-    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem]">
+    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] wide:grid-rows-[auto_1fr]">
       <div className="min-w-0">
         <h1>{run.name}</h1>
         <p className="mt-1 mb-3 text-quiet">{subtitle(curves.length, points)}</p>

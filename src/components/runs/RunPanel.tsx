@@ -1,11 +1,11 @@
 import { useState } from 'react';
 import type { Point, Run } from '@/api/runs.ts';
-import type { RunDriverHandle } from '@/client/use-run-driver.ts';
+import type { DriverView, RunDriverHandle } from '@/client/use-run-driver.ts';
 import { Button } from '@/components/ui/Button.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
 import { counted } from '@/components/ui/numbers.ts';
 import { Progress } from '@/components/ui/Progress.tsx';
-import { DRIVER_WORD, progressText, rateText, sumText } from './run-progress.ts';
+import { DRIVER_WORD, progressText, rateText, STATE_WORD, sumText } from './run-progress.ts';
 import { StopDialog } from './StopDialog.tsx';
 
 interface Props {
@@ -20,7 +20,7 @@ export function RunPanel({ run, points, driver }: Props) {
   const { status } = driver;
   const isOver = run.state === 'finished' || run.state === 'stopped' || status === 'finished' || status === 'stopped';
   const isAtWork = status === 'running' || status === 'pausing' || status === 'waiting-for-server';
-  const word = isOver && !isAtWork ? (run.state === 'stopped' ? 'Stopped' : 'Finished') : DRIVER_WORD[status];
+  const word = headWord(run, status);
   const fraction = run.state === 'finished' ? 1 : driver.fractionDone;
   return (
     <section className="grid gap-2 border border-rule bg-sheet px-4 py-3" aria-label="Progress">
@@ -74,6 +74,12 @@ export function RunPanel({ run, points, driver }: Props) {
       />
     </section>
   );
+}
+
+/** The stored state, unless this page is at work on the run or the run was left under way. */
+function headWord(run: Run, status: DriverView['status']): string {
+  if (status !== 'idle') return DRIVER_WORD[status];
+  return run.state === 'running' ? DRIVER_WORD.idle : STATE_WORD[run.state];
 }
 
 function MainButton({ run, driver }: { run: Run; driver: RunDriverHandle }) {

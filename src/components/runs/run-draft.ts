@@ -115,6 +115,8 @@ export function judgeDraft(draft: RunDraft, proposedName: string): Judged {
   const parsed = newRunSchema.safeParse(candidate);
   for (const issue of parsed.error?.issues ?? [])
     Object.assign(errors, errorAt(issue.path.map(String), candidate.points));
+  // Without codes there is no proposed name yet; that is told at the codes.
+  if (draft.codeIds.length === 0 && draft.name.trim() === '') delete errors.name;
   const isFine = parsed.success && Object.keys(errors).length === 0;
   return {
     run: isFine ? parsed.data : null,

@@ -3,6 +3,7 @@ import { isThin } from '@/client/curves/curve.ts';
 import { counted, wholeNumber } from '@/components/ui/numbers.ts';
 import { CurveSwatch } from '../CurveSwatch.tsx';
 import type { ChartCurve } from '../chart-curve.ts';
+import { Figure } from '../Figure.tsx';
 import { intervalText, levelText, parameterText, rateText } from '../rate-text.ts';
 
 /** A point in one sentence, for the status line that screen readers hear. */
@@ -57,7 +58,9 @@ function Line({ label, value }: { label: string; value: string }) {
   return (
     <>
       <dt className="font-sans text-quiet">{label}</dt>
-      <dd className="text-right">{value}</dd>
+      <dd className="text-right">
+        <Figure text={value} />
+      </dd>
     </>
   );
 }
