@@ -34,6 +34,18 @@ export default defineConfig({
       },
       {
         extends: true,
+        test: { name: 'clients', include: ['tests/clients/**/*.test.ts'], environment: 'node', testTimeout: 120_000 },
+      },
+      {
+        extends: true,
+        test: { name: 'browser', include: ['tests/browser/**/*.test.ts'], environment: 'node', testTimeout: 300_000 },
+      },
+      {
+        extends: true,
+        test: { name: 'long', include: ['tests/long/**/*.test.ts'], environment: 'node', testTimeout: 3_600_000 },
+      },
+      {
+        extends: true,
         esbuild: { jsx: 'automatic' },
         test: { name: 'components', include: ['tests/components/**/*.test.tsx'], environment: 'happy-dom' },
       },
