@@ -48,18 +48,42 @@ async function vitest(title, project) {
   totals.failed += numFailedTests + numPendingTests || (good ? 0 : 1);
 }
 
+/** Installs Debian packages where this process may; what is missing afterwards is for the caller to see. */
+function install(packages) {
+  const mayInstall = process.getuid?.() === 0 && spawnSync('apt-get', ['--version']).status === 0;
+  if (!mayInstall) return;
+  console.log(`Installing ${packages.join(', ')} with apt-get (once).`);
+  const options = {
+    stdio: ['ignore', 'ignore', 'inherit'],
+    env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' },
+  };
+  spawnSync('apt-get', ['update', '-qq'], options);
+  spawnSync('apt-get', ['install', '-y', '-qq', '--no-install-recommends', ...packages], options);
+}
+
 function ensureChromium() {
   if (existsSync('/usr/bin/chromium')) return true;
-  const mayInstall = process.getuid?.() === 0 && spawnSync('apt-get', ['--version']).status === 0;
-  if (mayInstall) {
-    console.log('Installing chromium with apt-get (once).');
-    spawnSync('apt-get', ['update', '-qq'], { stdio: 'ignore' });
-    spawnSync('apt-get', ['install', '-y', '-qq', 'chromium'], { stdio: ['ignore', 'ignore', 'inherit'] });
-  }
+  install(['chromium']);
   if (existsSync('/usr/bin/chromium')) return true;
   console.error('The browser tests need Chromium: apt-get install chromium');
   totals.failed += 1;
   return false;
+}
+
+/** The programs that load our exports: CI installs them; elsewhere what is missing is said, and how to add it. */
+function ensureClients() {
+  const wanted = [
+    ['python3-scipy', '/usr/lib/python3/dist-packages/scipy'],
+    ['octave', '/usr/bin/octave-cli'],
+    ['gap-core', '/usr/bin/gap'],
+    ['gcc', '/usr/bin/gcc'],
+  ];
+  const missing = () => wanted.filter(([, path]) => !existsSync(path)).map(([name]) => name);
+  if (process.env.CI && missing().length > 0) install(missing());
+  const left = missing();
+  if (left.length > 0)
+    console.log(`Left out: loading exports with ${left.join(', ')}. To add: apt-get install ${left.join(' ')}`);
+  return left.length < wanted.length;
 }
 
 await ensurePackages(root);
@@ -69,6 +93,7 @@ await check('build', process.execPath, ['src/server/start/build.mjs']);
 await vitest('engine', 'core');
 await vitest('server and client', 'server');
 await vitest('components', 'components');
+if (ensureClients()) await vitest('programs that load our files', 'clients');
 if (ensureChromium()) await vitest('browser', 'browser');
 
 rmSync(reports, { recursive: true, force: true });
