@@ -37,8 +37,8 @@ export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | nul
   }
 }
 
-/** Δ_j = ±1 + d_j − 2·(failing checks) is below θ when the failing checks, and one more where the bit differs from the
- *  received one, are more than (1 + d_j − θ)/2. */
+/** With v the failing checks, and one more where the bit differs from the received one, Δ_j = 1 + d_j − 2v. A whole
+ *  number is below θ when it is at most ⌈θ⌉ − 1: when v ≥ (2 + d_j − ⌈θ⌉)/2. */
 function gradientDescent(
   H: SparseMatrix,
   degrees: Uint32Array,
@@ -46,8 +46,8 @@ function gradientDescent(
   cap: number,
 ): Emitter | null {
   if (spec.flips === 'single') return null;
-  const theta = spec.threshold ?? -0.5;
-  const least = degrees.map((d) => Math.min(d + 2, Math.max(0, Math.floor((1 + d - theta) / 2) + 1)));
+  const bound = Math.ceil(spec.threshold ?? -0.5);
+  const least = degrees.map((d) => Math.min(d + 2, Math.max(0, Math.ceil((2 + d - bound) / 2))));
   return () => bitFlippingKernel(planGraph(H, [least]), { cap, remembersReceived: true, stopsWhenStuck: true });
 }
 
