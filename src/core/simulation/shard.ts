@@ -1,5 +1,6 @@
 import { ParamError } from '../errors.ts';
 import { rank } from '../gf2/rank.ts';
+import { fastShard, simdAvailable } from '../kernels/index.ts';
 import { referenceShard } from './reference-shard.ts';
 import type { RunSpec } from './run-spec.ts';
 import type { Tally } from './tally.ts';
@@ -27,10 +28,29 @@ export async function runShard(
 ): Promise<Tally> {
   checkCall(index, kernel);
   validateSpec(spec);
-  return drive(referenceShard(withRate(spec), index), options);
+  const complete = withRate(spec);
+  const fast = kernel === 'wasm' ? fastShard(complete, index, options) : null;
+  return fast ?? drive(referenceShard(complete, index), options);
 }
 
-async function drive(shard: AsyncGenerator<number, Tally>, { signal, pause }: ShardOptions): Promise<Tally> {
+/** Which path `runShard` takes for a spec, and why. Makes the kernel where there is one, and decodes a frame.
+ *  @throws ParamError on a spec out of range. */
+export async function describeKernel(spec: RunSpec): Promise<{ kernel: Kernel; reason: string }> {
+  validateSpec(spec);
+  if (!simdAvailable())
+    return { kernel: 'reference', reason: 'this engine has no WebAssembly SIMD, so frames are decoded one at a time' };
+  const fast = fastShard({ ...withRate(spec), framesPerShard: 1 }, 0);
+  if (!fast)
+    return {
+      kernel: 'reference',
+      reason: `no fast kernel for ${spec.decoder.kind} on ${spec.channel.kind}: frames are decoded one at a time`,
+    };
+  await fast;
+  return { kernel: 'wasm', reason: `a kernel made for this matrix and ${spec.decoder.kind}` };
+}
+
+/** Runs a shard that hands back control now and then, to its end or until it is stopped. */
+export async function drive<T>(shard: AsyncGenerator<unknown, T>, { signal, pause }: ShardOptions): Promise<T> {
   for (;;) {
     signal?.throwIfAborted();
     const step = await shard.next();
