@@ -2,6 +2,7 @@ import { type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
 import { LimitError } from '../errors.ts';
 import { PACKED_LIMIT_BYTES } from './bit-matrix.ts';
 import { cyclicRank } from './cyclic.ts';
+import { fourRussiansRank } from './four-russians.ts';
 import { peel } from './peel.ts';
 
 /** Rank over GF(2). Matrices whose rows are closed under the cyclic shift of the columns are ranked by a polynomial gcd,
@@ -11,11 +12,14 @@ export function rank(H: SparseMatrix): number {
   return cyclicRank(H) ?? eliminationRank(H);
 }
 
+/** Below this many ones the kernel is not worth its memory. */
+const KERNEL_FROM_ONES = 2000;
+
 /** Rank by sparse pre-elimination, then packed elimination of what is left; assumes nothing of the matrix. */
 export function eliminationRank(H: SparseMatrix): number {
   const { pivots, core } = peel(H);
-  // A basis holds vectors of the shorter side, so its size is bounded by the square of that side.
-  return pivots + insertionRank(core.cols <= core.rows ? core : transpose(core));
+  const upright = core.cols <= core.rows ? core : transpose(core);
+  return pivots + (core.colIndex.length < KERNEL_FROM_ONES ? insertionRank(upright) : fourRussiansRank(upright));
 }
 
 /** Rows reduced together, so that each basis row is fetched once for all of them. */

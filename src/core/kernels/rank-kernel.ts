@@ -19,20 +19,11 @@ export interface RankKernel {
   addRow(target: number, source: number, from: number, to: number): void;
   /** Exchanges two rows over bytes [from, to). */
   swapRows(a: number, b: number, from: number, to: number): void;
-  /** Fills table entries [half, 2·half) with entries [0, half) plus the row at `source`, over bytes [from, to). */
-  doubleTable(table: number, entryBytes: number, half: number, source: number, from: number, to: number): void;
+  /** Fills table entries [half, 2·half), each a row, with entries [0, half) plus the row at `source`, from byte `from` on. */
+  doubleTable(table: number, rowBytes: number, half: number, source: number, from: number): void;
   /** Adds to each row in [first, end) the four table entries named by the bytes of its word in `windows`, one word a row,
-   *  over bytes [from, to). Entry e of table t lies at tables + (256·t + e)·entryBytes and covers bytes from `from` on. */
-  applyTables(
-    first: number,
-    end: number,
-    rowBytes: number,
-    windows: number,
-    tables: number,
-    entryBytes: number,
-    from: number,
-    to: number,
-  ): void;
+   *  from byte `from` on. Entry e of table t is the row at tables + (256·t + e)·rowBytes. */
+  applyTables(first: number, end: number, rowBytes: number, windows: number, tables: number, from: number): void;
 }
 
 let compiled: WebAssembly.Module | undefined;
@@ -111,36 +102,31 @@ function emitSwapRows(m: ModuleBuilder): void {
 
 function emitDoubleTable(m: ModuleBuilder): void {
   m.func(
-    { params: ['i32', 'i32', 'i32', 'i32', 'i32', 'i32'], results: [] },
+    { params: ['i32', 'i32', 'i32', 'i32', 'i32'], results: [] },
     (f) => {
-      const [table, entryBytes, half, source, from, to] = [0, 1, 2, 3, 4, 5].map((i) => f.param(i, 'i32')) as Six;
+      const [table, rowBytes, half, source, from] = [0, 1, 2, 3, 4].map((i) => f.param(i, 'i32')) as Five;
       const entry = f.local('i32');
       const end = f.local('i32');
       const jump = f.local('i32');
-      const low = f.local('i32');
-      const high = f.local('i32');
       const o = f.local('i32');
       f.emit(
-        jump.set(i32.mul(half, entryBytes)),
+        jump.set(i32.mul(half, rowBytes)),
         entry.set(table),
         end.set(i32.add(table, jump)),
         whileLoop(i32.ltU(entry, end), [
-          // `from` is an offset within the row; table entries begin at that offset.
-          low.set(i32.sub(entry, from)),
-          high.set(i32.add(low, jump)),
           ...along(
             o,
             from,
-            to,
+            rowBytes,
             UNROLLED.map((step) =>
               v128.store(
-                i32.add(high, o),
-                v128.xor(v128.load(i32.add(low, o), step), v128.load(i32.add(source, o), step)),
+                i32.add(i32.add(entry, jump), o),
+                v128.xor(v128.load(i32.add(entry, o), step), v128.load(i32.add(source, o), step)),
                 step,
               ),
             ),
           ),
-          entry.set(i32.add(entry, entryBytes)),
+          entry.set(i32.add(entry, rowBytes)),
         ]),
       );
     },
@@ -150,38 +136,33 @@ function emitDoubleTable(m: ModuleBuilder): void {
 
 function emitApplyTables(m: ModuleBuilder): void {
   m.func(
-    { params: ['i32', 'i32', 'i32', 'i32', 'i32', 'i32', 'i32', 'i32'], results: [] },
+    { params: ['i32', 'i32', 'i32', 'i32', 'i32', 'i32'], results: [] },
     (f) => {
-      const [row, end, rowBytes, windows, tables, entryBytes, from, to] = [0, 1, 2, 3, 4, 5, 6, 7].map((i) =>
-        f.param(i, 'i32'),
-      ) as [...Six, Local<'i32'>, Local<'i32'>];
+      const [row, end, rowBytes, windows, tables, from] = [0, 1, 2, 3, 4, 5].map((i) => f.param(i, 'i32')) as Six;
       const word = f.local('i32');
       const o = f.local('i32');
-      const stop = f.local('i32');
-      const rowShift = f.local('i32');
       const entries = Array.from({ length: TABLES }, () => f.local('i32'));
       const entryOf = (t: number) =>
         i32.add(
           tables,
-          i32.mul(i32.add(t * TABLE_ENTRIES, i32.and(i32.shrU(word, t * TABLE_BITS), TABLE_ENTRIES - 1)), entryBytes),
+          i32.mul(i32.add(t * TABLE_ENTRIES, i32.and(i32.shrU(word, t * TABLE_BITS), TABLE_ENTRIES - 1)), rowBytes),
         );
       const sumAt = (step: number) =>
         entries.reduce<Expr<'v128'>>(
           (sum, entry) => v128.xor(sum, v128.load(i32.add(entry, o), step)),
-          v128.load(i32.add(rowShift, o), step),
+          v128.load(i32.add(row, o), step),
         );
       f.emit(
-        stop.set(i32.sub(to, from)),
         whileLoop(i32.ltU(row, end), [
           word.set(i32.load(windows)),
           when(word, [
             ...entries.map((entry, t) => entry.set(entryOf(t))),
-            rowShift.set(i32.add(row, from)),
-            o.set(0),
-            whileLoop(i32.ltU(o, stop), [
-              ...UNROLLED.map((step) => v128.store(i32.add(rowShift, o), sumAt(step), step)),
-              o.set(i32.add(o, ROW_ALIGNMENT)),
-            ]),
+            ...along(
+              o,
+              from,
+              rowBytes,
+              UNROLLED.map((step) => v128.store(i32.add(row, o), sumAt(step), step)),
+            ),
           ]),
           windows.set(i32.add(windows, 4)),
           row.set(i32.add(row, rowBytes)),
@@ -193,4 +174,5 @@ function emitApplyTables(m: ModuleBuilder): void {
 }
 
 type Four = [Local<'i32'>, Local<'i32'>, Local<'i32'>, Local<'i32'>];
-type Six = [...Four, Local<'i32'>, Local<'i32'>];
+type Five = [...Four, Local<'i32'>];
+type Six = [...Five, Local<'i32'>];

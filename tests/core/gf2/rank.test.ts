@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { matrixFromRows } from '../../../src/core/codes/sparse-matrix.ts';
 import { circulantOf, cyclicGenerators, cyclicRank } from '../../../src/core/gf2/cyclic.ts';
+import { fourRussiansRank } from '../../../src/core/gf2/four-russians.ts';
 import { eliminationRank, insertionRank, rank } from '../../../src/core/gf2/rank.ts';
 import { circulantMatrix, plainRank } from '../../models/gf2-models.ts';
 import { sparseMatrices } from '../../models/random-matrices.ts';
@@ -12,10 +13,20 @@ describe('rank over GF(2)', () => {
       fc.property(sparseMatrices(40, 70), (H) => {
         const expected = plainRank(H);
         expect(insertionRank(H)).toBe(expected);
+        expect(fourRussiansRank(H)).toBe(expected);
         expect(eliminationRank(H)).toBe(expected);
         expect(rank(H)).toBe(expected);
       }),
       { numRuns: 300 },
+    );
+  });
+
+  it('by the kernel equals insertion on larger matrices of every density', () => {
+    fc.assert(
+      fc.property(sparseMatrices(300, 200, 200), (H) => {
+        expect(fourRussiansRank(H)).toBe(insertionRank(H));
+      }),
+      { numRuns: 40 },
     );
   });
 
