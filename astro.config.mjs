@@ -23,7 +23,8 @@ const nodeWorkers = {
     'astro:build:done': async () => {
       await build({
         configFile: false,
-        logLevel: 'warn',
+        logLevel: 'error',
+        publicDir: false,
         resolve: { alias },
         ssr: { noExternal: true },
         build: {

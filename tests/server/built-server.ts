@@ -1,0 +1,76 @@
+import { type ChildProcess, spawn, spawnSync } from 'node:child_process';
+import { mkdirSync, mkdtempSync, rmSync, statSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { setTimeout as delay } from 'node:timers/promises';
+import { fileURLToPath } from 'node:url';
+
+export const root = fileURLToPath(new URL('../..', import.meta.url));
+
+const lock = join(root, 'dist.lock');
+const lockIsStaleMs = 10 * 60_000;
+
+/** Builds when a source has changed since; test files that run at once wait for one another. */
+export async function ensureBuilt(): Promise<void> {
+  for (;;) {
+    try {
+      mkdirSync(lock);
+      break;
+    } catch {
+      const since = statSync(lock, { throwIfNoEntry: false })?.mtimeMs ?? 0;
+      if (since > 0 && Date.now() - since > lockIsStaleMs) rmSync(lock, { recursive: true, force: true });
+      await delay(200);
+    }
+  }
+  try {
+    const { status, stderr, stdout } = spawnSync(process.execPath, ['start.mjs', '--build-only'], { cwd: root });
+    if (status !== 0) throw new Error(`The build failed:\n${stdout}${stderr}`);
+  } finally {
+    rmSync(lock, { recursive: true, force: true });
+  }
+}
+
+export interface RunningServer {
+  base: string;
+  dataDir: string;
+  process: ChildProcess;
+  /** Ends it in order. */
+  stop(): Promise<void>;
+  /** Ends it as a power cut would. */
+  kill(): Promise<void>;
+}
+
+export const scratchDir = (): string => mkdtempSync(join(tmpdir(), 'blockwright-test-'));
+
+/** Starts the built server on a free port with its own data folder. */
+export async function startServer(env: Record<string, string> = {}): Promise<RunningServer> {
+  await ensureBuilt();
+  const dataDir = env.DATA_DIR ?? scratchDir();
+  const { PUBLIC_URL: _url, AUTH_SECRET: _secret, ...inherited } = process.env;
+  const child = spawn(process.execPath, ['src/server/main.mjs'], {
+    cwd: root,
+    env: { ...inherited, NODE_ENV: 'production', PORT: '0', DATA_DIR: dataDir, ...env },
+    stdio: ['ignore', 'pipe', 'pipe'],
+  });
+  const ended = new Promise<void>((resolve) => child.once('exit', () => resolve()));
+  const base = await listeningAddress(child);
+  const end = async (signal: NodeJS.Signals) => {
+    child.kill(signal);
+    await ended;
+  };
+  return { base, dataDir, process: child, stop: () => end('SIGTERM'), kill: () => end('SIGKILL') };
+}
+
+function listeningAddress(child: ChildProcess): Promise<string> {
+  return new Promise((resolve, reject) => {
+    let log = '';
+    const read = (chunk: Buffer) => {
+      log += chunk;
+      const address = /listens on (http:\S+)/.exec(log)?.[1];
+      if (address) resolve(address);
+    };
+    child.stdout?.on('data', read);
+    child.stderr?.on('data', read);
+    child.once('exit', (code) => reject(new Error(`The server ended with ${code} before it listened:\n${log}`)));
+  });
+}
