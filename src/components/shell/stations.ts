@@ -25,7 +25,7 @@ export function stationsOf(project: Pick<Project, 'id' | 'counts'>): Station[] {
       state: counts.requirements === 0 ? 'none stated' : `${counts.requirements} stated`,
       href: paths.requirements(id),
     },
-    { step: 'candidates', label: 'Candidates', state: 'to come' },
+    { step: 'candidates', label: 'Candidates', state: 'the catalogue', href: paths.candidates(id) },
     {
       step: 'codes',
       label: 'Codes',
