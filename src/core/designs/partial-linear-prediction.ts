@@ -2,7 +2,8 @@ import type { Citation } from '../errors.ts';
 import type { Enclosure, Grade, Graded } from '../evidence.ts';
 import type { CodePrediction } from './family.ts';
 
-/** Counts of a geometry in which two points lie on at most one block. */
+/** Counts of a geometry with constant block size and constant number of blocks on a point; where the girth is above 4,
+ *  two points lie on at most one block. */
 export interface PartialLinearCounts {
   v: number;
   b: number;
@@ -14,9 +15,11 @@ export interface PartialLinearFacts {
   /** Shortest cycle of the incidence graph, a proved value. */
   girth: number;
   rank?: Graded<Enclosure>;
+  /** Where the girth is 4: the most blocks on two points. */
+  commonBlocks?: number;
   /** Distance by orientation, where more is known than the tree bound. */
   distance?: Partial<Record<CodePrediction['checks'], Graded<Enclosure>>>;
-  structure?: CodePrediction['structure'];
+  structure?: Partial<Record<CodePrediction['checks'], CodePrediction['structure']>>;
 }
 
 /** A value known exactly. */
@@ -56,13 +59,21 @@ function predictOrientation(
     distance: facts.distance?.[checks] ?? distanceEnclosure(columnWeight, facts.girth, dimension.value, n),
     rowWeight,
     columnWeight,
-    oneStepRadius: {
-      value: Math.floor(columnWeight / 2),
-      grade: 'proved',
-      method: 'as many checks orthogonal on each bit as its column weight (Massey 1963)',
-    },
-    structure: facts.structure ?? 'none',
+    oneStepRadius: oneStepRadius(checks, columnWeight, facts),
+    structure: facts.structure?.[checks] ?? 'none',
   };
+}
+
+/** Errors corrected by one vote among the checks on a bit. With orthogonal checks half of them (Massey 1963). When another
+ *  bit shares at most λ checks with it, w errors elsewhere spoil at most λw votes, so half of the checks over λ. */
+function oneStepRadius(checks: CodePrediction['checks'], votes: number, facts: PartialLinearFacts): Graded<number> {
+  if (facts.girth >= 6) {
+    const method = 'as many checks orthogonal on each bit as its column weight (Massey 1963)';
+    return { value: Math.floor(votes / 2), grade: 'proved', method };
+  }
+  const shared = checks === 'blocks' ? facts.commonBlocks : undefined;
+  const method = shared ? `no two bits share more than ${shared} checks` : 'no bound on shared checks was used';
+  return { value: shared ? Math.floor(votes / (2 * shared)) : 0, grade: 'proved', method };
 }
 
 function distanceEnclosure(columnWeight: number, girth: number, k: Enclosure, n: number): Graded<Enclosure> {

@@ -1,5 +1,8 @@
 import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
+import { affineGeometry } from './affine-geometry.ts';
+import { affinePlane } from './affine-plane.ts';
+import { projectiveGeometry } from './projective-geometry.ts';
 import { projectivePlane } from './projective-plane.ts';
 import { puncturedAffinePlane } from './punctured-affine-plane.ts';
 import { steinerTriple } from './steiner-triple.ts';
@@ -8,6 +11,9 @@ import { steinerTriple } from './steiner-triple.ts';
 export const families: readonly Family[] = [
   projectivePlane, //
   puncturedAffinePlane,
+  affinePlane,
+  projectiveGeometry,
+  affineGeometry,
   steinerTriple,
 ];
 

@@ -51,7 +51,7 @@ function predictPuncturedPlane(q: number): DesignPrediction {
   const codes = predictPartialLinearCodes(counts, {
     girth: 6,
     rank: rankOfTypeOneCode(q),
-    structure: 'cyclic',
+    structure: { blocks: 'cyclic', points: 'cyclic' },
     distance: { blocks: distance, points: distance },
   });
   return { t: 1, ...counts, lambda: q, partialLinear: true, cyclic: true, codes };
