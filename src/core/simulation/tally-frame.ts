@@ -3,7 +3,8 @@ import { emptyTally, type Tally } from './tally.ts';
 
 /** Counts frames one by one. */
 export interface TallyKeeper {
-  add(sent: Uint8Array, decoded: Decoded): void;
+  /** @param times Frames that this one stands for; 1 unless given. */
+  add(sent: Uint8Array, decoded: Decoded, times?: number): void;
   tally(): Tally;
 }
 
@@ -11,16 +12,16 @@ export function keepTally(n: number): TallyKeeper {
   const tally = emptyTally();
   const histogram: number[] = [];
   return {
-    add(sent, { word, iterations, converged }) {
+    add(sent, { word, iterations, converged }, times = 1) {
       const wrong = differing(sent, word);
-      tally.frames += 1;
-      tally.bits += n;
-      tally.iterations += iterations;
-      tally.bitErrors += wrong;
-      tally.bitErrorsSquared += wrong ** 2;
-      if (wrong > 0) tally.frameErrors += 1;
-      if (wrong > 0 && converged) tally.undetected += 1;
-      histogram[iterations] = (histogram[iterations] ?? 0) + 1;
+      tally.frames += times;
+      tally.bits += times * n;
+      tally.iterations += times * iterations;
+      tally.bitErrors += times * wrong;
+      tally.bitErrorsSquared += times * wrong ** 2;
+      if (wrong > 0) tally.frameErrors += times;
+      if (wrong > 0 && converged) tally.undetected += times;
+      histogram[iterations] = (histogram[iterations] ?? 0) + times;
     },
     tally: () => ({ ...tally, iterationHistogram: Array.from(histogram, (count) => count ?? 0) }),
   };
