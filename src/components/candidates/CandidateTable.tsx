@@ -66,10 +66,10 @@ export function CandidateTable({ rows, matching, state, more }: Props) {
       <div role="table" aria-label="Candidates" aria-rowcount={matching + 1} className="min-w-[64rem]">
         <HeadRow state={state} />
         {/* biome-ignore lint/a11y/useSemanticElements: as above */}
-        {/* biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable by keyboard */}
         <div
           ref={scroller}
           role="rowgroup"
+          // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable by keyboard
           tabIndex={0}
           onKeyDown={onKeyDown}
           aria-label="Rows; arrow keys choose one"
