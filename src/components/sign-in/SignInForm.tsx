@@ -2,7 +2,8 @@ import { type SubmitEvent, useState } from 'react';
 import { Button } from '@/components/ui/Button.tsx';
 import { TextField } from '@/components/ui/fields.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
-import { signIn } from './auth-post.ts';
+import { duration } from '@/components/ui/numbers.ts';
+import { outcomeFrom, type SignInOutcome, signIn } from './auth-post.ts';
 
 export interface DemoAccount {
   email: string;
@@ -15,21 +16,25 @@ interface Props {
   next: string;
   /** Local mode only. */
   demo?: { accounts: readonly DemoAccount[]; password: string };
-  /** Why the last try ended here, when the address says so. */
-  refused?: boolean;
+  /** The query of an address that a refused try came back to. */
+  refusedWith?: string;
 }
 
-const SAID = {
-  refused: 'E-mail and password do not match an account.',
-  'too-many': 'Too many tries; wait a minute and try again.',
-  unreachable: 'The server does not answer; try again in a moment.',
-} as const;
+function said(outcome: Exclude<SignInOutcome, { ok: true }>): string {
+  if (outcome.reason === 'slow-down')
+    return `Too many tries. The next one is taken in ${duration(outcome.waitSeconds * 1000)}.`;
+  return outcome.reason === 'refused'
+    ? 'E-mail and password do not match an account.'
+    : 'The server does not answer; try again in a moment.';
+}
 
-export default function SignInForm({ next, demo, refused }: Props) {
+export default function SignInForm({ next, demo, refusedWith }: Props) {
   const [email, setEmail] = useState('');
   const [password, setPassword] = useState('');
   const [busy, setBusy] = useState(false);
-  const [message, setMessage] = useState<string | null>(refused ? SAID.refused : null);
+  const [message, setMessage] = useState<string | null>(
+    refusedWith === undefined ? null : said(outcomeFrom(new URLSearchParams(refusedWith))),
+  );
 
   const submit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault();
@@ -41,7 +46,7 @@ export default function SignInForm({ next, demo, refused }: Props) {
       return;
     }
     setBusy(false);
-    setMessage(SAID[outcome.reason]);
+    setMessage(said(outcome));
   };
 
   return (

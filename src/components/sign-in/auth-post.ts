@@ -15,18 +15,33 @@ async function postAuth(route: string, fields: Record<string, string>): Promise<
   return new URL(url, location.origin);
 }
 
-export type SignInOutcome = { ok: true; next: string } | { ok: false; reason: 'refused' | 'too-many' | 'unreachable' };
+export type SignInOutcome =
+  | { ok: true; next: string }
+  | { ok: false; reason: 'refused' | 'unreachable' }
+  | { ok: false; reason: 'slow-down'; waitSeconds: number };
 
 /** Signs in with e-mail and password; why a pair was refused is never told apart. */
 export async function signIn(email: string, password: string, next: string): Promise<SignInOutcome> {
   try {
     const url = await postAuth('callback/credentials', { email, password, callbackUrl: next });
-    const error = url.searchParams.get('error');
-    if (!error) return { ok: true, next: url.pathname + url.search };
-    return { ok: false, reason: url.searchParams.get('code') === 'too-many' ? 'too-many' : 'refused' };
+    if (!url.searchParams.has('error')) return { ok: true, next: url.pathname + url.search };
+    return outcomeFrom(url.searchParams);
   } catch {
     return { ok: false, reason: 'unreachable' };
   }
+}
+
+/** Reads a refusal out of an address: ?error=…&code=slow-down-20. */
+export function outcomeFrom(search: URLSearchParams): Exclude<SignInOutcome, { ok: true }> {
+  const wait = /^slow-down-(\d+)$/.exec(search.get('code') ?? '')?.[1];
+  return wait ? { ok: false, reason: 'slow-down', waitSeconds: Number(wait) } : { ok: false, reason: 'refused' };
+}
+
+/** A path of this site to go to after signing in; anything else leads home. */
+export function safeNext(wanted: string | null, origin: string): string {
+  if (!wanted || !URL.canParse(wanted, origin)) return '/';
+  const url = new URL(wanted, origin);
+  return url.origin === origin && !url.pathname.startsWith('/sign-in') ? url.pathname + url.search : '/';
 }
 
 /** Ends the session; answers with the address to go to. */

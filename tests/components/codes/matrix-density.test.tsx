@@ -14,16 +14,14 @@ function onesPlainly(H: SparseMatrix, row0: number, row1: number, col0: number, 
   return ones;
 }
 
-const smallMatrix = fc
-  .integer({ min: 1, max: 40 })
-  .chain((cols) =>
-    fc
-      .array(fc.uniqueArray(fc.integer({ min: 0, max: cols - 1 }), { maxLength: cols }), {
-        minLength: 1,
-        maxLength: 40,
-      })
-      .map((rows) => matrixFromRows(cols, rows)),
-  );
+const smallMatrix = fc.integer({ min: 1, max: 40 }).chain((cols) =>
+  fc
+    .array(fc.uniqueArray(fc.integer({ min: 0, max: cols - 1 }), { maxLength: cols }), {
+      minLength: 1,
+      maxLength: 40,
+    })
+    .map((rows) => matrixFromRows(cols, rows)),
+);
 
 describe('density of a matrix', () => {
   test('a range counted by search agrees with every cell looked up', () => {

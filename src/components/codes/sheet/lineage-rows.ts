@@ -1,0 +1,34 @@
+import type { Code } from '@/api/codes.ts';
+import { wholeNumber } from '@/components/ui/numbers.ts';
+import type { TitleRow } from '@/components/ui/TitleBlock.tsx';
+
+/** From which design, in which way, by whom and when. */
+export function lineageRows(code: Code): TitleRow[] {
+  const { design, derivation, createdAt, createdBy } = code;
+  const params = Object.entries(design.params).map(([name, value]) => `${name} = ${valueText(value)}`);
+  return [
+    { label: 'Family', value: design.family, note: params.join(', ') },
+    ...derivationRows(derivation),
+    { label: 'Kept', value: `${createdAt.slice(0, 16).replace('T', ' ')} UTC`, note: createdBy },
+  ];
+}
+
+function derivationRows(derivation: Code['derivation']): TitleRow[] {
+  if (derivation.kind === 'constant-weight') {
+    return [{ label: 'Words', value: derivation.complement ? 'complements of the blocks' : 'the blocks' }];
+  }
+  const steps = derivation.transforms ?? [];
+  return [
+    {
+      label: 'Matrix',
+      value: derivation.checks === 'blocks' ? 'one check a block' : 'one check a point',
+      note: derivation.checks === 'blocks' ? 'rows are blocks, columns points' : 'rows are points, columns blocks',
+    },
+    { label: 'Transforms', value: steps.length === 0 ? 'none' : steps.map(({ kind }) => kind).join(', then ') },
+  ];
+}
+
+function valueText(value: unknown): string {
+  if (typeof value === 'number') return wholeNumber(value);
+  return typeof value === 'string' ? value : JSON.stringify(value);
+}
