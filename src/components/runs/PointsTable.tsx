@@ -1,6 +1,8 @@
+import { useState } from 'react';
 import type { Point, Stopping } from '@/api/runs.ts';
-import { crossoverOf, curvePointOf, isThin } from '@/client/curves/curve.ts';
+import { type CurvePoint, crossoverOf, curvePointOf, type Estimate, isThin } from '@/client/curves/curve.ts';
 import { curveKey } from '@/client/curves/group-points.ts';
+import { Button } from '@/components/ui/Button.tsx';
 import { type Column, DataTable } from '@/components/ui/DataTable.tsx';
 import { Grade } from '@/components/ui/Grade.tsx';
 import { wholeNumber } from '@/components/ui/numbers.ts';
@@ -18,13 +20,14 @@ interface Props {
   onSelect: (pointId: string) => void;
 }
 
-/** Rows shown at once; the file has them all. */
-const MOST_ROWS = 300;
+/** Rows shown at first, and more at each asking. */
+const ROWS_AT_ONCE = 100;
 
 /** Every point with its counts, rates, intervals and how far it is. */
 export function PointsTable({ points, curves, stopping, seed, selectedId, onSelect }: Props) {
+  const [rowLimit, setRowLimit] = useState(ROWS_AT_ONCE);
   const byKey = new Map(curves.map((chartCurve) => [chartCurve.curve.key, chartCurve]));
-  const rows = points.slice(0, MOST_ROWS).map((point) => ({ point, measured: curvePointOf(point) }));
+  const rows = points.slice(0, rowLimit).map((point) => ({ point, measured: curvePointOf(point) }));
   const columns: Column<Row>[] = [
     {
       key: 'curve',
@@ -55,20 +58,14 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
       key: 'fer',
       header: 'FER',
       kind: 'number',
-      cell: ({ measured }) => (measured ? <Figure text={rateText(measured.fer)} /> : '–'),
+      cell: ({ measured }) => (measured ? <RateCell rate={measured.fer} /> : '–'),
       sortBy: ({ measured }) => measured?.fer.value ?? measured?.fer.upper ?? 2,
-    },
-    {
-      key: 'interval',
-      header: 'interval',
-      kind: 'number',
-      cell: ({ measured }) => (measured ? <Figure text={intervalText(measured.fer)} /> : '–'),
     },
     {
       key: 'ber',
       header: 'BER',
       kind: 'number',
-      cell: ({ measured }) => (measured ? <Figure text={rateText(measured.ber)} /> : '–'),
+      cell: ({ measured }) => (measured ? <RateCell rate={measured.ber} /> : '–'),
       sortBy: ({ measured }) => measured?.ber.value ?? measured?.ber.upper ?? 2,
     },
     count('undetected', 'undetected', (point) => point.tally.undetected),
@@ -81,19 +78,13 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
     },
     {
       key: 'state',
-      header: 'state',
-      cell: ({ point }) => <span className="whitespace-nowrap">{pointState(point, stopping)}</span>,
-    },
-    {
-      key: 'evidence',
-      header: 'evidence',
-      cell: ({ point, measured }) =>
-        measured && (
-          <span className="inline-flex items-baseline gap-3">
-            <Grade grade="sampled" method={`${wholeNumber(point.tally.frames)} frames, seed ${seed}`} />
-            {isThin(measured) && <span className="font-semibold text-thin text-tiny">thin</span>}
-          </span>
-        ),
+      header: 'state, evidence',
+      cell: ({ point, measured }) => (
+        <span className="inline-grid whitespace-nowrap">
+          {pointState(point, stopping)}
+          {measured && <Evidence measured={measured} seed={seed} />}
+        </span>
+      ),
     },
   ];
   return (
@@ -106,9 +97,12 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
         rowKey={({ point }) => point.id}
         selected={({ point }) => point.id === selectedId}
       />
-      {points.length > MOST_ROWS && (
-        <p className="text-quiet">
-          The first {MOST_ROWS} of {wholeNumber(points.length)} points; the file has them all.
+      {points.length > rowLimit && (
+        <p className="flex flex-wrap items-center gap-3 text-quiet">
+          The first {rowLimit} of {wholeNumber(points.length)} points.
+          <Button kind="quiet" size="small" onClick={() => setRowLimit(rowLimit + ROWS_AT_ONCE)}>
+            Show more
+          </Button>
         </p>
       )}
     </div>
@@ -132,6 +126,28 @@ const count = (key: string, header: string, of: (point: Point) => number): Colum
 export function pointState(point: Pick<Point, 'done' | 'tally'>, stopping: Stopping): string {
   if (point.done) return point.tally.frameErrors >= stopping.frameErrors ? 'done' : 'done, at the cap on frames';
   return point.tally.frames > 0 ? 'under way' : 'waiting';
+}
+
+function RateCell({ rate }: { rate: Estimate }) {
+  return (
+    <span className="inline-grid">
+      <Figure text={rateText(rate)} />
+      {rate.value !== null && (
+        <span className="text-quiet">
+          <Figure text={intervalText(rate)} />
+        </span>
+      )}
+    </span>
+  );
+}
+
+function Evidence({ measured, seed }: { measured: CurvePoint; seed: string }) {
+  return (
+    <span className="inline-flex items-baseline gap-3">
+      <Grade grade="sampled" method={`${wholeNumber(measured.frames)} frames, seed ${seed}`} />
+      {isThin(measured) && <span className="font-semibold text-thin">thin</span>}
+    </span>
+  );
 }
 
 function CurveName({ chartCurve, fallback }: { chartCurve: ChartCurve | undefined; fallback: string }) {

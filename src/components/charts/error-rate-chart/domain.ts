@@ -63,7 +63,8 @@ export function wholeWindow({ curves, kind, planned = [], requirement = null }: 
     pMax: Math.min(0.5, pMax * Math.exp(spare / 2 + 0.05 * span)),
     pMin: pMin * Math.exp(-(spare / 2 + 0.14 * span)),
     top: 1,
-    bottom: 10 ** -decades,
+    // As the literal has it: 10 ** -4 is not 1e-4.
+    bottom: Number(`1e-${decades}`),
   };
 }
 
@@ -74,14 +75,16 @@ export function lastMeasured(curves: readonly Curve[]): number | null {
 }
 
 const LEAST_RATIO = 1.02;
+const LEAST_P = 1e-12;
+const LEAST_RATE = 1e-300;
 
 /** A window made by a drag or a key, kept within what the axes can show; null when nothing sensible is left. */
 export function tidyWindow(window: ChartWindow): ChartWindow | null {
   const pMax = Math.min(0.5, window.pMax);
+  const pMin = Math.max(LEAST_P, window.pMin);
   const top = Math.min(1, window.top);
-  const bottom = Math.max(1e-300, window.bottom);
-  const ordered = window.pMin > 0 && pMax / window.pMin >= LEAST_RATIO && top / bottom >= LEAST_RATIO;
-  return ordered ? { pMax, pMin: window.pMin, top, bottom } : null;
+  const bottom = Math.max(LEAST_RATE, window.bottom);
+  return pMax / pMin >= LEAST_RATIO && top / bottom >= LEAST_RATIO ? { pMax, pMin, top, bottom } : null;
 }
 
 /** Magnifies about a place on the chart (fractions of the axes from left and top); factors below 1 widen. */
