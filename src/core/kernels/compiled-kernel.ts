@@ -14,6 +14,8 @@ export interface Draws {
   random: Uint32Array;
   /** Weights of the patterns: one weight, or the law of independent errors. */
   weights: number | WeightTable;
+  /** Ratio P(0)/P(1) of a received 0, for kernels that want it. */
+  ratio: number;
 }
 
 interface Instance {
@@ -66,7 +68,8 @@ export class CompiledKernel {
 export function begin({ memory }: Pick<Instance, 'memory'>, image: KernelImage, draws: Draws): void {
   const words = new Uint32Array(memory.buffer);
   const wordAt = (place: number) => place >> 2;
-  words.fill(0, wordAt(control.frameErrors), wordAt(control.size));
+  words.fill(0, wordAt(control.frameErrors), wordAt(control.parameter));
+  new Float32Array(memory.buffer)[wordAt(control.parameter)] = draws.ratio;
   words.fill(0, wordAt(image.places.histogram), wordAt(image.places.histogram) + image.cap + 2);
   words.set(draws.random, wordAt(control.random));
   words[wordAt(control.left)] = draws.frames;

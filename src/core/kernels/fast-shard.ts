@@ -1,4 +1,5 @@
 import { hardCrossover } from '../channels/awgn.ts';
+import { channelReading } from '../channels/reading.ts';
 import { streamState } from '../simulation/random.ts';
 import type { RunSpec } from '../simulation/run-spec.ts';
 import type { Tally } from '../simulation/tally.ts';
@@ -20,10 +21,10 @@ export interface FastShardOptions {
 export function fastShard(spec: RunSpec, index: number, options: FastShardOptions = {}): Promise<Tally> | null {
   if (!simdAvailable()) return null;
   const weights = patternWeights(spec);
-  if (weights === null) return null;
+  const ratio = zeroRatio(spec);
+  if (weights === null || ratio === null) return null;
   const kernel = kernelFor(spec);
-  if (kernel === null) return null;
-  return runOn(kernel, spec, index, weights, options);
+  return kernel && runOn(kernel, spec, index, { weights, ratio }, options);
 }
 
 /** How the channel's patterns are weighted; null where they are not independent of what is sent or of each other. */
@@ -42,6 +43,18 @@ function patternWeights({ H, channel, rate }: RunSpec): (() => Draws['weights'])
   }
 }
 
+/** Below this log-likelihood ratio a channel output says next to nothing, and 32-bit ratios cannot tell it from 1. */
+const faintest = 1e-3;
+
+/** P(0)/P(1) of a received 0 where the decoder reads it, else 1; null where the channel is too faint for the kernel.
+ *  @throws ParamError where the channel has no such ratio, as the reference does. */
+function zeroRatio({ channel, decoder, rate }: RunSpec): number | null {
+  if (decoder.kind !== 'sum-product') return 1;
+  const ratios = new Float64Array(1);
+  channelReading(channel, rate, decoder.designP)(new Uint8Array(1), ratios);
+  return ratios[0]! < faintest ? null : Math.exp(ratios[0]!);
+}
+
 function kernelFor({ H, decoder, channel }: RunSpec): Promise<CompiledKernel> | null {
   if (channel.kind === 'bec' && decoder.kind !== 'peeling') return null;
   const emit = emitterFor(decoder, H);
@@ -55,14 +68,15 @@ async function runOn(
   compiling: Promise<CompiledKernel>,
   spec: RunSpec,
   index: number,
-  weights: () => Draws['weights'],
+  draws: { weights: () => Draws['weights']; ratio: number },
   { signal, pause }: FastShardOptions,
 ): Promise<Tally> {
   const kernel = await compiling;
   const { image } = kernel;
   const instance = await kernel.take();
   const random = await streamState(spec.seed, index);
-  begin(instance, image, { frames: spec.framesPerShard, random, weights: weights() });
+  const { ratio } = draws;
+  begin(instance, image, { frames: spec.framesPerShard, random, weights: draws.weights(), ratio });
   const steps = Math.max(1, Math.floor(sliceNs / image.stepNs));
   signal?.throwIfAborted();
   while (instance.run(steps) === 0) {

@@ -6,6 +6,7 @@ import { bitFlippingKernel } from './bit-flipping-kernel.ts';
 import { gallagerKernel } from './gallager-kernel.ts';
 import { planGraph } from './graph-plan.ts';
 import type { KernelImage } from './kernel-image.ts';
+import { sumProductKernel } from './sum-product-kernel.ts';
 
 type Emitter = () => KernelImage;
 type Of<K extends DecoderSpec['kind']> = Extract<DecoderSpec, { kind: K }>;
@@ -32,6 +33,8 @@ export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | nul
     case 'gallager-a':
     case 'gallager-b':
       return gallager(H, degrees, decoder, cap);
+    case 'sum-product':
+      return () => sumProductKernel(planGraph(H), cap);
     default:
       return null;
   }

@@ -31,8 +31,10 @@ export const control = {
   bitErrors: 120,
   bitErrorsSquared: 128,
   undetected: 136,
+  /** What the channel tells a soft kernel: a float, the ratio of a received 0. */
+  parameter: 144,
   /** Bytes of the block. */
-  size: 144,
+  size: 160,
 } as const;
 
 /** Hands out places from low to high. */
