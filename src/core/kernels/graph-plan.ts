@@ -44,7 +44,7 @@ export function planGraph(
   { rowsInOrder = false }: { rowsInOrder?: boolean } = {},
 ): GraphPlan {
   const columns = transpose(H);
-  const circulant = circulantOffsets(H);
+  const circulant = circulantOffsets(H, rowsInOrder);
   const byWeight = classify(H, [], rowsInOrder);
   const byDegree = classify(columns, settings, false);
   return {
@@ -71,7 +71,7 @@ export function largestRow(M: SparseMatrix): number {
 
 /** Row 0's columns when row j is {d + j} or {d − j} (mod n) for all j. The second kind is the first with its rows
  *  counted backwards, which only schedules in index order could tell apart; those do not ask. */
-function circulantOffsets(H: SparseMatrix): number[] | null {
+function circulantOffsets(H: SparseMatrix, forwardsOnly: boolean): number[] | null {
   const n = H.cols;
   if (H.rows !== n || n < 2) return null;
   const first = [...rowOf(H, 0)];
@@ -85,7 +85,7 @@ function circulantOffsets(H: SparseMatrix): number[] | null {
     }
     return true;
   };
-  return isMoved(1) || isMoved(-1) ? first : null;
+  return isMoved(1) || (!forwardsOnly && isMoved(-1)) ? first : null;
 }
 
 /** Groups rows by weight and settings; the commonest groups get code of their own, the rest is mixed. */

@@ -1,11 +1,12 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import type { DecoderSpec } from '../decoders/decoder-spec.ts';
-import { flippingThresholds, iterationCap, messageThresholds } from '../decoders/settings.ts';
+import { flippingThresholds, iterationCap, messageThresholds, minSumSettings } from '../decoders/settings.ts';
 import { columnDegrees } from '../decoders/tanner-graph.ts';
 import { bitFlippingKernel } from './bit-flipping-kernel.ts';
 import { gallagerKernel } from './gallager-kernel.ts';
 import { planGraph } from './graph-plan.ts';
 import type { KernelImage } from './kernel-image.ts';
+import { minSumKernel } from './min-sum-kernel.ts';
 import { sumProductKernel } from './sum-product-kernel.ts';
 
 type Emitter = () => KernelImage;
@@ -33,6 +34,11 @@ export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | nul
     case 'gallager-a':
     case 'gallager-b':
       return gallager(H, degrees, decoder, cap);
+    case 'min-sum': {
+      const settings = minSumSettings(degrees, decoder);
+      const rowsInOrder = settings.schedule === 'layered';
+      return () => minSumKernel(planGraph(H, [], { rowsInOrder }), settings);
+    }
     case 'sum-product':
       return () => sumProductKernel(planGraph(H), cap);
     default:
