@@ -2,9 +2,12 @@ import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
 import { affineGeometry } from './affine-geometry.ts';
 import { affinePlane } from './affine-plane.ts';
+import { hermitianUnital } from './hermitian-unital.ts';
+import { inversivePlane } from './inversive-plane.ts';
 import { projectiveGeometry } from './projective-geometry.ts';
 import { projectivePlane } from './projective-plane.ts';
 import { puncturedAffinePlane } from './punctured-affine-plane.ts';
+import { sphericalGeometry } from './spherical-geometry.ts';
 import { steinerTriple } from './steiner-triple.ts';
 
 /** Every family the program builds, in the order shown. A family is added by one file here and one line below. */
@@ -14,6 +17,9 @@ export const families: readonly Family[] = [
   affinePlane,
   projectiveGeometry,
   affineGeometry,
+  inversivePlane,
+  sphericalGeometry,
+  hermitianUnital,
   steinerTriple,
 ];
 
