@@ -119,11 +119,12 @@ describe('a session', () => {
 describe('a change from another site', () => {
   it('is refused by its Origin', async () => {
     const client = await demoClient(server.base, 'engineer');
-    for (const headers of [
+    const foreign: Record<string, string>[] = [
       { origin: 'https://evil.test', 'content-type': 'application/json' },
       { origin: 'https://evil.test', 'content-type': 'text/plain' },
       { 'content-type': 'text/plain' },
-    ]) {
+    ];
+    for (const headers of foreign) {
       const response = await client.fetch('/api/v1/projects', { method: 'POST', headers, body: '{"name":"x"}' });
       expect(response.status).toBe(403);
       expect((await response.json()).error.code).toBe('origin');
