@@ -2,12 +2,16 @@ import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
 import { affineGeometry } from './affine-geometry.ts';
 import { affinePlane } from './affine-plane.ts';
+import { denniston } from './denniston.ts';
+import { generalisedQuadrangle } from './generalised-quadrangle.ts';
 import { hermitianUnital } from './hermitian-unital.ts';
 import { inversivePlane } from './inversive-plane.ts';
+import { lu3 } from './lu3.ts';
 import { projectiveGeometry } from './projective-geometry.ts';
 import { projectivePlane } from './projective-plane.ts';
 import { puncturedAffinePlane } from './punctured-affine-plane.ts';
 import { sphericalGeometry } from './spherical-geometry.ts';
+import { splitCayleyHexagon } from './split-cayley-hexagon.ts';
 import { steinerTriple } from './steiner-triple.ts';
 
 /** Every family the program builds, in the order shown. A family is added by one file here and one line below. */
@@ -20,6 +24,10 @@ export const families: readonly Family[] = [
   inversivePlane,
   sphericalGeometry,
   hermitianUnital,
+  denniston,
+  generalisedQuadrangle,
+  lu3,
+  splitCayleyHexagon,
   steinerTriple,
 ];
 
