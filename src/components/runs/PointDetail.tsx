@@ -19,10 +19,11 @@ export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
   const selected = points.find((point) => point.id === selectedId) ?? points[0];
   if (!selected) return null;
   return (
-    <section className="grid gap-2" aria-label="Iterations of a point">
+    <section className="grid min-w-0 content-start gap-2" aria-label="Iterations of a point">
       <h2>Iterations</h2>
       <SelectField
         label="Point"
+        className="max-w-md"
         value={selected.id}
         onChange={(event) => onSelect(event.target.value)}
         choices={points.map((point) => ({

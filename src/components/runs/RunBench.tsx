@@ -59,7 +59,7 @@ export function RunBench({ projectId, run, points, panel }: Props) {
     );
 
   return (
-    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] wide:grid-rows-[auto_1fr]">
+    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] wide:grid-rows-[auto_1fr_auto]">
       <div className="min-w-0">
         <h1>{run.name}</h1>
         <p className="mt-1 mb-3 text-quiet">{subtitle(curves.length, points)}</p>
@@ -78,9 +78,9 @@ export function RunBench({ projectId, run, points, panel }: Props) {
         {requirement && <RequirementTable curves={curves} requirement={requirement} />}
         <RunTitleBlock run={run} points={points} />
         <Caution />
-        <PointDetail points={points} curves={curves} selectedId={selectedId} onSelect={setSelectedId} />
       </div>
-      <div className="min-w-0">
+      <PointDetail points={points} curves={curves} selectedId={selectedId} onSelect={setSelectedId} />
+      <div className="min-w-0 wide:col-span-2">
         <PointsTable
           points={points}
           curves={curves}

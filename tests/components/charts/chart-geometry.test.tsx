@@ -42,7 +42,8 @@ describe('the window of a chart', () => {
       wholeWindow({ curves, kind: 'fer', requirement: { kind: 'fer', target, p: 0.008, label: '', shortLabel: '' } });
     expect(at(1e-4).bottom).toBeLessThan(1e-4);
     expect(at(1e-12).bottom).toBeGreaterThan(1e-5);
-    expect(at(1e-12).pMin).toBeLessThan(0.008);
+    expect(at(1e-4).pMin).toBeLessThan(0.008);
+    expect(at(1e-12).pMin).toBeGreaterThan(0.008);
   });
 
   it('comes back from the address, and nonsense there is no window', () => {
@@ -109,7 +110,9 @@ describe('ticks', () => {
 
   it('of the channel keep their labels apart and mark every digit', () => {
     const ticks = channelTicks(0.05, 0.005, place.x, 54);
-    expect(ticks.map((tick) => tick.value)).toEqual([0.005, 0.006, 0.007, 0.008, 0.009, 0.01, 0.02, 0.03, 0.04, 0.05]);
+    expect(ticks.map((tick) => tick.value)).toEqual([
+      0.005, 0.006, 0.007, 0.008, 0.009, 0.01, 0.015, 0.02, 0.03, 0.04, 0.05,
+    ]);
     const labelled = ticks.filter((tick) => tick.isLabelled).map((tick) => tick.at);
     for (const a of labelled) for (const b of labelled) if (a !== b) expect(Math.abs(a - b)).toBeGreaterThanOrEqual(54);
     expect(ticks.find((tick) => tick.value === 0.01)?.isLabelled).toBe(true);

@@ -51,11 +51,11 @@ export function wholeWindow({ curves, kind, planned = [], requirement = null }: 
       lowest = Math.min(lowest, rate.value === null ? rate.upper / 3 : Math.max(rate.lower, rate.value / 5));
     }
   for (const p of planned) include(p);
-  if (requirement?.p != null) include(requirement.p);
+  if (requirement && isInReach(requirement.target, lowest)) {
+    lowest = Math.min(lowest, requirement.target * 0.5);
+    if (requirement.p !== null) include(requirement.p);
+  }
   if (pMax === 0) return { pMax: 0.06, pMin: 0.004, top: 1, bottom: 1e-5 };
-
-  if (requirement && requirement.target < lowest && Math.log10(lowest / requirement.target) <= TARGET_REACH_DECADES)
-    lowest = requirement.target * 0.5;
   const span = Math.max(Math.log(pMax / pMin), Math.log(1.6));
   const spare = span - Math.log(pMax / pMin);
   const decades = Math.max(LEAST_DECADES, Math.ceil(-Math.log10(lowest) - 1e-9));
@@ -67,6 +67,8 @@ export function wholeWindow({ curves, kind, planned = [], requirement = null }: 
     bottom: Number(`1e-${decades}`),
   };
 }
+
+const isInReach = (target: number, lowest: number): boolean => Math.log10(lowest / target) <= TARGET_REACH_DECADES;
 
 /** The lowest crossover probability at which a shown curve has a point; beyond it nothing was measured. */
 export function lastMeasured(curves: readonly Curve[]): number | null {

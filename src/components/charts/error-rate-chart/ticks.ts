@@ -9,12 +9,14 @@ export interface Tick {
 type Place = (value: number) => number;
 
 /** Digits in the order in which they earn a label when there is not room for all. */
-const LABEL_ORDER = [1, 5, 2, 3, 7, 4, 6, 8, 9];
+const LABEL_ORDER = [1, 5, 2, 3, 1.5, 7, 4, 6, 8, 9];
+const CHANNEL_DIGITS = [1, 1.5, 2, 3, 4, 5, 6, 7, 8, 9];
+const RATE_DIGITS = [1, 2, 3, 4, 5, 6, 7, 8, 9];
 
-/** Ticks of the p axis at every digit of every decade in the window; as many labelled as stand `gapPx` apart. A window
+/** Ticks of the p axis at every digit of every decade in the window, and at 1.5 in the wide gap after 1; as many labelled as stand `gapPx` apart. A window
  *  too short to hold three of them is ticked evenly instead. */
 export function channelTicks(pMax: number, pMin: number, place: Place, gapPx: number): Tick[] {
-  const values = digitMultiples(pMin, pMax);
+  const values = digitMultiples(pMin, pMax, CHANNEL_DIGITS);
   const all = values.length >= 3 ? values : scaleLinear().domain([pMin, pMax]).ticks(5);
   const rank = (value: number) => LABEL_ORDER.indexOf(leadingDigit(value));
   const taken: number[] = [];
@@ -36,7 +38,7 @@ export function rateTicks(top: number, bottom: number, place: Place, gapPx: numb
   const decades: number[] = [];
   for (let e = first; e >= last; e--) decades.push(e);
   const decadePx = Math.abs(place(1e-2) - place(1e-1));
-  const digits = digitMultiples(bottom, top).filter((value) => leadingDigit(value) !== 1);
+  const digits = digitMultiples(bottom, top, RATE_DIGITS).filter((value) => leadingDigit(value) !== 1);
   if (decades.length < 2) {
     const inside =
       digits.length >= 2 ? [...digits, ...decades.map(power)] : scaleLinear().domain([bottom, top]).ticks(5);
@@ -63,13 +65,13 @@ function spaced(values: readonly number[], place: Place, gapPx: number): Tick[] 
 /** Powers of ten as the decimal literal has them, so that −4 gives 0.0001 and not its neighbour. */
 const power = (e: number) => Number(`1e${e}`);
 
-const leadingDigit = (value: number) => Math.round(Number(value.toExponential().split('e')[0]));
+const leadingDigit = (value: number) => Number(value.toExponential(1).split('e')[0]);
 
-/** d·10^e for d = 1 … 9 within [low, high], ascending. */
-function digitMultiples(low: number, high: number): number[] {
+/** d·10^e for each digit d within [low, high], ascending. */
+function digitMultiples(low: number, high: number, digits: readonly number[]): number[] {
   const values: number[] = [];
   for (let e = Math.floor(Math.log10(low)); e <= Math.ceil(Math.log10(high)); e++)
-    for (let digit = 1; digit <= 9; digit++) {
+    for (const digit of digits) {
       const value = Number(`${digit}e${e}`);
       if (value >= low * (1 - 1e-9) && value <= high * (1 + 1e-9)) values.push(value);
     }
