@@ -1,5 +1,5 @@
 import type { ChannelReading } from '../channels/reading.ts';
-import { type Decoder, iterativeDecoder, type Received } from './decoder.ts';
+import { type Decoder, type DecodingRule, iterativeDecoder, type Received } from './decoder.ts';
 import type { TannerGraph } from './tanner-graph.ts';
 
 /** Messages are cut to this before tanh, which would otherwise round to 1. */
@@ -11,6 +11,8 @@ const undecided = 1e-9;
 export interface SumProduct extends Decoder {
   /** Log-likelihood ratios after the latest iteration. */
   readonly total: Float64Array;
+  /** Does one iteration whether or not the word is a codeword already; for following the totals. */
+  iterate(): void;
 }
 
 /** Sum-product decoding, flooding, in log-likelihood ratios (Gallager 1963; Kschischang, Frey and Loeliger, IEEE Trans.
@@ -24,7 +26,7 @@ export function sumProduct(graph: TannerGraph, readChannel: ChannelReading, cap:
   const total = new Float64Array(H.cols);
   const toBit = new Float64Array(H.colIndex.length);
   const factors = new Float64Array(H.cols);
-  const decoder = iterativeDecoder(H, cap, {
+  const rule: DecodingRule = {
     word,
     start(received) {
       readChannel(received, channel);
@@ -40,8 +42,8 @@ export function sumProduct(graph: TannerGraph, readChannel: ChannelReading, cap:
       for (let j = 0; j < H.cols; j++) word[j] = Math.abs(total[j]!) <= undecided ? hard[j]! : total[j]! < 0 ? 1 : 0;
       return true;
     },
-  });
-  return { ...decoder, total };
+  };
+  return { ...iterativeDecoder(H, cap, rule), total, iterate: () => void rule.iterate(0) };
 }
 
 /** The received bits; the sign of a real output, 0 where it is 0. */

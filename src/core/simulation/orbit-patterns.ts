@@ -18,6 +18,7 @@ export function orbitPatterns(group: PermutationGroup, weight: number): OrbitPat
 
   /** Order of the stabiliser of the first `size` positions, or 0 when an element carries them to an earlier pattern. */
   const stabiliser = (size: number): number => {
+    if (size === 0) return group.order;
     const least = pattern[0]!;
     let fixing = 0;
     for (let i = 0; i < size; i++) {
