@@ -51,6 +51,27 @@ export function increment(f: FunctionBuilder, counter: readonly Local<'v128'>[],
   return code;
 }
 
+/** total += planes, in place, digit by digit; what passes the last digit of the total is lost. */
+export function addPlanes(f: FunctionBuilder, total: readonly Local<'v128'>[], planes: readonly V128[]): Statement[] {
+  const carry = f.borrow('v128');
+  const next = f.borrow('v128');
+  const differ = f.borrow('v128');
+  const parts = [carry.set(v128.zero)];
+  total.forEach((digit, k) => {
+    const plane = planes[k];
+    if (plane)
+      parts.push(
+        differ.set(v128.xor(digit, plane)),
+        next.set(v128.bitselect(carry, digit, differ)),
+        digit.set(v128.xor(differ, carry)),
+      );
+    else parts.push(next.set(v128.and(digit, carry)), digit.set(v128.xor(digit, carry)));
+    parts.push(carry.set(next));
+  });
+  f.giveBack(carry, next, differ);
+  return parts;
+}
+
 function fullAdder(
   f: FunctionBuilder,
   [a, b, c]: readonly [Local<'v128'>, Local<'v128'>, Local<'v128'>],

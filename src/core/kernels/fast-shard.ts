@@ -56,7 +56,8 @@ function zeroRatio({ channel, decoder, rate }: RunSpec): number | null {
 }
 
 function kernelFor({ H, decoder, channel }: RunSpec): Promise<CompiledKernel> | null {
-  if (channel.kind === 'bec' && decoder.kind !== 'peeling') return null;
+  const erasing = decoder.kind === 'peeling';
+  if (channel.kind !== 'stratum' && erasing !== (channel.kind === 'bec')) return null;
   const emit = emitterFor(decoder, H);
   return emit && kernelOf(H, JSON.stringify(decoder), emit);
 }

@@ -1,12 +1,14 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import type { DecoderSpec } from '../decoders/decoder-spec.ts';
 import { flippingThresholds, iterationCap, messageThresholds, minSumSettings } from '../decoders/settings.ts';
-import { columnDegrees } from '../decoders/tanner-graph.ts';
+import { columnDegrees, largestDegree } from '../decoders/tanner-graph.ts';
 import { bitFlippingKernel } from './bit-flipping-kernel.ts';
 import { gallagerKernel } from './gallager-kernel.ts';
 import { planGraph } from './graph-plan.ts';
 import type { KernelImage } from './kernel-image.ts';
+import { largestCountKernel } from './largest-count-kernel.ts';
 import { minSumKernel } from './min-sum-kernel.ts';
+import { peelingKernel } from './peeling-kernel.ts';
 import { sumProductKernel } from './sum-product-kernel.ts';
 
 type Emitter = () => KernelImage;
@@ -29,6 +31,10 @@ export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | nul
       return () =>
         bitFlippingKernel(planGraph(H, [thresholds]), { cap, remembersReceived: false, stopsWhenStuck: true });
     }
+    case 'bit-flipping-max':
+      return () => largestCountKernel(planGraph(H), { cap, single: false });
+    case 'peeling':
+      return () => peelingKernel(planGraph(H, [], { rowsInOrder: true }), cap);
     case 'gradient-descent':
       return gradientDescent(H, degrees, decoder, cap);
     case 'gallager-a':
@@ -48,13 +54,11 @@ export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | nul
 
 /** With v the failing checks, and one more where the bit differs from the received one, Δ_j = 1 + d_j − 2v. A whole
  *  number is below θ when it is at most ⌈θ⌉ − 1: when v ≥ (2 + d_j − ⌈θ⌉)/2. */
-function gradientDescent(
-  H: SparseMatrix,
-  degrees: Uint32Array,
-  spec: Of<'gradient-descent'>,
-  cap: number,
-): Emitter | null {
-  if (spec.flips === 'single') return null;
+function gradientDescent(H: SparseMatrix, degrees: Uint32Array, spec: Of<'gradient-descent'>, cap: number): Emitter {
+  if (spec.flips === 'single') {
+    const most = largestDegree(degrees);
+    return () => largestCountKernel(planGraph(H, [degrees.map((d) => most - d)]), { cap, single: true });
+  }
   const bound = Math.ceil(spec.threshold ?? -0.5);
   const least = degrees.map((d) => Math.min(d + 2, Math.max(0, Math.ceil((2 + d - bound) / 2))));
   return () => bitFlippingKernel(planGraph(H, [least]), { cap, remembersReceived: true, stopsWhenStuck: true });

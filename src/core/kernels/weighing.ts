@@ -1,4 +1,4 @@
-import { sumOfBits } from './adder-network.ts';
+import { addPlanes, sumOfBits } from './adder-network.ts';
 import {
   base,
   countLoop,
@@ -59,21 +59,7 @@ export function emitWeighing(
 function addWords(f: FunctionBuilder, total: readonly Local<'v128'>[], words: readonly V128[]): Statement[] {
   if (words.length === 0) return [];
   const { code, planes } = sumOfBits(f, words);
-  const carry = f.borrow('v128');
-  const next = f.borrow('v128');
-  const differ = f.borrow('v128');
-  const parts = [...code, carry.set(v128.zero)];
-  total.forEach((digit, k) => {
-    const plane = planes[k];
-    if (plane)
-      parts.push(
-        differ.set(v128.xor(digit, plane)),
-        next.set(v128.bitselect(carry, digit, differ)),
-        digit.set(v128.xor(differ, carry)),
-      );
-    else parts.push(next.set(v128.and(digit, carry)), digit.set(v128.xor(digit, carry)));
-    parts.push(carry.set(next));
-  });
-  f.giveBack(carry, next, differ, ...planes);
+  const parts = [...code, ...addPlanes(f, total, planes)];
+  f.giveBack(...planes);
   return parts;
 }

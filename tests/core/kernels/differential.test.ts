@@ -3,10 +3,10 @@ import { describe, expect, test } from 'vitest';
 import { fastShard } from '../../../src/core/kernels/index.ts';
 import { runShard } from '../../../src/core/simulation/shard.ts';
 import { runs } from './arbitrary-runs.ts';
-import { hardDecoders } from './decoder-arbitraries.ts';
+import { exactDecoders } from './decoder-arbitraries.ts';
 
 describe('a kernel gives the reference tally to the last integer, on any matrix, for', () => {
-  for (const [name, decoders] of Object.entries(hardDecoders)) {
+  for (const [name, decoders] of Object.entries(exactDecoders)) {
     test(name, async () => {
       await fc.assert(
         fc.asyncProperty(runs(decoders), async ({ spec, index }) => {
@@ -16,4 +16,16 @@ describe('a kernel gives the reference tally to the last integer, on any matrix,
       );
     });
   }
+
+  test('peeling of erasures', async () => {
+    await fc.assert(
+      fc.asyncProperty(
+        runs(() => fc.constant({ kind: 'peeling' }), { erasures: true }),
+        async ({ spec, index }) => {
+          expect(await fastShard(spec, index)).toEqual(await runShard(spec, index, 'reference'));
+        },
+      ),
+      { numRuns: 60 },
+    );
+  });
 });
