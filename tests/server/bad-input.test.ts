@@ -109,7 +109,7 @@ describe('a run', () => {
   it.each([
     [{ framesPerShard: 0 }, 'framesPerShard', /at least 1 frame/],
     [{ framesPerShard: 1.5 }, 'framesPerShard', /whole number of frames/],
-    [{ framesPerShard: 1e8 }, 'framesPerShard', /10000000/],
+    [{ framesPerShard: 1e8 }, 'framesPerShard', /10 000 000/],
     [{ stopping: { frameErrors: 0, maxFrames: 10 } }, 'stopping.frameErrors', /1/],
     [{ stopping: { frameErrors: 1, maxFrames: 0 } }, 'stopping.maxFrames', /1/],
     [{ stopping: { frameErrors: 1 } }, 'stopping.maxFrames', /whole number of frames/],
@@ -152,7 +152,7 @@ describe('a shard', () => {
     [{ undetected: 4 }, 'undetected', /at most 3/],
     [{ iterations: 99 }, 'iterations', /100/],
     [{ iterationHistogram: [1] }, 'iterationHistogram', /sum to 100/],
-    [{ frameErrors: -1 }, 'frameErrors', />=0/],
+    [{ frameErrors: -1 }, 'frameErrors', /whole number from 0/],
     [{ frameErrors: 0.5 }, 'frameErrors', /whole number/],
     [{ frameErrors: 2 ** 60 }, 'frameErrors', /\S/],
   ])('with a tally of %o is refused, naming %s', async (tally, field, accepted) => {

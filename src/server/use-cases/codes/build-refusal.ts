@@ -3,10 +3,10 @@ import { Refusal, type RefusalCode } from '../../refusal.ts';
 
 const engineCodes: readonly string[] = ['param', 'infeasible', 'limit', 'format'] satisfies RefusalCode[];
 
-/** An engine error out of a worker, as the server's refusal; a defect of the program stays a defect. */
-export function refusalOfBuild(failure: BuildFailure): Refusal {
+/** An engine error out of a worker, as the server's refusal; a defect of the program stays a plain error. */
+export function refusalOfBuild(failure: BuildFailure): Refusal | Error {
   const { code, message, data } = failure;
-  if (!engineCodes.includes(code)) return new Refusal('internal', `The build failed: ${message}`);
+  if (!engineCodes.includes(code)) return new Error(`The build worker failed: ${message}`);
   const fields = typeof data.param === 'string' ? { [fieldOf(data.param)]: acceptedOf(data, message) } : undefined;
   const reason =
     code === 'infeasible'

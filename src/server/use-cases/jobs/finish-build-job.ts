@@ -1,6 +1,7 @@
 import type { BuildAnswer } from '@workers/build/api.ts';
 import { nowText } from '../../context.ts';
 import type { Database } from '../../db/database.ts';
+import { isStorageError } from '../../db/storage-error.ts';
 import { Refusal } from '../../refusal.ts';
 import { endJob, type JobError, type StoredJob } from '../../repositories/jobs.ts';
 import { refusalOfBuild } from '../codes/build-refusal.ts';
@@ -32,6 +33,8 @@ async function outcome(
     return undefined;
   } catch (error) {
     if (error instanceof Refusal) return { code: error.code, message: error.message };
-    throw error;
+    if (isStorageError(error)) throw error;
+    console.error(`Job ${keeping.jobId}:`, error);
+    return { code: 'internal', message: 'The build failed by a fault of the program; it has been logged.' };
   }
 }
