@@ -8,7 +8,7 @@ export function breadthFirstGirth(H: SparseMatrix): number {
       ? [...T.colIndex.subarray(T.rowStart[x], T.rowStart[x + 1])].map((row) => H.cols + row)
       : [...H.colIndex.subarray(H.rowStart[x - H.cols], H.rowStart[x - H.cols + 1])];
   let girth = 0;
-  for (let root = 0; root < H.cols; root++) {
+  for (let root = 0; root < H.cols && girth !== 4; root++) {
     const distance = new Map([[root, 0]]);
     const parent = new Map<number, number>();
     const queue = [root];

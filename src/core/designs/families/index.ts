@@ -6,10 +6,13 @@ import { denniston } from './denniston.ts';
 import { generalisedQuadrangle } from './generalised-quadrangle.ts';
 import { hermitianUnital } from './hermitian-unital.ts';
 import { inversivePlane } from './inversive-plane.ts';
+import { linearGroupSteiner } from './linear-group-steiner.ts';
 import { lu3 } from './lu3.ts';
 import { projectiveGeometry } from './projective-geometry.ts';
 import { projectivePlane } from './projective-plane.ts';
+import { projectiveSpread } from './projective-spread.ts';
 import { puncturedAffinePlane } from './punctured-affine-plane.ts';
+import { reeUnital } from './ree-unital.ts';
 import { sphericalGeometry } from './spherical-geometry.ts';
 import { splitCayleyHexagon } from './split-cayley-hexagon.ts';
 import { steinerTriple } from './steiner-triple.ts';
@@ -24,10 +27,13 @@ export const families: readonly Family[] = [
   inversivePlane,
   sphericalGeometry,
   hermitianUnital,
+  reeUnital,
   denniston,
   generalisedQuadrangle,
   lu3,
   splitCayleyHexagon,
+  linearGroupSteiner,
+  projectiveSpread,
   steinerTriple,
 ];
 
