@@ -7,16 +7,31 @@ interface Props<V extends string> {
   choices: readonly { value: V; label: string; note?: string }[];
   onChange: (value: V) => void;
   disabled?: boolean;
+  /** Many choices stand in columns of one width, a few share the row. */
+  columns?: boolean;
   className?: string;
 }
 
 /** A few exclusive choices side by side: radio buttons that look like cells of one ruled strip. */
-export function ChoiceGroup<V extends string>({ legend, value, choices, onChange, disabled, className }: Props<V>) {
+export function ChoiceGroup<V extends string>({
+  legend,
+  value,
+  choices,
+  onChange,
+  disabled,
+  columns,
+  className,
+}: Props<V>) {
   const name = useId();
   return (
     <fieldset className={classes('min-w-0', className)} disabled={disabled}>
       <legend className="mb-1 text-quiet text-tiny">{legend}</legend>
-      <div className="flex flex-wrap border-rule border-t border-l">
+      <div
+        className={classes(
+          'border-rule border-t border-l',
+          columns ? 'grid grid-cols-[repeat(auto-fill,minmax(min(15rem,100%),1fr))]' : 'flex flex-wrap',
+        )}
+      >
         {choices.map((choice) => (
           <label
             key={choice.value}

@@ -81,6 +81,11 @@ function HeadCell<Row>({ column, order, onOrder }: HeadProps<Row>) {
       </th>
     );
   }
+  const arrow = (
+    <span aria-hidden="true" className="inline-block w-2 text-tiny">
+      {active ? (active.down ? '▾' : '▴') : ''}
+    </span>
+  );
   return (
     <th scope="col" className={look} aria-sort={active ? (active.down ? 'descending' : 'ascending') : 'none'}>
       <button
@@ -88,10 +93,9 @@ function HeadCell<Row>({ column, order, onOrder }: HeadProps<Row>) {
         className="inline-flex items-baseline gap-1 font-semibold hover:text-act"
         onClick={() => onOrder({ key: column.key, down: active ? !active.down : false })}
       >
+        {numeric(column) && arrow}
         {column.header}
-        <span aria-hidden="true" className="w-2 text-tiny">
-          {active ? (active.down ? '▾' : '▴') : ''}
-        </span>
+        {!numeric(column) && arrow}
       </button>
     </th>
   );

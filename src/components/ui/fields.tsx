@@ -2,8 +2,8 @@ import type { InputHTMLAttributes, ReactNode, SelectHTMLAttributes, TextareaHTML
 import { classes } from './classes.ts';
 import { Field } from './Field.tsx';
 
-const CONTROL =
-  'w-full min-w-0 min-h-9 border-0 border-b border-ink bg-transparent px-0.5 py-1 font-mono text-ink placeholder:text-quiet aria-invalid:border-b-2 aria-invalid:border-fail disabled:border-rule disabled:text-quiet';
+const TEXT = 'w-full min-w-0 py-1 text-ink placeholder:text-quiet aria-invalid:border-fail disabled:text-quiet';
+const LINE = `${TEXT} min-h-9 border-0 border-b border-ink px-0.5 font-mono aria-invalid:border-b-2 disabled:border-rule`;
 
 interface Labelled {
   label: ReactNode;
@@ -18,7 +18,7 @@ type InputProps = Labelled & Omit<InputHTMLAttributes<HTMLInputElement>, 'classN
 export function TextField({ label, hint, error, className, required, ...input }: InputProps) {
   return (
     <Field label={label} hint={hint} error={error} required={required} className={className}>
-      {(control) => <input type="text" {...input} {...control} className={CONTROL} />}
+      {(control) => <input type="text" {...input} {...control} className={classes(LINE, 'bg-transparent')} />}
     </Field>
   );
 }
@@ -41,7 +41,7 @@ export function SelectField({ label, hint, error, className, required, choices, 
   return (
     <Field label={label} hint={hint} error={error} required={required} className={className}>
       {(control) => (
-        <select {...select} {...control} className={classes(CONTROL, 'bg-ground')}>
+        <select {...select} {...control} className={classes(LINE, 'bg-ground')}>
           {choices.map((choice) => (
             <option key={choice.value} value={choice.value} disabled={choice.disabled}>
               {choice.label}
@@ -59,7 +59,7 @@ export function TextAreaField({ label, hint, error, className, required, ...area
   return (
     <Field label={label} hint={hint} error={error} required={required} className={className}>
       {(control) => (
-        <textarea rows={3} {...area} {...control} className={classes(CONTROL, 'border border-rule px-2 font-sans')} />
+        <textarea rows={3} {...area} {...control} className={classes(TEXT, 'border border-ink bg-transparent px-2')} />
       )}
     </Field>
   );

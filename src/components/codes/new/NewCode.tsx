@@ -124,6 +124,7 @@ function FamilyChoice({ families, value, onChange }: FamilyChoiceProps) {
   return (
     <ChoiceGroup
       legend="construction"
+      columns
       value={value}
       onChange={(id) => {
         const family = families.find((candidate) => candidate.id === id);

@@ -44,7 +44,8 @@ function graded(label: string, known: Graded<Enclosure>, text: (e: Enclosure) =>
 
 function rateRow({ k, n }: CodePrediction): TitleRow {
   const { lower, upper } = k.value;
-  const value = lower === upper ? scientific(lower / n) : `${scientific(lower / n)} to ${scientific(upper / n)}`;
+  const value =
+    lower === upper ? scientific(lower / n, 4) : `${scientific(lower / n, 4)} to ${scientific(upper / n, 4)}`;
   return { label: 'Rate', value, grade: k.grade, note: 'k / n' };
 }
 

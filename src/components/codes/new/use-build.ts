@@ -27,15 +27,21 @@ export function useBuild() {
     setBuild({ state: 'working', step: null });
     const from = performance.now();
     const still = () => running.current === controller;
+    // A step can be told after the result, on a channel of its own; nothing counts once the build has ended.
+    const end = (outcome: BuildState) => {
+      if (!still()) return;
+      running.current = null;
+      setBuild(outcome);
+    };
     try {
       const { buildCodeInWorker } = await import('@/client/build-pool.ts');
       const built = await buildCodeInWorker(request, {
         signal: controller.signal,
         onProgress: (step) => still() && setBuild({ state: 'working', step }),
       });
-      if (still()) setBuild({ state: 'built', built, request, elapsedMs: performance.now() - from });
+      end({ state: 'built', built, request, elapsedMs: performance.now() - from });
     } catch (error) {
-      if (still()) setBuild({ state: 'refused', refusal: refusalOfBuild(error) });
+      end({ state: 'refused', refusal: refusalOfBuild(error) });
     }
   }, []);
 
