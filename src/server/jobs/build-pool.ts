@@ -1,8 +1,8 @@
-import { Worker } from 'node:worker_threads';
+import type { Worker } from 'node:worker_threads';
 import type { BuildAnswer } from '@workers/build/api.ts';
 import type { NewCode } from '@/api/codes.ts';
 import { Refusal } from '../refusal.ts';
-import { workerEntry } from './worker-entry.ts';
+import { startWorker } from './start-worker.ts';
 
 export type BuildRequest = Pick<NewCode, 'design' | 'derivation'>;
 
@@ -36,8 +36,7 @@ export function createBuildPool(limits: Partial<Limits> = {}): BuildPool {
   let nextId = 1;
 
   function start(): Worker {
-    const { file, execArgv } = workerEntry('build');
-    const worker = new Worker(file, { execArgv, resourceLimits: { maxOldGenerationSizeMb: heapMb } });
+    const worker = startWorker('build', { maxOldGenerationSizeMb: heapMb });
     alive.add(worker);
     worker.once('exit', () => {
       alive.delete(worker);
@@ -60,6 +59,8 @@ export function createBuildPool(limits: Partial<Limits> = {}): BuildPool {
     const id = nextId++;
     worker.removeAllListeners('message').removeAllListeners('error');
     const timer = setTimeout(() => fail(worker, task, timer, tooLong(timeoutMs)), timeoutMs);
+    // An answer given already stands; this is for a worker that ends in silence.
+    worker.once('exit', () => fail(worker, task, timer, deathOf(new Error('The build worker ended early.'), heapMb)));
     worker.on('message', (message: { id: number; answer?: BuildAnswer }) => {
       if (message.id !== id || !message.answer) return;
       clearTimeout(timer);
