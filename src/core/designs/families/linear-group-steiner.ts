@@ -9,51 +9,11 @@ import { BlockList } from '../geometry/block-list.ts';
 import { projectiveLineGenerators } from '../geometry/circles.ts';
 import { predictFlatCodes } from '../geometry/flat-codes.ts';
 import { orbitKeys, pointsOfKey } from '../geometry/line-group.ts';
+import { LINEAR_GROUP_SYSTEMS } from '../geometry/linear-group-systems.ts';
 import { rankWithIrreducibleHeart } from '../geometry/odd-rank.ts';
 import { exactly } from '../partial-linear-prediction.ts';
 
-/** Base blocks on GF(q) ∪ {∞}, ∞ the number q, whose orbits under PSL(2,q) (PΣL(2,27) for 27) make the system. They were
- *  found by exact cover on the orbits of 5-subsets, the method of Denniston 1976; a test repeats the search for 24. */
-const BASE_BLOCKS: Readonly<
-  Record<number, { k: number; semilinear: boolean; blocks: readonly (readonly number[])[] }>
-> = {
-  24: {
-    k: 6,
-    semilinear: false,
-    blocks: [
-      [0, 1, 2, 3, 12, 23],
-      [0, 1, 2, 5, 14, 23],
-      [0, 1, 3, 7, 10, 23],
-    ],
-  },
-  28: {
-    k: 7,
-    semilinear: true,
-    blocks: [
-      [0, 1, 2, 3, 4, 5, 27],
-      [0, 1, 3, 7, 10, 18, 27],
-    ],
-  },
-  48: {
-    k: 6,
-    semilinear: false,
-    blocks: [
-      [0, 1, 2, 3, 9, 47],
-      [0, 1, 2, 12, 19, 47],
-      [0, 1, 2, 6, 35, 47],
-      [0, 1, 2, 13, 26, 47],
-      [0, 1, 2, 5, 36, 47],
-      [0, 1, 3, 14, 22, 47],
-      [0, 1, 3, 11, 43, 47],
-      [0, 1, 3, 15, 21, 47],
-      [0, 1, 3, 19, 27, 47],
-      [0, 1, 4, 13, 15, 47],
-      [0, 1, 4, 19, 40, 47],
-    ],
-  },
-};
-
-const POINTS = Object.keys(BASE_BLOCKS).map(Number);
+const POINTS = Object.keys(LINEAR_GROUP_SYSTEMS).map(Number);
 
 /** Steiner 5-designs with PSL(2,v−1) acting: S(5,6,24), S(5,7,28), S(5,6,48), S(5,6,84). Source: Denniston 1976. */
 export const linearGroupSteiner = defineFamily({
@@ -68,7 +28,7 @@ export const linearGroupSteiner = defineFamily({
   },
   schema: z.strictObject({ v: z.number().int() }),
   require: ({ v }) => {
-    if (!BASE_BLOCKS[v]) throw new ParamError('v', v, `one of ${POINTS.join(', ')}`);
+    if (!LINEAR_GROUP_SYSTEMS[v]) throw new ParamError('v', v, `one of ${POINTS.join(', ')}`);
   },
   *enumerate({ maxPoints, maxBlocks }) {
     for (const v of POINTS) if (v <= maxPoints && systemCounts(v).b <= maxBlocks) yield { v };
@@ -78,7 +38,7 @@ export const linearGroupSteiner = defineFamily({
 });
 
 function systemCounts(v: number) {
-  const { k } = BASE_BLOCKS[v]!;
+  const { k } = LINEAR_GROUP_SYSTEMS[v]!;
   const through = (i: number) => binomial(v - i, 5 - i) / binomial(k - i, 5 - i);
   return { v, b: through(0), k, r: through(1), lambda: through(2) };
 }
@@ -97,15 +57,13 @@ function rankOfSystem(v: number): Graded<Enclosure> {
 }
 
 function buildSystem(v: number): BlockDesign {
-  const { k, semilinear, blocks } = BASE_BLOCKS[v]!;
+  const { k, semilinear, baseBlocks } = LINEAR_GROUP_SYSTEMS[v]!;
   const field = galoisField(v - 1);
   const list = new BlockList(v, systemCounts(v).b, k);
   const block = new Uint32Array(k);
-  for (const base of blocks) {
-    for (const key of orbitKeys(field, base, semilinear)) {
-      pointsOfKey(key, v, block);
-      list.add(block);
-    }
+  for (const key of orbitKeys(field, baseBlocks, semilinear)) {
+    pointsOfKey(key, v, block);
+    list.add(block);
   }
   return list.finish({ symmetry: projectiveLineGenerators(field, field.exp[2]!) });
 }

@@ -29,15 +29,22 @@ export function* specialLineMaps(field: GaloisField): Generator<Uint32Array> {
   }
 }
 
-/** The orbit of a subset under PSL(2,q), then under the Frobenius map too if asked: each member once, as keys that
- *  hold the points in base q + 1, ascending. */
-export function orbitKeys(field: GaloisField, subset: readonly number[], semilinear: boolean): Float64Array {
+/** The members of the subsets' orbits under PSL(2,q), and the Frobenius map too if asked: each member once, as keys that
+ *  hold the points in base q + 1, in dictionary order. */
+export function orbitKeys(
+  field: GaloisField,
+  subsets: readonly (readonly number[])[],
+  semilinear: boolean,
+): Float64Array {
   const { q, p, m } = field;
-  const starts = [subset];
-  for (let i = 1; semilinear && i < m; i++) starts.push(starts[i - 1]!.map((x) => (x === q ? q : field.pow(x, p))));
-  const order = (q * (q * q - 1)) / 2;
-  const keys = new Float64Array(order * starts.length);
-  const points = new Uint32Array(subset.length);
+  const frobenius = (subset: readonly number[]) => subset.map((x) => (x === q ? q : field.pow(x, p)));
+  const starts = [...subsets];
+  for (let i = subsets.length; semilinear && i < m * subsets.length; i++) {
+    starts.push(frobenius(starts[i - subsets.length]!));
+  }
+  const groupOrder = (q * (q * q - 1)) / 2;
+  const keys = new Float64Array(groupOrder * starts.length);
+  const points = new Uint32Array(subsets[0]!.length);
   let size = 0;
   for (const map of specialLineMaps(field)) {
     for (const start of starts) {
@@ -46,7 +53,7 @@ export function orbitKeys(field: GaloisField, subset: readonly number[], semilin
     }
   }
   keys.sort();
-  let kept = 0;
+  let kept = 0; // a stabiliser of order s writes each of its orbit's members s times
   for (let i = 0; i < keys.length; i++) if (i === 0 || keys[i] !== keys[kept - 1]) keys[kept++] = keys[i]!;
   return keys.subarray(0, kept);
 }
