@@ -25,18 +25,29 @@ function reducedRows(H: SparseMatrix): Uint32Array[] {
   return pivots.filter((row) => row !== undefined);
 }
 
-/** The smallest weight of a word other than zero that every row meets evenly, by listing all 2^k of them. */
-export function exhaustiveDistance(H: SparseMatrix): number {
+/** How many words of each weight every row meets evenly, by listing all 2^k of them in Gray order. */
+export function weightDistribution(H: SparseMatrix): Map<number, number> {
   const basis = kernelBasis(H);
   const word = new Uint32Array(Math.ceil(H.cols / 32));
-  let least = 0;
+  const counts = new Uint32Array(H.cols + 1);
+  counts[0] = 1;
   for (let i = 1; i < 2 ** basis.length; i++) {
-    const flip = 31 - Math.clz32(i & -i); // Gray code: one basis word at a time
-    for (let w = 0; w < word.length; w++) word[w]! ^= basis[flip]![w]!;
-    const weight = word.reduce((sum, bits) => sum + ones(bits), 0);
-    if (least === 0 || weight < least) least = weight;
+    const flip = basis[31 - Math.clz32(i & -i)]!;
+    let weight = 0;
+    for (let w = 0; w < word.length; w++) {
+      word[w]! ^= flip[w]!;
+      weight += ones(word[w]!);
+    }
+    counts[weight]!++;
   }
-  return least;
+  return new Map(
+    [...counts].map((count, weight): [number, number] => [weight, count]).filter(([, count]) => count > 0),
+  );
+}
+
+/** The smallest weight of a word other than zero; 0 when there is none. */
+export function exhaustiveDistance(H: SparseMatrix): number {
+  return [...weightDistribution(H).keys()][1] ?? 0;
 }
 
 function kernelBasis(H: SparseMatrix): Uint32Array[] {
@@ -57,7 +68,7 @@ function kernelBasis(H: SparseMatrix): Uint32Array[] {
 }
 
 function ones(bits: number): number {
-  let count = 0;
-  for (let rest = bits; rest !== 0; rest &= rest - 1) count++;
-  return count;
+  let x = bits - ((bits >>> 1) & 0x55555555);
+  x = (x & 0x33333333) + ((x >>> 2) & 0x33333333);
+  return Math.imul((x + (x >>> 4)) & 0x0f0f0f0f, 0x01010101) >>> 24;
 }
