@@ -60,7 +60,7 @@ const columns = (projectId: string): Column<Run>[] => [
     key: 'name',
     header: 'run',
     cell: (run) => (
-      <a className="link font-semibold" href={paths.run(projectId, run.id)}>
+      <a className="link inline-block min-w-44 font-semibold" href={paths.run(projectId, run.id)}>
         {run.name}
       </a>
     ),

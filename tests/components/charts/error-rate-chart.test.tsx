@@ -71,7 +71,9 @@ describe('the error-rate chart', () => {
   });
 
   it('shades what lies beyond the last point as not measured', () => {
-    expect(show(threePoints).svg.querySelector('[data-unmeasured]')?.textContent).toContain('not measured');
+    const { svg, container } = show(threePoints);
+    expect(Number(svg.querySelector('[data-unmeasured] rect')?.getAttribute('width'))).toBeGreaterThan(20);
+    expect(container.textContent).toContain('shaded: not measured');
   });
 
   it('marks the requirement of the rate that is shown', () => {

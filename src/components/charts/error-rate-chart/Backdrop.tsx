@@ -3,9 +3,8 @@ import { uncodedFormula, uncodedLabel, uncodedRate } from '@/client/curves/uncod
 import type { ChartWindow, Requirement } from './domain.ts';
 import type { Frame } from './frame.ts';
 
-/** Room that the words need; where there is less they stand upright. */
+/** Room that the words need; the key below the chart says them in any case. */
 const WORDS_PX = 84;
-const LEAST_NAMED_PX = 20;
 
 /** Shades where nothing was measured: to the right of the last point of all shown curves. */
 export function Unmeasured({ frame, last }: { frame: Frame; last: number | null }) {
@@ -16,13 +15,10 @@ export function Unmeasured({ frame, last }: { frame: Frame; last: number | null 
   return (
     <g data-unmeasured>
       <rect x={x} y={frame.top} width={width} height={frame.bottom - frame.top} fill="var(--unmeasured)" />
-      {width > LEAST_NAMED_PX && (
+      {width > WORDS_PX && (
         <text
-          transform={
-            width > WORDS_PX
-              ? `translate(${frame.right - 6} ${frame.bottom - 8})`
-              : `translate(${frame.right - 6} ${frame.bottom - WORDS_PX}) rotate(-90)`
-          }
+          x={frame.right - 6}
+          y={frame.bottom - 8}
           textAnchor="end"
           fontSize={12}
           fontStyle="italic"

@@ -46,6 +46,9 @@ export function MarkKey({ interval, kind }: { interval: string; kind: RateKind }
       <KeyItem text="no error seen: the rate is below the bar">
         <path d={boundPath(9, 0.8)} strokeWidth="1.4" transform="scale(0.9)" />
       </KeyItem>
+      <KeyItem text="shaded: not measured">
+        <rect x="0.5" y="2.5" width="17" height="11" fill="var(--unmeasured)" stroke="var(--rule)" />
+      </KeyItem>
       <KeyItem text={uncodedFormula(kind)}>
         <path d="M0 8h18" strokeWidth="1.1" />
       </KeyItem>
