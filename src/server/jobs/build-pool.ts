@@ -57,24 +57,25 @@ export function createBuildPool(limits: Partial<Limits> = {}): BuildPool {
 
   function give(worker: Worker, task: Task): void {
     const id = nextId++;
-    worker.removeAllListeners('message').removeAllListeners('error');
-    const timer = setTimeout(() => fail(worker, task, timer, tooLong(timeoutMs)), timeoutMs);
-    // An answer given already stands; this is for a worker that ends in silence.
-    worker.once('exit', () => fail(worker, task, timer, deathOf(new Error('The build worker ended early.'), heapMb)));
-    worker.on('message', (message: { id: number; answer?: BuildAnswer }) => {
-      if (message.id !== id || !message.answer) return;
+    const settle = (answer: BuildAnswer) => {
       clearTimeout(timer);
-      task.resolve(message.answer);
+      worker.off('message', onMessage).off('error', onError).off('exit', onExit);
+      task.resolve(answer);
+    };
+    const fail = (answer: BuildAnswer) => {
+      settle(answer);
+      void worker.terminate();
+    };
+    const onMessage = (message: { id: number; answer?: BuildAnswer }) => {
+      if (message.id !== id || !message.answer) return;
+      settle(message.answer);
       rest(worker);
-    });
-    worker.once('error', (error: NodeJS.ErrnoException) => fail(worker, task, timer, deathOf(error, heapMb)));
+    };
+    const onError = (error: NodeJS.ErrnoException) => fail(deathOf(error, heapMb));
+    const onExit = () => fail(deathOf(new Error('The build worker ended without an answer.'), heapMb));
+    const timer = setTimeout(() => fail(tooLong(timeoutMs)), timeoutMs);
+    worker.on('message', onMessage).on('error', onError).on('exit', onExit);
     worker.postMessage({ id, request: task.request });
-  }
-
-  function fail(worker: Worker, task: Task, timer: NodeJS.Timeout, answer: BuildAnswer): void {
-    clearTimeout(timer);
-    task.resolve(answer);
-    void worker.terminate();
   }
 
   function rest(worker: Worker): void {
