@@ -1,4 +1,4 @@
-import { lazy, Suspense, useEffect, useState } from 'react';
+import { lazy, type RefObject, Suspense, useEffect, useRef, useState } from 'react';
 import { counted, wholeNumber } from '@/components/ui/numbers.ts';
 import type { Weights } from './WeightBars.tsx';
 
@@ -9,7 +9,7 @@ interface Props {
   columnWeights: Weights;
 }
 
-/** Row and column weights in words and as bars; the drawing library is fetched only once this is on the page. */
+/** Row and column weights in words and as bars; the drawing library is fetched only once they are in view. */
 export default function WeightCharts({ rowWeights, columnWeights }: Props) {
   return (
     <div className="grid gap-6 sm:grid-cols-2">
@@ -20,13 +20,13 @@ export default function WeightCharts({ rowWeights, columnWeights }: Props) {
 }
 
 function Weight({ of, weights }: { of: 'row' | 'column'; weights: Weights }) {
-  const [inBrowser, setInBrowser] = useState(false);
-  useEffect(() => setInBrowser(true), []);
+  const place = useRef<HTMLDivElement>(null);
+  const seen = useSeen(place);
   return (
     <figure className="min-w-0">
       <figcaption className="text-tiny">{weightText(weights, of)}</figcaption>
-      <div className="mt-1 h-33" aria-hidden="true">
-        {inBrowser && (
+      <div ref={place} className="mt-1 h-33" aria-hidden="true">
+        {seen && (
           <Suspense fallback={null}>
             <WeightBars of={of} weights={weights} />
           </Suspense>
@@ -34,6 +34,22 @@ function Weight({ of, weights }: { of: 'row' | 'column'; weights: Weights }) {
       </div>
     </figure>
   );
+}
+
+/** Whether the element has been on the screen yet. */
+function useSeen(place: RefObject<Element | null>): boolean {
+  const [seen, setSeen] = useState(false);
+  useEffect(() => {
+    if (!place.current) return;
+    const watcher = new IntersectionObserver((entries) => {
+      if (!entries.some((entry) => entry.isIntersecting)) return;
+      setSeen(true);
+      watcher.disconnect();
+    });
+    watcher.observe(place.current);
+    return () => watcher.disconnect();
+  }, [place]);
+  return seen;
 }
 
 /** "Every row has weight 17 (273 rows)" or "Rows: 12 of weight 3, 40 of weight 4". */

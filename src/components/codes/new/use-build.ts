@@ -1,5 +1,5 @@
 import type { BuiltCode } from '@workers/build/api.ts';
-import { useCallback, useEffect, useRef, useState } from 'react';
+import { startTransition, useCallback, useEffect, useRef, useState } from 'react';
 import type { SheetRequest, SheetStep } from '@/core/codes/sheet.ts';
 import { type Refusal, refusalFrom, refusalOf } from '../refusal.ts';
 
@@ -31,7 +31,8 @@ export function useBuild() {
     const end = (outcome: BuildState) => {
       if (!still()) return;
       running.current = null;
-      setBuild(outcome);
+      // A long listing is drawn in slices, so that the page answers meanwhile.
+      startTransition(() => setBuild(outcome));
     };
     try {
       const { buildCodeInWorker } = await import('@/client/build-pool.ts');
