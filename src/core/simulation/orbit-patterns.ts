@@ -14,7 +14,7 @@ export interface OrbitPatterns {
 export function orbitPatterns(group: PermutationGroup, weight: number): OrbitPatterns {
   const carriers = carriersToLeast(group);
   const pattern = new Uint32Array(weight);
-  const image = new Uint32Array(weight);
+  const compared = imageComparison(group);
 
   /** Order of the stabiliser of the first `size` positions, or 0 when an element carries them to an earlier pattern. */
   const stabiliser = (size: number): number => {
@@ -28,7 +28,7 @@ export function orbitPatterns(group: PermutationGroup, weight: number): OrbitPat
         continue;
       }
       for (const g of carriers.elements(point)) {
-        const order = comparedToImage(group, g, pattern, size, image);
+        const order = compared(g, pattern, size);
         if (order > 0) return 0;
         if (order === 0) fixing += 1;
       }
@@ -105,20 +105,22 @@ function carriersToLeast(group: PermutationGroup) {
   };
 }
 
-/** Above 0 when g carries the pattern to an earlier one, below 0 to a later one, 0 to itself. */
-function comparedToImage(
-  group: PermutationGroup,
-  g: number,
-  pattern: Uint32Array,
-  size: number,
-  image: Uint32Array,
-): number {
-  for (let i = 0; i < size; i++) {
-    const point = group.apply(g, pattern[i]!);
-    let at = i;
-    for (; at > 0 && image[at - 1]! > point; at--) image[at] = image[at - 1]!;
-    image[at] = point;
-  }
-  for (let i = 0; i < size; i++) if (image[i] !== pattern[i]) return pattern[i]! - image[i]!;
-  return 0;
+/** How a pattern compares with its image under an element g: above 0 when g carries it to an earlier pattern, below 0 to
+ *  a later one, 0 to itself. The earlier of two sets is the one that holds the least position in which they differ. */
+function imageComparison(group: PermutationGroup): (g: number, pattern: Uint32Array, size: number) => number {
+  const mark = new Uint32Array(group.n);
+  let stamp = 0;
+  return (g, pattern, size) => {
+    stamp += 2;
+    for (let i = 0; i < size; i++) mark[pattern[i]!] = stamp;
+    let leastNew = group.n;
+    for (let i = 0; i < size; i++) {
+      const point = group.apply(g, pattern[i]!);
+      if (mark[point] === stamp) mark[point] = stamp + 1;
+      else leastNew = Math.min(leastNew, point);
+    }
+    if (leastNew === group.n) return 0;
+    for (let i = 0; i < size; i++) if (mark[pattern[i]!] === stamp) return pattern[i]! - leastNew;
+    return 0;
+  };
 }
