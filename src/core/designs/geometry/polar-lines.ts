@@ -18,28 +18,29 @@ export interface PolarPoints {
 export function polarPoints(form: PolarForm): PolarPoints {
   const { field, n } = form;
   const { q } = field;
-  const total = (q ** n - 1) / (q - 1);
-  const number = new Int32Array(total).fill(-1);
+  const before = Uint32Array.from({ length: n }, (_, lead) => (q ** (n - 1 - lead) - 1) / (q - 1));
+  const number = new Int32Array((q ** n - 1) / (q - 1)).fill(-1);
   const vectors: Uint32Array[] = [];
   for (let lead = n - 1; lead >= 0; lead--) {
     const x = new Uint32Array(n);
     x[lead] = 1;
     for (let more = true; more; more = countUp(x, lead + 1, q)) {
       if (!form.isSingular(x)) continue;
-      number[positionOf(x, q)] = vectors.length;
+      number[positionOf(x, q, before)] = vectors.length;
       vectors.push(x.slice());
     }
   }
-  return { vectors, numberOf: (x) => number[positionOf(x, q)]! };
+  return { vectors, numberOf: (x) => number[positionOf(x, q, before)]! };
 }
 
-/** Rank of a normalised vector among all of them, those with a later leading coordinate first. */
-function positionOf(x: Uint32Array, q: number): number {
+/** Rank of a normalised vector among all of them, those with a later leading coordinate first. `before[lead]` counts the
+ *  vectors that lead later. */
+function positionOf(x: Uint32Array, q: number, before: Uint32Array): number {
   let lead = 0;
   while (x[lead] === 0) lead++;
   let low = 0;
   for (let i = lead + 1; i < x.length; i++) low = low * q + x[i]!;
-  return (q ** (x.length - 1 - lead) - 1) / (q - 1) + low;
+  return before[lead]! + low;
 }
 
 /** Counts up the coordinates from `first` on in base q, the last one fastest; false when they wrap to zero. */
