@@ -121,6 +121,8 @@ export class RunDriver {
   }
 
   private handOut(): void {
+    // Between the word to stop and the server's answer the status still says running; nothing new may start then.
+    if (this.abort.signal.aborted) return;
     while (this.status === 'running' && this.inFlight < this.ports.workers && this.backlog.length < backlogLimit) {
       const next = nextShard(this.points, this.run.stopping, this.run.framesPerShard);
       if (!next) break;

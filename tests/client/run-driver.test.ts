@@ -70,10 +70,13 @@ function world(run: Run, points: Point[]) {
   const states: string[] = [];
   const views: DriverView[] = [];
   const faults = { serverDown: 0, computeFails: false };
+  const computed = { count: 0 };
   let clock = 0;
   const ports: DriverPorts = {
     workers: 3,
-    async compute() {
+    async compute(_point, _index, signal) {
+      signal.throwIfAborted();
+      computed.count++;
       await Promise.resolve();
       return faults.computeFails
         ? { ok: false, failure: { code: 'param', message: 'threshold: too large' } }
@@ -97,7 +100,7 @@ function world(run: Run, points: Point[]) {
     },
     onView: (view) => views.push(view),
   };
-  return { driver: new RunDriver(run, points, ports), stored, states, views, faults };
+  return { driver: new RunDriver(run, points, ports), stored, states, views, faults, computed };
 }
 
 async function until(condition: () => boolean): Promise<void> {
@@ -162,6 +165,21 @@ test('pause lets shards under way be acknowledged and tells the server', async (
   await until(() => stored.size > before);
   await driver.stop();
   expect(driver.view().status).toBe('stopped');
+});
+
+test('a run that is stopped, or whose page is left, hands out nothing more', async () => {
+  for (const leave of ['stop', 'dispose'] as const) {
+    const { driver, stored, computed } = world(aRun({ stopping: { frameErrors: 1_000_000, maxFrames: 1e9 } }), [
+      aPoint('a'),
+    ]);
+    await driver.start();
+    await until(() => stored.size > 3);
+    const left = driver[leave]();
+    const before = computed.count;
+    await left;
+    await until(() => true);
+    expect(computed.count).toBe(before);
+  }
 });
 
 test('a worker that refuses its spec fails the run with the reason', async () => {

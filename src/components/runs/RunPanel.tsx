@@ -31,8 +31,8 @@ export function RunPanel({ run, points, driver }: Props) {
       <Progress
         label="Share of the run that is done"
         value={fraction}
-        left={progressText(fraction, isAtWork ? driver.timeLeftMs : null)}
-        right={isAtWork ? rateText(driver.framesPerSecond) : ''}
+        left={progressText(fraction, status === 'running' ? driver.timeLeftMs : null)}
+        right={status === 'running' ? rateText(driver.framesPerSecond) : ''}
       />
       <p className="text-quiet text-tiny">{sumText(points)}</p>
       {status === 'waiting-for-server' && (
