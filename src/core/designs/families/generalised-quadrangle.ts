@@ -2,12 +2,12 @@ import { z } from 'zod';
 import { primePowerOf, primePowersUpTo } from '../../algebra/integers.ts';
 import { LimitError, ParamError } from '../../errors.ts';
 import type { Enclosure, Graded } from '../../evidence.ts';
-import type { BlockDesign } from '../block-design.ts';
+import type { BlockDesign, Symmetry } from '../block-design.ts';
 import { type DesignPrediction, defineFamily } from '../family.ts';
 import { BlockList } from '../geometry/block-list.ts';
 import { linearRepresentation } from '../geometry/linear-representation.ts';
-import { hermitianForm, symplecticForm } from '../geometry/polar-forms.ts';
-import { forEachPolarLine, type PolarForm, polarPoints } from '../geometry/polar-lines.ts';
+import { hermitianForm, hermitianSymmetry, symplecticForm, symplecticSymmetry } from '../geometry/polar-forms.ts';
+import { forEachPolarLine, type PolarForm, type PolarPoints, polarPoints } from '../geometry/polar-lines.ts';
 import { transposeDesign } from '../geometry/transpose-design.ts';
 import { between, exactly, predictPartialLinearCodes } from '../partial-linear-prediction.ts';
 
@@ -128,17 +128,21 @@ export function rankOfSymplectic(q: number): Graded<Enclosure> {
 function buildQuadrangle({ kind, q }: Params): BlockDesign {
   if (kind === 'T2star') return linearRepresentation(q);
   const counts = quadrangleCounts({ kind, q });
-  if (kind === 'H3') return polarDesign(hermitianForm(q, 4), counts);
-  if (kind === 'H4') return polarDesign(hermitianForm(q, 5), counts);
-  const symplectic = polarDesign(symplecticForm(q), counts);
+  if (kind === 'H3') return polarDesign(hermitianForm(q, 4), counts, hermitianSymmetry);
+  if (kind === 'H4') return polarDesign(hermitianForm(q, 5), counts, hermitianSymmetry);
+  const symplectic = polarDesign(symplecticForm(q), counts, symplecticSymmetry);
   // Q(4,q) is the dual of W(q): Payne and Thas, 3.2.1.
   return kind === 'W' ? symplectic : transposeDesign(symplectic);
 }
 
-function polarDesign(form: PolarForm, { v, b, k }: { v: number; b: number; k: number }): BlockDesign {
+function polarDesign(
+  form: PolarForm,
+  { v, b, k }: { v: number; b: number; k: number },
+  symmetryOf: (form: PolarForm, points: PolarPoints) => Symmetry[],
+): BlockDesign {
   const points = polarPoints(form);
   if (points.vectors.length !== v) throw new Error(`${v} points expected, ${points.vectors.length} found`);
   const blocks = new BlockList(v, b, k);
   forEachPolarLine(form, points, (line) => blocks.add(line));
-  return blocks.finish();
+  return blocks.finish({ symmetry: symmetryOf(form, points).filter(({ order }) => order > 1) });
 }

@@ -4,7 +4,7 @@ import { LimitError, ParamError } from '../../errors.ts';
 import type { BlockDesign } from '../block-design.ts';
 import { type DesignPrediction, defineFamily } from '../family.ts';
 import { BlockList } from '../geometry/block-list.ts';
-import { grassmann, parabolicForm } from '../geometry/polar-forms.ts';
+import { grassmann, hexagonSymmetry, parabolicForm } from '../geometry/polar-forms.ts';
 import { forEachPolarLine, polarPoints } from '../geometry/polar-lines.ts';
 import { between, predictPartialLinearCodes } from '../partial-linear-prediction.ts';
 
@@ -89,5 +89,5 @@ function buildHexagon(q: number): BlockDesign {
     (x, y) =>
       TITS_EQUATIONS.every(([a, b, c, d]) => grassmann(form.field, x, y, a, b) === grassmann(form.field, x, y, c, d)),
   );
-  return blocks.finish();
+  return blocks.finish({ symmetry: hexagonSymmetry(form, points).filter(({ order }) => order > 1) });
 }

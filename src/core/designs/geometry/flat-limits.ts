@@ -24,14 +24,15 @@ export function requireFlats({ m, flat }: FlatParams, size: { v: number; b: numb
   }
 }
 
-/** Every m, q and flat whose counts fit the window and the limits, by growing order of the field. */
+/** Every m, q and flat whose counts fit the window and the limits, by growing order of the field. From dimension three:
+ *  planes are families of their own. */
 export function* flatsWithin(
   { maxPoints, maxBlocks }: EnumerationWindow,
   counts: (params: FlatParams) => { v: number; b: number; k: number },
 ): Generator<FlatParams> {
   const points = Math.min(maxPoints, MAX_FLAT_POINTS);
-  for (const q of primePowersUpTo(Math.floor(Math.sqrt(points + 1)))) {
-    for (let m = 2; counts({ m, q, flat: 1 }).v <= points; m++) {
+  for (const q of primePowersUpTo(Math.ceil(Math.cbrt(points)))) {
+    for (let m = 3; counts({ m, q, flat: 1 }).v <= points; m++) {
       for (let flat = 1; flat < m; flat++) {
         const { b, k } = counts({ m, q, flat });
         if (b <= maxBlocks && b * k <= MAX_FLAT_INCIDENCES) yield { m, q, flat };
