@@ -1,5 +1,6 @@
 import type { Enclosure, Graded } from '../evidence.ts';
 import type { CodePrediction } from './family.ts';
+import { exactly } from './partial-linear-prediction.ts';
 
 /** The counts of a 2-(v,k,λ) design from which its codes are predicted. */
 export interface TwoDesignCounts {
@@ -10,12 +11,6 @@ export interface TwoDesignCounts {
   /** Blocks on two points. */
   lambda: number;
 }
-
-const exactly = <T>(value: number, grade: Graded<T>['grade'], method: string): Graded<Enclosure> => ({
-  value: { lower: value, upper: value },
-  grade,
-  method,
-});
 
 /** Rank over GF(2) of the incidence matrix of a 2-design.
  *  When r − λ is odd, N·Nᵀ = (r−λ)I + λJ is nonsingular up to the all-one vector, so the rank is v − 1 when blocks
@@ -88,7 +83,9 @@ function distanceFromGirth(
   if (dimension.upper === 0) {
     return { value: { lower: 0, upper: 0 }, grade: 'proved', method: 'the code holds only the zero word' };
   }
-  const lower = orthogonal ? columnWeight + 1 : 2;
-  const upper = Math.max(lower, n - dimension.lower + 1);
+  // Where the dimension may be zero, so may the distance, by the convention for the zero code.
+  const least = Math.min(n, orthogonal ? columnWeight + 1 : 2);
+  const lower = dimension.lower === 0 ? 0 : least;
+  const upper = Math.max(least, n - Math.max(1, dimension.lower) + 1);
   return { value: { lower, upper }, grade: 'bounded', method: 'orthogonal checks below; Singleton above' };
 }

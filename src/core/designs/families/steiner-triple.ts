@@ -1,20 +1,45 @@
 import { z } from 'zod';
-import { InfeasibleError, ParamError } from '../../errors.ts';
-import type { Enclosure, Graded } from '../../evidence.ts';
+import { isPrime, primePowerOf } from '../../algebra/integers.ts';
+import { type SeededRandom, seededRandom } from '../../algebra/seeded-random.ts';
+import { type Citation, InfeasibleError, LimitError, ParamError } from '../../errors.ts';
 import type { BlockDesign, DesignSpec } from '../block-design.ts';
-import { predictTwoDesignCodes } from '../code-prediction.ts';
-import { type DesignPrediction, defineFamily } from '../family.ts';
+import { cyclicSymmetry, developTriples } from '../develop.ts';
+import { defineFamily } from '../family.ts';
+import { affineTriples, nettoTriples, projectiveTriples } from '../triple-systems/algebraic.ts';
 import { boseTriples } from '../triple-systems/bose.ts';
+import { climbTriples } from '../triple-systems/hill-climbing.ts';
+import { removePasches } from '../triple-systems/pasch-removal.ts';
+import { cyclicBaseTriples } from '../triple-systems/peltesohn.ts';
+import { predictTripleSystem } from '../triple-systems/prediction.ts';
 import { skolemTriples } from '../triple-systems/skolem.ts';
 
 /** Largest number of points built here. */
 export const MAX_TRIPLE_POINTS = 3000;
 
-const METHODS = ['bose', 'skolem'] as const;
+/** Largest order on which the descent that removes Pasches is tried, and its budget. */
+const MAX_PASCH_REMOVAL_POINTS = 61;
+const PASCH_MOVES = 300_000;
+
+const PELTESOHN: Citation = {
+  authors: 'R. Peltesohn',
+  year: 1939,
+  title: 'Eine Lösung der beiden Heffterschen Differenzenprobleme',
+  where: 'Compositio Math. 6, 251–257',
+};
+const ANTI_PASCH: Citation = {
+  authors: 'M. J. Grannell, T. S. Griggs, C. A. Whitehead',
+  year: 2000,
+  title: 'The resolution of the anti-Pasch conjecture',
+  where: 'J. Combin. Des. 8, 300–309',
+};
+
+const METHODS = ['bose', 'skolem', 'cyclic', 'affine', 'projective', 'netto', 'random', 'anti-pasch'] as const;
+const SEEDED: readonly string[] = ['random', 'anti-pasch'];
 
 const schema = z.strictObject({
   v: z.number().int().min(3).max(MAX_TRIPLE_POINTS),
   method: z.enum(METHODS),
+  seed: z.string().min(1).max(64).optional(),
 });
 type Params = z.infer<typeof schema>;
 
@@ -39,6 +64,14 @@ export const steinerTriple = defineFamily({
       choices: METHODS,
       example: 'bose',
     },
+    {
+      name: 'seed',
+      label: 'seed of the search',
+      kind: 'text',
+      accepted: 'a text of 1 to 64 characters, with method random or anti-pasch only',
+      example: '1',
+      optional: true,
+    },
   ],
   source: {
     authors: 'T. P. Kirkman',
@@ -47,22 +80,120 @@ export const steinerTriple = defineFamily({
     where: 'Cambridge and Dublin Math. J. 2, 191–204',
   },
   schema,
-  require({ v, method }) {
-    requireTripleOrder(v);
-    if (method === 'bose' && v % 6 !== 3)
-      throw new ParamError('v', v, `v ≡ 3 (mod 6) for method bose; v = ${v} takes skolem`);
-    if (method === 'skolem' && v % 6 !== 1)
-      throw new ParamError('v', v, `v ≡ 1 (mod 6) for method skolem; v = ${v} takes bose`);
+  require(params) {
+    requireTripleOrder(params.v);
+    requireMethodReaches(params);
   },
   *enumerate({ maxPoints, maxBlocks }): Generator<Params> {
     for (let v = 7; v <= Math.min(maxPoints, MAX_TRIPLE_POINTS) && (v * (v - 1)) / 6 <= maxBlocks; v++) {
-      if (v % 6 === 3) yield { v, method: 'bose' };
-      if (v % 6 === 1) yield { v, method: 'skolem' };
+      if (v % 6 !== 1 && v % 6 !== 3) continue;
+      for (const method of METHODS) if (!SEEDED.includes(method) && reaches(method, v)) yield { v, method };
     }
   },
   predict: predictTripleSystem,
-  build: ({ v, method }) => tripleDesign(v, method === 'bose' ? boseTriples(v) : skolemTriples(v)),
+  build: buildTripleSystem,
 });
+
+/** Whether a construction gives a system on v ≡ 1, 3 (mod 6) points. */
+function reaches(method: Params['method'], v: number): boolean {
+  switch (method) {
+    case 'bose':
+      return v % 6 === 3;
+    case 'skolem':
+      return v % 6 === 1;
+    case 'cyclic':
+      return v !== 9;
+    case 'affine':
+      return primePowerOf(v)?.p === 3;
+    case 'projective':
+      return primePowerOf(v + 1)?.p === 2;
+    case 'netto':
+      return v % 12 === 7 && primePowerOf(v) !== null;
+    case 'random':
+      return true;
+    case 'anti-pasch':
+      return isPaschFreeBose(v) || v <= MAX_PASCH_REMOVAL_POINTS;
+  }
+}
+
+const REACH: Record<Params['method'], string> = {
+  bose: 'v ≡ 3 (mod 6) for method bose; v ≡ 1 (mod 6) takes skolem',
+  skolem: 'v ≡ 1 (mod 6) for method skolem; v ≡ 3 (mod 6) takes bose',
+  cyclic: 'any v but 9 for method cyclic',
+  affine: 'a power of 3 for method affine',
+  projective: '2^(m+1) − 1 for method projective',
+  netto: 'a prime power ≡ 7 (mod 12) for method netto',
+  random: 'any admissible v',
+  'anti-pasch': `v ≡ 3 (mod 6) with v/3 prime to 7, or v at most ${MAX_PASCH_REMOVAL_POINTS}, for method anti-pasch`,
+};
+
+function requireMethodReaches({ v, method, seed }: Params): void {
+  if (method === 'cyclic' && v === 9) {
+    throw new InfeasibleError(
+      'peltesohn',
+      'A cyclic triple system exists for every admissible v except 9.',
+      PELTESOHN,
+      'v',
+    );
+  }
+  if (method === 'anti-pasch' && (v === 7 || v === 13)) {
+    const statement = `Every triple system on ${v} points holds a Pasch configuration; 7 and 13 are the only such orders.`;
+    throw new InfeasibleError('anti-pasch', statement, ANTI_PASCH, 'v');
+  }
+  if (!reaches(method, v)) throw new ParamError('v', v, REACH[method]);
+  if (seed !== undefined && !SEEDED.includes(method)) {
+    throw new ParamError('seed', seed, 'no seed: only methods random and anti-pasch search');
+  }
+}
+
+function buildTripleSystem({ v, method, seed = '1' }: Params): BlockDesign {
+  switch (method) {
+    case 'bose':
+      return tripleDesign(v, boseTriples(v));
+    case 'skolem':
+      return tripleDesign(v, skolemTriples(v));
+    case 'cyclic':
+      return tripleDesign(v, developTriples(v, cyclicBaseTriples(v)), { symmetry: cyclicSymmetry(v) });
+    case 'affine': {
+      const { triples, classes } = affineTriples(v);
+      return tripleDesign(v, triples, { classes });
+    }
+    case 'projective':
+      return tripleDesign(v, projectiveTriples(v), { symmetry: cyclicSymmetry(v) });
+    case 'netto':
+      return tripleDesign(v, nettoTriples(v), { symmetry: isPrime(v) ? cyclicSymmetry(v) : undefined });
+    case 'random':
+      return tripleDesign(v, climbOrStop(v, seededRandom(seed)));
+    case 'anti-pasch':
+      return tripleDesign(v, paschFreeTriples(v, seed));
+  }
+}
+
+/** Bose's system over Z_m has no Pasch exactly when 7 does not divide m (Brouwer 1977; checked by count in the tests).
+ *  Elsewhere a seeded descent. @throws LimitError when its budget is spent with Pasches left. */
+function paschFreeTriples(v: number, seed: string): Uint32Array {
+  if (isPaschFreeBose(v)) return boseTriples(v);
+  const random = seededRandom(seed);
+  const { triples, pasches } = removePasches(v, climbOrStop(v, random), random, PASCH_MOVES);
+  if (pasches > 0)
+    throw new LimitError(
+      `removing Pasches with seed "${seed}", ${pasches} left`,
+      PASCH_MOVES + 1,
+      PASCH_MOVES,
+      'moves',
+    );
+  return triples;
+}
+
+function isPaschFreeBose(v: number): boolean {
+  return v % 6 === 3 && (v / 3) % 7 !== 0;
+}
+
+function climbOrStop(v: number, random: SeededRandom): Uint32Array {
+  const triples = climbTriples(v, random);
+  if (!triples) throw new LimitError('hill climbing', 200 * v * v + 1, 200 * v * v, 'steps');
+  return triples;
+}
 
 /** @throws InfeasibleError unless v ≡ 1 or 3 (mod 6), naming the nearest orders on both sides. */
 export function requireTripleOrder(v: number): void {
@@ -103,48 +234,4 @@ function sortTriples(triples: Uint32Array): void {
     triples[e + 1] = x + y + z - low - high;
     triples[e + 2] = high;
   }
-}
-
-function predictTripleSystem({ v, method }: Params): DesignPrediction {
-  const b = (v * (v - 1)) / 6;
-  const counts = { v, b, k: 3, r: (v - 1) / 2, lambda: 1 };
-  const rank = method === 'bose' || method === 'skolem' ? rankOfDirectSystem(v) : rankOfTripleSystem(v);
-  return {
-    t: 2,
-    ...counts,
-    codes: predictTwoDesignCodes(counts, { rank, distance: { points: distanceOfTripleCode(v) } }),
-  };
-}
-
-/** Rank over GF(2) of the systems of Bose and Skolem: v, but for v = 3 (one block) and v = 7 (the plane of order 2).
- *  A vector f orthogonal to every block has f(x,j) + f(y,j) = f(x∘y, j+1). Adding these over the pairs with x∘y fixed
- *  gives f(z,j+1) as a constant, or a constant plus f(z,j), and going round the three levels forces f = 0 as soon as
- *  the quasigroup has two pairs of one level with the same product.
- *  The general theory is Doyen, Hubaut, Vandensavel, Math. Z. 163 (1978) 251–259. */
-function rankOfDirectSystem(v: number): Graded<Enclosure> {
-  const rank = v === 3 ? 1 : v === 7 ? 4 : v;
-  return { value: { lower: rank, upper: rank }, grade: 'proved', method: 'no vector meets every block evenly' };
-}
-
-/** For any triple system: v − d, where 2^d − 1 counts the subsystems on (v − 1)/2 points; d ≤ log₂(v + 1) with
- *  equality for the projective ones alone. Such a subsystem needs (v − 1)/2 ≡ 1, 3 (mod 6), so d = 0 when v ≡ 1, 9 (mod 12).
- *  Source: Doyen, Hubaut, Vandensavel 1978. */
-export function rankOfTripleSystem(v: number): Graded<Enclosure> {
-  const half = (v - 1) / 2;
-  const mayHaveHyperplane = half % 6 === 1 || half % 6 === 3;
-  const lower = mayHaveHyperplane ? v - Math.floor(Math.log2(v + 1)) : v;
-  return {
-    value: { lower, upper: v },
-    grade: lower === v ? 'proved' : 'bounded',
-    method: 'Doyen–Hubaut–Vandensavel 1978',
-  };
-}
-
-/** A word of the code with checks = points is a set of triples that covers every point evenly. Three points a triple
- *  make its weight even; weight 2 is impossible, weight 4 is a Pasch configuration, and some word has weight 6 or 8
- *  at most (no system with v > 3 is 8-even-free: Fujiwara and Colbourn, IEEE Trans. Inf. Theory 56 (2010) 3196–3206). */
-function distanceOfTripleCode(v: number): Graded<Enclosure> {
-  if (v === 3) return { value: { lower: 0, upper: 0 }, grade: 'proved', method: 'the code holds only the zero word' };
-  if (v === 7) return { value: { lower: 4, upper: 4 }, grade: 'proved', method: 'the plane of order 2: [7,3,4]' };
-  return { value: { lower: 4, upper: 8 }, grade: 'bounded', method: 'even sets of triples (Fujiwara–Colbourn 2010)' };
 }
