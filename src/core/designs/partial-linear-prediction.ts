@@ -78,10 +78,12 @@ function oneStepRadius(checks: CodePrediction['checks'], votes: number, facts: P
 
 function distanceEnclosure(columnWeight: number, girth: number, k: Enclosure, n: number): Graded<Enclosure> {
   if (k.upper === 0) return exactly(0, 'proved', 'the code holds only the zero word');
-  const lower = Math.min(n, treeBound(columnWeight, girth));
+  // Where the dimension may be zero, so may the distance, by the convention for the zero code.
+  const least = Math.min(n, treeBound(columnWeight, girth));
+  const lower = k.lower === 0 ? 0 : least;
   return between(
     lower,
-    Math.max(lower, n - Math.max(k.lower, 1) + 1),
+    Math.max(least, n - Math.max(k.lower, 1) + 1),
     'tree bound (Tanner 1981) below; Singleton above',
   );
 }
@@ -103,7 +105,7 @@ export function treeBound(columnWeight: number, girth: number): number {
 
 /** The larger of both orientations' sphere-packing bounds: redundancy holds the logarithm of the patterns of weight
  *  up to half the tree bound. */
-function rankLowerBound(v: number, b: number, k: number, r: number, girth: number): number {
+export function rankLowerBound(v: number, b: number, k: number, r: number, girth: number): number {
   return Math.max(spherePacking(v, treeBound(r, girth)), spherePacking(b, treeBound(k, girth)));
 }
 

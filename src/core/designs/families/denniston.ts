@@ -7,7 +7,7 @@ import type { BlockDesign } from '../block-design.ts';
 import { type DesignPrediction, defineFamily } from '../family.ts';
 import { BlockList } from '../geometry/block-list.ts';
 import { predictFlatCodes } from '../geometry/flat-codes.ts';
-import { between, exactly } from '../partial-linear-prediction.ts';
+import { between, exactly, rankLowerBound } from '../partial-linear-prediction.ts';
 
 const MAX_ORDER = 64;
 
@@ -75,7 +75,7 @@ function predictArc(q: number, n: number): DesignPrediction {
 /** n = 2: the complete graph, rank v − 1. n = q/2: an oval design, since a regular hyperoval's dual is an arc of this
  *  kind; rank 3^s − 2^s. Between them the rank of the plane's own lines, 3^s + 1, bounds it. */
 function rankOfArc(q: number, n: number): Graded<Enclosure> {
-  const { v, r } = arcCounts(q, n);
+  const { v, b, k, r } = arcCounts(q, n);
   const s = primePowerOf(q)!.m;
   if (n === 2) return exactly(v - 1, 'proved', 'a connected graph');
   if (n === q / 2) {
@@ -86,7 +86,8 @@ function rankOfArc(q: number, n: number): Graded<Enclosure> {
       where: 'Des. Codes Cryptogr. 9, 51–59',
     });
   }
-  return between(r, Math.min(v - 1, 3 ** s + 1), 'independent blocks on a point below; rank of PG(2,q) above');
+  const lower = Math.max(r, rankLowerBound(v, b, k, r, 6));
+  return between(lower, Math.min(v - 1, 3 ** s + 1), 'sphere packing below; rank of PG(2,q) above');
 }
 
 function buildArc(q: number, n: number): BlockDesign {
