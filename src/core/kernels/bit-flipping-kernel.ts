@@ -55,7 +55,14 @@ export function bitFlippingKernel(plan: GraphPlan, rule: FlippingRule): KernelIm
     ...emitWeighing(m, layout, H.cols, arrays.word),
   });
   const stepNs = 0.7 * H.colIndex.length;
-  return finishKernel(m, layout, { n: H.cols, cap: rule.cap, places, stepNs, tables: [rows, columns, positions] });
+  return finishKernel(m, layout, {
+    n: H.cols,
+    cap: rule.cap,
+    places,
+    word: arrays.word,
+    stepNs,
+    tables: [rows, columns, positions],
+  });
 }
 
 interface Arrays {

@@ -104,7 +104,8 @@ export function readTally({ memory }: Pick<Instance, 'memory'>, image: KernelIma
   };
 }
 
-/** Idle memory kept over all kernels, in bytes. */
+/** Kernels whose memory may wait for another shard, and the bytes of it over all of them. */
+const mostRecent = 8;
 const mostIdleBytes = 64 * 2 ** 20;
 
 const kernels = new WeakMap<SparseMatrix, Map<string, Promise<CompiledKernel>>>();
@@ -131,7 +132,7 @@ export function giveBack(kernel: CompiledKernel, instance: Instance): void {
   if (place >= 0) recent.splice(place, 1);
   recent.push(kernel);
   let bytes = recent.reduce((sum, k) => sum + k.idleBytes, 0);
-  while (recent.length > 0 && bytes > mostIdleBytes) {
+  while (recent.length > mostRecent || (recent.length > 0 && bytes > mostIdleBytes)) {
     const oldest = recent.shift()!;
     bytes -= oldest.idleBytes;
     oldest.dropIdle();

@@ -93,7 +93,7 @@ export function gallagerKernel(plan: GraphPlan, rule: GallagerRule): KernelImage
     ...emitWeighing(m, layout, H.cols, word),
   });
   const tables = [rows, columns, positions, ...(schedule ? [schedule] : [])];
-  return finishKernel(m, layout, { n: H.cols, cap: rule.cap, places, stepNs: H.colIndex.length, tables });
+  return finishKernel(m, layout, { n: H.cols, cap: rule.cap, places, word, stepNs: H.colIndex.length, tables });
 }
 
 /** Each check's sum of all its messages, and the syndrome of the decisions. A fresh lane has no corrections. */

@@ -1,7 +1,7 @@
 /** How a kernel walks a matrix: as a circulant, offsets in the instructions themselves, or by tables of places; rows and
  *  columns of one weight together, so that each weight has its own unrolled code. */
 
-import { rowOf, type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
+import { rowOf, type SparseMatrix } from '../codes/sparse-matrix.ts';
 
 /** Rows (or columns) that share one piece of code. `weight` is null for the mixed rest, whose weights the code reads
  *  from the table. */
@@ -26,8 +26,6 @@ export interface GraphPlan {
   /** Whether the kernel's order of columns is that of the matrix. */
   plainColumns: boolean;
   largestColumn: number;
-  /** Rows of the transpose: the checks of each bit. */
-  columns: SparseMatrix;
   /** The kernel's constants a column, as given. */
   settings: readonly Uint32Array[];
 }
@@ -43,10 +41,12 @@ export function planGraph(
   settings: readonly Uint32Array[] = [],
   { rowsInOrder = false }: { rowsInOrder?: boolean } = {},
 ): GraphPlan {
-  const columns = transpose(H);
+  const degrees = new Uint32Array(H.cols);
+  for (const j of H.colIndex) degrees[j]!++;
+  const weights = Uint32Array.from({ length: H.rows }, (_, i) => H.rowStart[i + 1]! - H.rowStart[i]!);
   const circulant = circulantOffsets(H, rowsInOrder);
-  const byWeight = classify(H, [], rowsInOrder);
-  const byDegree = classify(columns, settings, false);
+  const byWeight = classify(weights, [], rowsInOrder);
+  const byDegree = classify(degrees, settings, false);
   return {
     H,
     circulant: circulant && byDegree.classes.length === 1 ? circulant : null,
@@ -55,18 +55,9 @@ export function planGraph(
     columnOrder: byDegree.order,
     columnClasses: byDegree.classes,
     plainColumns: byDegree.order.every((j, s) => j === s),
-    largestColumn: largestRow(columns),
-    columns,
+    largestColumn: degrees.reduce((most, d) => Math.max(most, d), 0),
     settings,
   };
-}
-
-const weightOfRow = (M: SparseMatrix, i: number) => M.rowStart[i + 1]! - M.rowStart[i]!;
-
-export function largestRow(M: SparseMatrix): number {
-  let most = 0;
-  for (let i = 0; i < M.rows; i++) most = Math.max(most, weightOfRow(M, i));
-  return most;
 }
 
 /** Row 0's columns when row j is {d + j} or {d − j} (mod n) for all j. The second kind is the first with its rows
@@ -89,20 +80,20 @@ function circulantOffsets(H: SparseMatrix, forwardsOnly: boolean): number[] | nu
 }
 
 /** Groups rows by weight and settings; the commonest groups get code of their own, the rest is mixed. */
-function classify(M: SparseMatrix, settings: readonly Uint32Array[], inOrder: boolean) {
-  const key = (i: number) => [weightOfRow(M, i), ...settings.map((list) => list[i]!)].join();
+function classify(weights: Uint32Array, settings: readonly Uint32Array[], inOrder: boolean) {
+  const weightOf = (members: readonly number[]) => weights[members[0]!]!;
+  const key = (i: number) => [weights[i]!, ...settings.map((list) => list[i]!)].join();
   const groups = new Map<string, number[]>();
-  for (let i = 0; i < M.rows; i++) {
+  for (let i = 0; i < weights.length; i++) {
     const name = key(i);
     const members = groups.get(name);
     if (members) members.push(i);
     else groups.set(name, [i]);
   }
-  const unrolled = (members: number[]) => weightOfRow(M, members[0]!) <= longestUnrolled;
-  if (inOrder && groups.size > 1) return { order: identity(M.rows), classes: [mixedClass(0, M.rows)] };
+  if (inOrder && groups.size > 1) return { order: identity(weights.length), classes: [mixedClass(0, weights.length)] };
   const own = [...groups.values()]
-    .filter(unrolled)
-    .sort((a, b) => b.length * weightOfRow(M, b[0]!) - a.length * weightOfRow(M, a[0]!))
+    .filter((members) => weightOf(members) <= longestUnrolled)
+    .sort((a, b) => b.length * weightOf(b) - a.length * weightOf(a))
     .slice(0, mostClasses);
   const chosen = new Set(own);
   const rest = [...groups.values()].filter((members) => !chosen.has(members)).flat();
@@ -112,10 +103,10 @@ function classify(M: SparseMatrix, settings: readonly Uint32Array[], inOrder: bo
   for (const members of own) {
     const [i] = members as [number];
     const values = settings.map((list) => list[i]!);
-    classes.push({ weight: weightOfRow(M, i), from, to: from + members.length, settings: values });
+    classes.push({ weight: weights[i]!, from, to: from + members.length, settings: values });
     from += members.length;
   }
-  if (rest.length > 0) classes.push(mixedClass(from, M.rows));
+  if (rest.length > 0) classes.push(mixedClass(from, weights.length));
   return { order, classes };
 }
 

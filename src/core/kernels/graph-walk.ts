@@ -1,6 +1,7 @@
 /** Emits the loops that take a kernel over the rows or the columns of a matrix. The body is written once, against a
  *  `Site`; whether its neighbours come from constant offsets, a table, or a loop is settled here. */
 
+import { rowOf, type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
 import {
   countLoop,
   type Expr,
@@ -9,7 +10,6 @@ import {
   type Local,
   type Statement,
   sequence,
-  when,
   whileLoop,
 } from './assembler/index.ts';
 import type { GraphPlan, WeightClass } from './graph-plan.ts';
@@ -30,7 +30,7 @@ export interface Site {
   /** The kernel's constants for the column: numbers, or read from the table in the mixed rest. */
   setting(k: number): number | Expr<'i32'>;
   /** Runs the body for each neighbour, as repeated code or as a loop. `edge` is the place in an array of one vector an
-   *  edge, columns together. */
+   *  edge, in the order of this side. */
   eachNeighbour(body: (neighbour: Place, edge: Place) => Statement[]): Statement;
   /** Neighbours one by one, where the weight is known. */
   neighbours: readonly { neighbour: Place; edge: Place }[];
@@ -61,7 +61,7 @@ export const rowTables = (plan: GraphPlan, layout: MemoryLayout): SideTables =>
     count: plan.H.cols,
     classes: plan.rowClasses,
     order: plan.rowOrder,
-    side: plan.H,
+    side: () => plan.H,
     placeOf: inverse(plan.columnOrder),
     settings: [],
   });
@@ -72,7 +72,8 @@ export const columnTables = (plan: GraphPlan, layout: MemoryLayout): SideTables 
     count: plan.H.rows,
     classes: plan.columnClasses,
     order: plan.columnOrder,
-    side: plan.columns,
+    // Transposed only where tables are written: a circulant of 65,793 columns has none.
+    side: () => transpose(plan.H),
     placeOf: inverse(plan.rowOrder),
     settings: plan.settings,
   });
@@ -87,17 +88,18 @@ export function inverse(order: Uint32Array): Uint32Array {
 
 interface Side extends Pick<SideTables, 'direction' | 'count' | 'classes'> {
   order: Uint32Array;
-  side: GraphPlan['H'];
+  side: () => GraphPlan['H'];
   placeOf: Uint32Array;
   settings: readonly Uint32Array[];
 }
 
 function sideTables(plan: GraphPlan, layout: MemoryLayout, s: Side): SideTables {
   const common = { direction: s.direction, count: s.count, classes: s.classes, settingCount: s.settings.length };
+  if (plan.circulant) return { ...common, circulant: plan.circulant, tables: [], edges: [0], write: () => {} };
+  const side = s.side();
   const edgesOf = (c: WeightClass) => {
     let sum = 0;
-    for (let place = c.from; place < c.to; place++)
-      sum += s.side.rowStart[s.order[place]! + 1]! - s.side.rowStart[s.order[place]!]!;
+    for (let place = c.from; place < c.to; place++) sum += membersAt(side, s.order, place).length;
     return sum;
   };
   let total = 0;
@@ -106,7 +108,6 @@ function sideTables(plan: GraphPlan, layout: MemoryLayout, s: Side): SideTables 
     total += edgesOf(c);
     return first * vectorBytes;
   });
-  if (plan.circulant) return { ...common, circulant: plan.circulant, tables: [], edges, write: () => {} };
   const header = (c: WeightClass) => (c.weight === null ? 1 + s.settings.length : 0);
   const tables = s.classes.map((c) => layout.reserve(wordBytes * (edgesOf(c) + header(c) * (c.to - c.from))));
   const write = (memory: ArrayBuffer) => {
@@ -115,7 +116,7 @@ function sideTables(plan: GraphPlan, layout: MemoryLayout, s: Side): SideTables 
       let at = tables[k]! / wordBytes;
       for (let place = c.from; place < c.to; place++) {
         const i = s.order[place]!;
-        const members = s.side.colIndex.subarray(s.side.rowStart[i], s.side.rowStart[i + 1]);
+        const members = membersAt(side, s.order, place);
         if (c.weight === null) {
           words[at++] = members.length;
           for (const list of s.settings) words[at++] = list[i]!;
@@ -127,8 +128,10 @@ function sideTables(plan: GraphPlan, layout: MemoryLayout, s: Side): SideTables 
   return { ...common, circulant: null, tables, edges, write };
 }
 
+const membersAt = (side: SparseMatrix, order: Uint32Array, place: number) => rowOf(side, order[place]!);
+
 /** The loops over all classes of one side.
- *  @param withEdges Whether the body uses edge places. */
+ */
 export function walk(f: FunctionBuilder, side: SideTables, body: (site: Site) => Statement[]): Statement {
   const at = f.local('i32');
   return sequence(
@@ -249,7 +252,3 @@ function mixedLoop(
     ]),
   );
 }
-
-/** Runs the statements where the flag word is not zero. */
-export const whenSet = (place: Place, base: number, then: Statement[], otherwise: Statement[]): Statement =>
-  when(i32.load(place.address, base + place.offset), then, otherwise);

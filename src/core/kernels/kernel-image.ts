@@ -12,6 +12,8 @@ export interface KernelImage {
   n: number;
   cap: number;
   places: ConductorPlaces;
+  /** Where the words lie that patterns are drawn into. */
+  word: number;
   /** Nanoseconds that a step takes on a usual core, roughly: how many steps make 10 ms. */
   stepNs: number;
   /** Fills the tables of a new memory. */
@@ -36,7 +38,7 @@ export function positionSpace(plan: GraphPlan, layout: MemoryLayout): WithTables
 export function finishKernel(
   m: ModuleBuilder,
   layout: MemoryLayout,
-  rest: Pick<KernelImage, 'n' | 'cap' | 'places' | 'stepNs'> & { tables: readonly WithTables[] },
+  rest: Pick<KernelImage, 'n' | 'cap' | 'places' | 'word' | 'stepNs'> & { tables: readonly WithTables[] },
 ): KernelImage {
   m.memory('memory', layout.pages);
   const { tables, ...kept } = rest;

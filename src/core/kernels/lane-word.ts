@@ -1,6 +1,6 @@
 /** How one frame's bit at one position is marked in a kernel's words; the draw of patterns is written against this. */
 
-import { type Expr, type FunctionBuilder, f32, i32, type Local, type Statement } from './assembler/index.ts';
+import { type Expr, type FunctionBuilder, f32, i32, type Statement, sequence } from './assembler/index.ts';
 
 export interface LaneWord {
   /** Sets the locals that the other two use, for the frame in `lane`. */
@@ -22,7 +22,7 @@ export const bitLanes =
     const byte = f.local('i32');
     const bit = f.local('i32');
     return {
-      prepare: (lane) => joined(byte.set(i32.shrU(lane, 3)), bit.set(i32.shl(1, i32.and(lane, 7)))),
+      prepare: (lane) => sequence(byte.set(i32.shrU(lane, 3)), bit.set(i32.shl(1, i32.and(lane, 7)))),
       address: (vector) => i32.add(vector, byte),
       isMarked: (address) => i32.and(i32.load8U(address, base), bit),
       toggle: (address) => i32.store8(address, i32.xor(i32.load8U(address, base), bit), base),
@@ -54,8 +54,3 @@ export const ratioLanes =
       toggle: (address) => f32.store(address, f32.div(f32.of(1), f32.load(address, base)), base),
     };
   };
-
-const joined = (a: Statement, b: Statement): Statement => ({ type: 'void', code: [a.code, b.code] });
-
-/** Keeps a lane's number for `prepare`. */
-export type LaneLocal = Local<'i32'>;

@@ -75,7 +75,14 @@ export function largestCountKernel(plan: GraphPlan, rule: LargestRule): KernelIm
     ...emitWeighing(m, layout, H.cols, arrays.word),
   });
   const stepNs = H.colIndex.length + 2 * digits * H.cols;
-  return finishKernel(m, layout, { n: H.cols, cap: rule.cap, places, stepNs, tables: [rows, columns, positions] });
+  return finishKernel(m, layout, {
+    n: H.cols,
+    cap: rule.cap,
+    places,
+    word: arrays.word,
+    stepNs,
+    tables: [rows, columns, positions],
+  });
 }
 
 function emitIterate(

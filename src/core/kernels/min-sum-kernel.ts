@@ -69,7 +69,7 @@ export function minSumKernel(plan: GraphPlan, settings: MinSumSettings): KernelI
     weigh: emitSoftWeigh(m, H.cols, lanes, arrays.decisions),
   });
   const stepNs = 2.5 * H.colIndex.length;
-  return finishKernel(m, layout, { n: H.cols, cap, places, stepNs, tables: [rows, positions] });
+  return finishKernel(m, layout, { n: H.cols, cap, places, word: arrays.channel, stepNs, tables: [rows, positions] });
 }
 
 /** The channel value +c in the lanes that hold no frame. */

@@ -40,7 +40,14 @@ export function peelingKernel(given: GraphPlan, cap: number): KernelImage {
     iterate: emitPass(m, rows, word),
     ...emitWeighing(m, layout, H.cols, word),
   });
-  return finishKernel(m, layout, { n: H.cols, cap, places, stepNs: 2 * H.colIndex.length, tables: [rows, positions] });
+  return finishKernel(m, layout, {
+    n: H.cols,
+    cap,
+    places,
+    word,
+    stepNs: 2 * H.colIndex.length,
+    tables: [rows, positions],
+  });
 }
 
 /** A frame with erasures left is both unfinished and wrong. */

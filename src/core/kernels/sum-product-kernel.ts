@@ -80,7 +80,7 @@ export function sumProductKernel(plan: GraphPlan, cap: number): KernelImage {
     weigh: emitSoftWeigh(m, H.cols, lanes, arrays.totals),
   });
   const stepNs = 4 * H.colIndex.length;
-  return finishKernel(m, layout, { n: H.cols, cap, places, stepNs, tables: [rows, positions] });
+  return finishKernel(m, layout, { n: H.cols, cap, places, word: arrays.channel, stepNs, tables: [rows, positions] });
 }
 
 /** The channel's ratio for a received 0 in the lanes that hold no frame. */
