@@ -14,6 +14,7 @@ export { buildDesign, listFamilies, predictDesign } from './designs/design.ts';
 export { designTitle } from './designs/design-title.ts';
 export type { CodePrediction, DesignPrediction, ParamInfo } from './designs/family.ts';
 export { type Feasibility, feasibility } from './designs/feasibility/feasibility.ts';
+export { spreadBasis } from './designs/geometry/spread.ts';
 export { type DesignCertificate, verifyDesign } from './designs/verify.ts';
 export { type Citation, FormatError, InfeasibleError, LimitError, ParamError } from './errors.ts';
 export type { Enclosure, Grade, Graded } from './evidence.ts';

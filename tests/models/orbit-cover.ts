@@ -1,5 +1,5 @@
-import type { LineSubsetOrbits } from '../../src/core/designs/geometry/subset-orbits.ts';
 import { subsets } from './subset-coverage.ts';
+import type { LineSubsetOrbits } from './subset-orbits.ts';
 
 /** Unions of k-subset orbits that hold every 5-subset exactly once, found by exact cover on the orbit matrix: entry
  *  (T, B) counts the members of B's orbit on the 5-subset T (Kramer and Mesner 1976). Stops after `limit` unions. */

@@ -11,12 +11,12 @@ import { LINEAR_GROUP_SYSTEMS } from '../../../../src/core/designs/geometry/line
 import { hermitianForm, parabolicForm, symplecticForm } from '../../../../src/core/designs/geometry/polar-forms.ts';
 import { forEachPolarLine, type PolarForm, polarPoints } from '../../../../src/core/designs/geometry/polar-lines.ts';
 import { spreadBasis } from '../../../../src/core/designs/geometry/spread.ts';
-import { LineSubsetOrbits } from '../../../../src/core/designs/geometry/subset-orbits.ts';
 import { echelonBases } from '../../../../src/core/designs/geometry/subspaces.ts';
 import { treeBound } from '../../../../src/core/designs/partial-linear-prediction.ts';
 import { ParamError } from '../../../../src/core/errors.ts';
 import { steinerUnions } from '../../../models/orbit-cover.ts';
 import { plainPolarLines } from '../../../models/polar-lines.ts';
+import { LineSubsetOrbits } from '../../../models/subset-orbits.ts';
 import reference from '../../../reference/finite-geometry.json' with { type: 'json' };
 
 test('developing a base block gives its translates, whatever the block', () => {

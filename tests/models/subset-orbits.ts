@@ -1,4 +1,4 @@
-import type { GaloisField } from '../../algebra/galois-field.ts';
+import type { GaloisField } from '../../src/core/algebra/galois-field.ts';
 
 /** An orbit of k-subsets of the projective line, by its canonical member: one that holds ∞, 0 and 1. */
 export interface SubsetOrbit {
