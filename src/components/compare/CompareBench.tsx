@@ -42,7 +42,7 @@ export function CompareBench({ runs, curves, requirements }: Props) {
   const title = `${kind === 'fer' ? 'Frame' : 'Bit'} error rates compared`;
 
   return (
-    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] wide:grid-rows-[auto_1fr]">
+    <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] ">
       <div className="min-w-0">
         <h1 className="mb-3">{title}</h1>
         <ErrorRateChart
@@ -53,7 +53,7 @@ export function CompareBench({ runs, curves, requirements }: Props) {
           intervalMethod={INTERVAL_METHOD[kind]}
         />
       </div>
-      <div className="grid min-w-0 content-start gap-5 wide:row-span-2">
+      <div className="grid min-w-0 content-start gap-5 ">
         <CurvePicker
           runs={runs}
           curves={curves}
@@ -63,7 +63,7 @@ export function CompareBench({ runs, curves, requirements }: Props) {
         {requirement && <RequirementTable curves={chosen} requirement={requirement} />}
         <Caution />
       </div>
-      <div className="min-w-0">
+      <div className="min-w-0 wide:col-span-2">
         <CompareTable curves={chosen} kind={kind} />
         <div className="mt-3 flex flex-wrap items-center gap-3" data-screen-only>
           <CopyButton label="Copy table" text={() => tabbedText(gridText(chosen, kind))} />

@@ -19,7 +19,7 @@ export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
   const selected = points.find((point) => point.id === selectedId) ?? points[0];
   if (!selected) return null;
   return (
-    <section className="grid min-w-0 content-start gap-2" aria-label="Iterations of a point">
+    <section className="grid min-w-0 content-start gap-2" aria-label="Iterations of a point" data-screen-only>
       <h2>Iterations</h2>
       <SelectField
         label="Point"

@@ -88,7 +88,7 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
     },
   ];
   return (
-    <div className="grid gap-2 text-tiny">
+    <div className="grid gap-2 text-tiny print:text-[7.5pt]">
       <DataTable
         caption="Points"
         showCaption

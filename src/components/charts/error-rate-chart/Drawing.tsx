@@ -52,7 +52,7 @@ export function Drawing({ model, title, description, choice, dragBox, emptyText,
           />
         ))}
       </PlotClip>
-      <EndLabels frame={frame} placed={placed} />
+      <EndLabels frame={frame} placed={placed} texts={model.endTexts} />
       {dragBox && <DragOutline box={dragBox} />}
       {isEmpty && (
         <text

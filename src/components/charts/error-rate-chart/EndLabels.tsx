@@ -1,21 +1,23 @@
-import type { ChartCurve } from '../chart-curve.ts';
 import { curveTextColour } from '../palette.ts';
+import type { PlacedCurve } from './chart-model.ts';
 import { type Frame, labelWidth } from './frame.ts';
-import type { CurveMarks, Mark } from './marks.ts';
+import type { Mark } from './marks.ts';
 import { spreadLabels } from './spread-labels.ts';
 
 interface Props {
   frame: Frame;
-  placed: readonly { chartCurve: ChartCurve; marks: CurveMarks }[];
+  placed: readonly PlacedCurve[];
+  /** One a placed curve. */
+  texts: readonly string[];
 }
 
 const LINE_HEIGHT = 16;
 const OFFSET = 11;
 
 /** The name of each curve at its last point, moved apart where names would run into each other. */
-export function EndLabels({ frame, placed }: Props) {
-  const labels = placed.flatMap(({ chartCurve, marks }) =>
-    marks.end === null ? [] : [{ ...labelOf(chartCurve, marks.end, frame), chartCurve, end: marks.end }],
+export function EndLabels({ frame, placed, texts }: Props) {
+  const labels = placed.flatMap(({ chartCurve, marks: { end } }, i) =>
+    end === null ? [] : [{ ...wantedLabel(end, texts[i]!), chartCurve, end }],
   );
   const heights = spreadLabels(labels, LINE_HEIGHT, frame.top + 6, frame.bottom - 6);
   return (
@@ -46,9 +48,9 @@ export function EndLabels({ frame, placed }: Props) {
   );
 }
 
-function labelOf(chartCurve: ChartCurve, end: Mark, frame: Frame) {
-  const full = chartCurve.label;
-  const fits = !frame.isNarrow && end.x + OFFSET + labelWidth(full) <= frame.width + 6;
-  const text = fits ? full : chartCurve.style.letter;
-  return { x: end.x + OFFSET, y: end.y + (end.isBound ? 8 : 0), width: labelWidth(text), text };
-}
+const wantedLabel = (end: Mark, text: string) => ({
+  x: end.x + OFFSET,
+  y: end.y + (end.isBound ? 8 : 0),
+  width: labelWidth(text),
+  text,
+});

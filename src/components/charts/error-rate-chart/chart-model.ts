@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import type { RateKind } from '@/client/curves/curve.ts';
 import type { ChartCurve } from '../chart-curve.ts';
 import { type ChartWindow, lastMeasured, type Requirement, wholeWindow } from './domain.ts';
-import { chartFrame, type Frame } from './frame.ts';
+import { chartFrame, type Frame, isNarrowWidth } from './frame.ts';
 import { type CurveMarks, curveMarks, type Mark } from './marks.ts';
 import type { Choice } from './walk.ts';
 
@@ -17,6 +17,8 @@ export interface ChartModel {
   window: ChartWindow;
   frame: Frame;
   placed: readonly PlacedCurve[];
+  /** What stands at the end of each placed curve. */
+  endTexts: readonly string[];
   requirement: Requirement | null;
   /** Beyond this crossover probability nothing was measured. */
   last: number | null;
@@ -41,12 +43,14 @@ export function useChartModel({ curves, kind, hidden, zoom, planned, ...inputs }
     [zoom, shown, kind, planned, requirement],
   );
   return useMemo(() => {
-    const frame = chartFrame(width, window, endLabelRooms(shown, window));
+    const endTexts = endLabelTexts(shown, isNarrowWidth(width));
+    const frame = chartFrame(width, window, endLabelRooms(shown, endTexts, window));
     return {
       kind,
       window,
       frame,
       placed: shown.map((chartCurve) => ({ chartCurve, marks: curveMarks(chartCurve.curve, kind, frame, window) })),
+      endTexts,
       requirement,
       last: lastMeasured(shown.map(({ curve }) => curve)),
       lengths: uncodedLengths(shown, kind),
@@ -54,11 +58,20 @@ export function useChartModel({ curves, kind, hidden, zoom, planned, ...inputs }
   }, [width, window, shown, kind, requirement]);
 }
 
+const MOST_NAMED_CURVES = 8;
+const LONGEST_NAME = 34;
+
+/** Names at the ends of curves; their letters, which the legend explains, where names would crowd the chart. */
+function endLabelTexts(curves: readonly ChartCurve[], isNarrow: boolean): string[] {
+  const hasRoom = !isNarrow && curves.length <= MOST_NAMED_CURVES;
+  return curves.map(({ label, style }) => (hasRoom && label.length <= LONGEST_NAME ? label : style.letter));
+}
+
 /** Room that each end label wants, at the last point inside the window. */
-function endLabelRooms(curves: readonly ChartCurve[], window: ChartWindow) {
-  return curves.flatMap(({ curve, label }) => {
+function endLabelRooms(curves: readonly ChartCurve[], texts: readonly string[], window: ChartWindow) {
+  return curves.flatMap(({ curve }, i) => {
     const last = curve.points.findLast((point) => point.p >= window.pMin && point.p <= window.pMax);
-    return last ? [{ p: last.p, text: label }] : [];
+    return last ? [{ p: last.p, text: texts[i]! }] : [];
   });
 }
 

@@ -9,13 +9,16 @@ export interface Frame {
   right: number;
   top: number;
   bottom: number;
-  /** Too narrow for full end labels: curves end in a letter. */
+  /** Curves end in a letter, and axis names are short. */
   isNarrow: boolean;
   x: ScaleLogarithmic<number, number>;
   y: ScaleLogarithmic<number, number>;
 }
 
 const NARROW_BELOW = 560;
+/** Too narrow for names beside the curves. */
+export const isNarrowWidth = (width: number): boolean => width < NARROW_BELOW;
+
 const LABEL_GAP = 12;
 /** The plot keeps this share of the width whatever the labels ask for. */
 const LEAST_PLOT_SHARE = 0.55;
@@ -29,10 +32,10 @@ interface LabelRoom {
 }
 
 export function chartFrame(width: number, window: ChartWindow, labels: readonly LabelRoom[]): Frame {
-  const isNarrow = width < NARROW_BELOW;
+  const isNarrow = isNarrowWidth(width);
   const height = isNarrow ? Math.max(320, width * 0.95) : Math.min(620, Math.max(380, width * 0.56));
   const left = isNarrow ? 42 : 66;
-  const rightMost = plotRight(width, left, window, isNarrow ? [] : labels);
+  const rightMost = plotRight(width, left, window, labels);
   const top = isNarrow ? 30 : 22;
   const bottom = height - (isNarrow ? 48 : 56);
   return {
