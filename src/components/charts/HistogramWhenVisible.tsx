@@ -12,7 +12,9 @@ export function HistogramWhenVisible(props: IterationHistogramProps) {
   useEffect(() => {
     const node = place.current;
     if (!node || typeof IntersectionObserver === 'undefined') return;
-    const observer = new IntersectionObserver(([entry]) => entry?.isIntersecting && setIsSeen(true));
+    const observer = new IntersectionObserver(([entry]) => entry?.isIntersecting && setIsSeen(true), {
+      rootMargin: '160px',
+    });
     observer.observe(node);
     return () => observer.disconnect();
   }, []);

@@ -13,6 +13,14 @@ interface Props {
   onSelect: (pointId: string) => void;
 }
 
+/** A list to choose from stays short; any other point is chosen in the table or on the chart. */
+const MOST_OFFERED = 200;
+
+function offered(points: readonly Point[], selected: Point): readonly Point[] {
+  const first = points.slice(0, MOST_OFFERED);
+  return first.includes(selected) ? first : [selected, ...first];
+}
+
 /** The iterations of one point, chosen here, in the table or on the chart. */
 export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
   const labels = new Map(curves.map(({ curve, label }) => [curve.key, label]));
@@ -26,7 +34,7 @@ export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
         className="max-w-md"
         value={selected.id}
         onChange={(event) => onSelect(event.target.value)}
-        choices={points.map((point) => ({
+        choices={offered(points, selected).map((point) => ({
           value: point.id,
           label: `${labels.get(curveKey(point)) ?? point.codeLabel}, p = ${parameterText(crossoverOf(point) ?? 0)}`,
         }))}
