@@ -2,8 +2,11 @@ import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
 import { affineGeometry } from './affine-geometry.ts';
 import { affinePlane } from './affine-plane.ts';
+import { biplane } from './biplane.ts';
+import { cyclicDifferenceFamily } from './cyclic-difference-family.ts';
 import { denniston } from './denniston.ts';
 import { generalisedQuadrangle } from './generalised-quadrangle.ts';
+import { hadamard } from './hadamard.ts';
 import { hermitianUnital } from './hermitian-unital.ts';
 import { inversivePlane } from './inversive-plane.ts';
 import { linearGroupSteiner } from './linear-group-steiner.ts';
@@ -12,10 +15,13 @@ import { projectiveGeometry } from './projective-geometry.ts';
 import { projectivePlane } from './projective-plane.ts';
 import { projectiveSpread } from './projective-spread.ts';
 import { puncturedAffinePlane } from './punctured-affine-plane.ts';
+import { quadraticResidue } from './quadratic-residue.ts';
 import { reeUnital } from './ree-unital.ts';
 import { sphericalGeometry } from './spherical-geometry.ts';
 import { splitCayleyHexagon } from './split-cayley-hexagon.ts';
 import { steinerTriple } from './steiner-triple.ts';
+import { transversal } from './transversal.ts';
+import { witt } from './witt.ts';
 
 /** Every family the program builds, in the order shown. A family is added by one file here and one line below. */
 export const families: readonly Family[] = [
@@ -35,6 +41,12 @@ export const families: readonly Family[] = [
   linearGroupSteiner,
   projectiveSpread,
   steinerTriple,
+  witt,
+  transversal,
+  quadraticResidue,
+  hadamard,
+  cyclicDifferenceFamily,
+  biplane,
 ];
 
 /** The family with this id. @throws ParamError that lists every id. */
