@@ -1,7 +1,7 @@
 import { ParamError } from '../errors.ts';
 import type { Enclosure, Grade } from '../evidence.ts';
 import { checkedLevel, lowerLimit, upperLimit } from '../statistics/binomial-interval.ts';
-import { binomialLaw } from '../statistics/binomial-law.ts';
+import { binomialLaw, logFactorials } from '../statistics/binomial-law.ts';
 import { boundedMeanInterval } from '../statistics/mean-interval.ts';
 
 /** What is known of one weight: every pattern of it tried (`computed`), none failing by a theorem (`proved`), or a
@@ -52,19 +52,21 @@ export function stratifiedCurve(
 ): StratifiedRate[] {
   const fractions = fractionsByWeight(strata, n, level);
   const haveBits = fractions.every(({ bits }) => bits !== null);
+  const logs = logFactorials(n);
   return ps.map((p) => {
-    const law = weightLaw(n, p);
+    const law = weightLaw(n, p, logs);
     const rate = combine(law, (w) => fractions[w]!.frames);
     return haveBits ? { ...rate, ber: combine(law, (w) => fractions[w]!.bits!) } : rate;
   });
 }
 
-export function weightLaw(n: number, p: number): Float64Array {
+/** P(W = w) for independent errors of probability p. */
+export function weightLaw(n: number, p: number, logs?: Float64Array): Float64Array {
   if (!(p > 0 && p < 1)) throw new ParamError('p', p, 'a probability above 0 and below 1');
-  return binomialLaw(n, p);
+  return binomialLaw(n, p, logs);
 }
 
-/** Sums from the rarest weight up would lose nothing either: all terms are positive. */
+/** All terms are positive, so that the sums are right to a few units in the thirteenth place. */
 function combine(law: Float64Array, fraction: (w: number) => RateBounds): RateBounds {
   const sum = { estimate: 0, lower: 0, upper: 0 };
   law.forEach((probability, w) => {

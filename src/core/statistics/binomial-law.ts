@@ -13,9 +13,9 @@ export function logFactorials(n: number): Float64Array {
   return table;
 }
 
-/** P(W = w) of Binomial(n, p) for w = 0 … n, by logarithms; terms below 10^-308 come out as 0. */
-export function binomialLaw(n: number, p: number): Float64Array {
-  const logs = logFactorials(n);
+/** P(W = w) of Binomial(n, p) for w = 0 … n, by logarithms; terms below 10^-308 come out as 0.
+ *  @param logs `logFactorials(n)`, when many laws of one n are wanted. */
+export function binomialLaw(n: number, p: number, logs: Float64Array = logFactorials(n)): Float64Array {
   const logP = Math.log(p);
   const logQ = Math.log1p(-p);
   return Float64Array.from({ length: n + 1 }, (_, w) =>
