@@ -1,10 +1,9 @@
 import type { Point } from '@/api/runs.ts';
-import { crossoverOf } from '@/client/curves/curve.ts';
+import { channelText } from '@/client/curves/channel-text.ts';
 import { curveKey } from '@/client/curves/group-points.ts';
 import { SelectField } from '@/components/ui/fields.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
 import { HistogramWhenVisible } from '../charts/HistogramWhenVisible.tsx';
-import { parameterText } from '../charts/rate-text.ts';
 
 interface Props {
   points: readonly Point[];
@@ -12,6 +11,10 @@ interface Props {
   selectedId: string | null;
   onSelect: (pointId: string) => void;
 }
+
+/** "p = 0.012", or the channel in words. */
+const placeText = (point: Point): string =>
+  (point.channel.kind === 'bsc' ? 'p = ' : '') + channelText(point.channel, String);
 
 /** A list to choose from stays short; any other point is chosen in the table or on the chart. */
 const MOST_OFFERED = 200;
@@ -36,7 +39,7 @@ export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
         onChange={(event) => onSelect(event.target.value)}
         choices={offered(points, selected).map((point) => ({
           value: point.id,
-          label: `${labels.get(curveKey(point)) ?? point.codeLabel}, p = ${parameterText(crossoverOf(point) ?? 0)}`,
+          label: `${labels.get(curveKey(point)) ?? point.codeLabel}, ${placeText(point)}`,
         }))}
       />
       {selected.tally.frames === 0 ? (

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import type { Point, Stopping } from '@/api/runs.ts';
+import { channelText } from '@/client/curves/channel-text.ts';
 import { type CurvePoint, crossoverOf, curvePointOf, type Estimate, isThin } from '@/client/curves/curve.ts';
 import { curveKey } from '@/client/curves/group-points.ts';
 import { Button } from '@/components/ui/Button.tsx';
@@ -19,6 +20,9 @@ interface Props {
   selectedId: string | null;
   onSelect: (pointId: string) => void;
 }
+
+/** A parameter that may be 0, as of a channel without errors in its good state. */
+const numberText = (value: number): string => (value === 0 ? '0' : parameterText(value));
 
 /** Rows shown at first, and more at each asking. */
 const ROWS_AT_ONCE = 100;
@@ -47,7 +51,7 @@ export function PointsTable({ points, curves, stopping, seed, selectedId, onSele
           title="Show the iterations of this point"
           onClick={() => onSelect(point.id)}
         >
-          {parameterText(crossoverOf(point) ?? 0)}
+          {channelText(point.channel, numberText)}
         </button>
       ),
       sortBy: ({ point }) => crossoverOf(point) ?? 0,
