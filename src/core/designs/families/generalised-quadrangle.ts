@@ -8,6 +8,7 @@ import { BlockList } from '../geometry/block-list.ts';
 import { linearRepresentation } from '../geometry/linear-representation.ts';
 import { hermitianForm, hermitianSymmetry, symplecticForm, symplecticSymmetry } from '../geometry/polar-forms.ts';
 import { forEachPolarLine, type PolarForm, type PolarPoints, polarPoints } from '../geometry/polar-lines.ts';
+import { rankFromSpectrum } from '../geometry/spectral-rank.ts';
 import { transposeDesign } from '../geometry/transpose-design.ts';
 import { between, exactly, predictPartialLinearCodes } from '../partial-linear-prediction.ts';
 
@@ -86,16 +87,19 @@ function predictQuadrangle(params: Params): DesignPrediction {
   return { t: 1, ...counts, lambda: counts.r, partialLinear: true, resolvable, codes };
 }
 
-/** W(q) and its dual Q(4,q): Sastry and Sin for even q, Bagchi, Brouwer and Wilbrink for odd q. Elsewhere the rank over
- *  the rationals, 1 + st(s+1)(t+1)/(s+t), is an upper bound. Lines that meet one line are independent, since without
- *  triangles each has points of its own; so are, dually, the points on the lines of one point. */
+/** W(q) and its dual Q(4,q): Sastry and Sin for even q, Bagchi, Brouwer and Wilbrink for odd q. Elsewhere the spectrum of
+ *  the quadrangle encloses the rank. Lines that meet one line are independent, since without triangles each has points of
+ *  its own; so are, dually, the points on the lines of one point. */
 function rankOfQuadrangle(params: Params): Graded<Enclosure> {
   const { kind, q } = params;
   if (kind === 'W' || kind === 'Q4') return rankOfSymplectic(q);
   const { s, t } = orderOf(params);
-  const rational = 1 + (s * t * (s + 1) * (t + 1)) / (s + t);
-  const independent = 1 + Math.max((s + 1) * t, (t + 1) * s);
-  return between(independent, rational, 'the lines that meet one line below; rational rank above');
+  const spectral = rankFromSpectrum([
+    { value: (s + 1) * (t + 1), multiplicity: 1 },
+    { value: s + t, multiplicity: (s * t * (s + 1) * (t + 1)) / (s + t) },
+  ]);
+  const lower = Math.max(spectral.lower, 1 + (s + 1) * t, 1 + (t + 1) * s);
+  return between(lower, spectral.upper, 'invariant factors, or lines that meet one line, below; rational rank above');
 }
 
 /** Rank over GF(2) of the points against the lines of W(q). */

@@ -13,7 +13,8 @@ import { exactly } from '../partial-linear-prediction.ts';
 const MAX_UNITAL_ORDER = 16;
 
 /** The Hermitian unital, an S(2, q+1, q³+1): the points of y^q + y = x^(q+1) in PG(2,q²) with the one at infinity, and the
- *  lines that meet them in more than one. Source: Bose 1959; Barwick and Ebert 2008, chapter 2. */
+ *  lines that meet them in more than one. Resolvable, as Bose showed: the class of a point Q on the tangent at infinity holds
+ *  the secants on Q and the polar line of Q. Source: Bose 1959; Barwick and Ebert 2008, chapter 2. */
 export const hermitianUnital = defineFamily({
   id: 'hermitian-unital',
   title: 'Hermitian unital',
@@ -56,7 +57,7 @@ function unitalCounts(q: number) {
 function predictUnital(q: number): DesignPrediction {
   const counts = unitalCounts(q);
   const codes = predictFlatCodes(counts, { rank: rankOfUnital(q), structure: { blocks: 'none', points: 'none' } });
-  return { t: 2, ...counts, codes };
+  return { t: 2, ...counts, resolvable: true, codes };
 }
 
 /** Even q: r − λ is odd, so everything. Odd q: 2 divides q + 1, and modulo such primes the rank is q(q² − q + 1). */
@@ -82,7 +83,11 @@ function buildUnital(q: number): BlockDesign {
     for (let y = 0; y < Q; y++) if (relativeTrace[y] === norm[x]) pointAt[x * Q + y] = point++;
   }
   const blocks = new BlockList(v, b, k);
-  for (let x = 0; x < Q; x++) blocks.add([...Array.from({ length: q }, (_, i) => x * q + i), v - 1]);
+  const classes = new Uint32Array(b); // by slope; the polar line of slope s is x = s^q, so x belongs to slope x^q
+  for (let x = 0; x < Q; x++) {
+    classes[x] = field.pow(x, q);
+    blocks.add([...Array.from({ length: q }, (_, i) => x * q + i), v - 1]);
+  }
   const onLine = new Uint32Array(k);
   for (let slope = 0; slope < Q; slope++) {
     for (let y0 = 0; y0 < Q; y0++) {
@@ -91,10 +96,12 @@ function buildUnital(q: number): BlockDesign {
         const y = field.add(field.mul(slope, x), y0);
         if (relativeTrace[y] === norm[x]) onLine[size++] = pointAt[x * Q + y]!;
       }
-      if (size > 1) blocks.add(onLine.subarray(0, size)); // a line meets the unital in 1 or q + 1 points
+      if (size === 1) continue; // a tangent; every other line meets the unital in q + 1 points
+      classes[blocks.size] = slope;
+      blocks.add(onLine.subarray(0, size));
     }
   }
-  return blocks.finish({ symmetry: symmetryOf(field, q, pointAt) });
+  return blocks.finish({ classes, symmetry: symmetryOf(field, q, pointAt) });
 }
 
 /** (x, y) → (gx, g^(q+1) y), and the translation (x, y) → (x + 1, y + x + c) with c^q + c = 1. */

@@ -6,6 +6,7 @@ import { type DesignPrediction, defineFamily } from '../family.ts';
 import { BlockList } from '../geometry/block-list.ts';
 import { grassmann, hexagonSymmetry, parabolicForm } from '../geometry/polar-forms.ts';
 import { forEachPolarLine, polarPoints } from '../geometry/polar-lines.ts';
+import { rankFromSpectrum } from '../geometry/spectral-rank.ts';
 import { between, predictPartialLinearCodes } from '../partial-linear-prediction.ts';
 
 const MAX_HEXAGON_ORDER = 4;
@@ -47,18 +48,20 @@ function pointCount(q: number): number {
   return (q ** 6 - 1) / (q - 1);
 }
 
-/** The rank over the rationals is v − q(q⁴ + q² + 1)/3, from the multiplicity of −(q + 1) in the collinearity graph
- *  (Brouwer, Cohen, Neumaier 1989, 6.5), and bounds the rank over GF(2). The lines within two steps of one line are
- *  independent: with no cycle shorter than 12 the farthest have q points each that no other of them holds. */
+/** N·Nᵀ has the eigenvalues (q+1)², 3q and q (Brouwer, Cohen, Neumaier 1989, 6.5), which enclose the rank. The lines
+ *  within two steps of one line are independent: with no cycle shorter than 12 the farthest have q points each that no
+ *  other of them holds. */
 function predictHexagon(q: number): DesignPrediction {
   const v = pointCount(q);
   const counts = { v, b: v, k: q + 1, r: q + 1 };
-  const rational = v - (q * (q ** 4 + q * q + 1)) / 3;
-  const rank = between(
-    1 + (q + 1) * (q + q ** 3),
-    rational,
-    'lines within two steps of one below; rational rank above',
-  );
+  const half = (q * (q + 1) ** 2) / 2;
+  const spectral = rankFromSpectrum([
+    { value: (q + 1) ** 2, multiplicity: 1 },
+    { value: 3 * q, multiplicity: (half * (q * q + q + 1)) / 3 },
+    { value: q, multiplicity: half * (q * q - q + 1) },
+  ]);
+  const lower = Math.max(spectral.lower, 1 + (q + 1) * (q + q ** 3));
+  const rank = between(lower, spectral.upper, 'invariant factors, or lines near one line, below; rational rank above');
   return {
     t: 1,
     ...counts,

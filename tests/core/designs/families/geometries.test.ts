@@ -21,6 +21,18 @@ describe('unitals', () => {
     expect(verifyDesign(design('hermitian-unital', { q: 16 }), { t: 2, lambda: 1 }).holds).toBe(true);
   });
 
+  test('the unital of order 9 falls into 81 parallel classes of 73 blocks, as Bose showed', () => {
+    const unital = design('hermitian-unital', { q: 9 });
+    const sizes = new Uint32Array(81);
+    const covered = new Set<number>();
+    for (let i = 0; i < unital.b; i++) {
+      sizes[unital.classes![i]!]!++;
+      for (const p of blockOf(unital, i)) covered.add(unital.classes![i]! * unital.v + p);
+    }
+    expect(new Set(sizes)).toEqual(new Set([73]));
+    expect(covered.size).toBe(81 * 730);
+  });
+
   test('the Ree unital has rank 19, the Hermitian one 21: they are not isomorphic', () => {
     expect(rank(design('ree-unital', { q: 3 }))).toBe(19);
     expect(rank(design('hermitian-unital', { q: 3 }))).toBe(21);

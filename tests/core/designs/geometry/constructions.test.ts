@@ -10,6 +10,7 @@ import { specialLineMaps } from '../../../../src/core/designs/geometry/line-grou
 import { LINEAR_GROUP_SYSTEMS } from '../../../../src/core/designs/geometry/linear-group-systems.ts';
 import { hermitianForm, parabolicForm, symplecticForm } from '../../../../src/core/designs/geometry/polar-forms.ts';
 import { forEachPolarLine, type PolarForm, polarPoints } from '../../../../src/core/designs/geometry/polar-lines.ts';
+import { rankFromSpectrum } from '../../../../src/core/designs/geometry/spectral-rank.ts';
 import { spreadBasis } from '../../../../src/core/designs/geometry/spread.ts';
 import { echelonBases } from '../../../../src/core/designs/geometry/subspaces.ts';
 import { treeBound } from '../../../../src/core/designs/partial-linear-prediction.ts';
@@ -173,4 +174,14 @@ test('a list of blocks that comes out short or long is caught', () => {
   short.add([1, 0]);
   expect(() => short.finish()).toThrow('2 blocks expected, 1 found');
   expect(() => short.add([1, 2, 3])).toThrow();
+});
+
+test('the spectrum of the hexagon H(3) leaves two values short of 273 for its rank, and of an odd spectrum none', () => {
+  const hexagon = [
+    { value: 16, multiplicity: 1 },
+    { value: 9, multiplicity: 104 },
+    { value: 3, multiplicity: 168 },
+  ];
+  expect(rankFromSpectrum(hexagon)).toEqual({ lower: 271, upper: 273 });
+  expect(rankFromSpectrum([{ value: 15, multiplicity: 4 }])).toEqual({ lower: 4, upper: 4 });
 });
