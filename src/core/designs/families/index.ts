@@ -9,6 +9,7 @@ import { generalisedQuadrangle } from './generalised-quadrangle.ts';
 import { hadamard } from './hadamard.ts';
 import { hermitianUnital } from './hermitian-unital.ts';
 import { inversivePlane } from './inversive-plane.ts';
+import { kirkmanTriple } from './kirkman-triple.ts';
 import { linearGroupSteiner } from './linear-group-steiner.ts';
 import { lu3 } from './lu3.ts';
 import { projectiveGeometry } from './projective-geometry.ts';
@@ -41,6 +42,7 @@ export const families: readonly Family[] = [
   linearGroupSteiner,
   projectiveSpread,
   steinerTriple,
+  kirkmanTriple,
   witt,
   transversal,
   quadraticResidue,
