@@ -78,6 +78,27 @@ export const columnTables = (plan: GraphPlan, layout: MemoryLayout): SideTables 
     settings: plan.settings,
   });
 
+/** Rows whose neighbours are not their bits but their edges, as the columns number them: for messages that both sides
+ *  read. Made for one class of columns. */
+export const rowEdgeTables = (plan: GraphPlan, layout: MemoryLayout): SideTables =>
+  sideTables(plan, layout, {
+    direction: 1,
+    count: plan.H.colIndex.length,
+    classes: plan.rowClasses,
+    order: plan.rowOrder,
+    side: () => ({ ...plan.H, cols: plan.H.colIndex.length, colIndex: edgesByColumns(plan.H) }),
+    placeOf: Uint32Array.from({ length: plan.H.colIndex.length }, (_, e) => e),
+    settings: [],
+  });
+
+/** The number of each edge, listed by rows, in the order by columns. */
+function edgesByColumns(H: SparseMatrix): Uint32Array {
+  const next = new Uint32Array(H.cols + 1);
+  for (const j of H.colIndex) next[j + 1]!++;
+  for (let j = 0; j < H.cols; j++) next[j + 1]! += next[j]!;
+  return H.colIndex.map((j) => next[j]!++);
+}
+
 export function inverse(order: Uint32Array): Uint32Array {
   const places = new Uint32Array(order.length);
   order.forEach((i, place) => {
@@ -130,8 +151,7 @@ function sideTables(plan: GraphPlan, layout: MemoryLayout, s: Side): SideTables 
 
 const membersAt = (side: SparseMatrix, order: Uint32Array, place: number) => rowOf(side, order[place]!);
 
-/** The loops over all classes of one side.
- */
+/** The loops over all classes of one side. */
 export function walk(f: FunctionBuilder, side: SideTables, body: (site: Site) => Statement[]): Statement {
   const at = f.local('i32');
   return sequence(

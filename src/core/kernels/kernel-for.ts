@@ -1,8 +1,10 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import type { DecoderSpec } from '../decoders/decoder-spec.ts';
+import { type BitTable, rememberedTable } from '../decoders/finite-alphabet.ts';
 import { flippingThresholds, iterationCap, messageThresholds, minSumSettings } from '../decoders/settings.ts';
 import { columnDegrees, largestDegree } from '../decoders/tanner-graph.ts';
 import { bitFlippingKernel } from './bit-flipping-kernel.ts';
+import { finiteAlphabetKernel } from './finite-alphabet-kernel.ts';
 import { gallagerKernel } from './gallager-kernel.ts';
 import { planGraph } from './graph-plan.ts';
 import type { KernelImage } from './kernel-image.ts';
@@ -33,6 +35,8 @@ export function emitterFor(decoder: DecoderSpec, H: SparseMatrix): Emitter | nul
     }
     case 'bit-flipping-max':
       return () => largestCountKernel(planGraph(H), { cap, single: false });
+    case 'finite-alphabet':
+      return finiteAlphabet(H, degrees, decoder, cap);
     case 'peeling':
       return () => peelingKernel(planGraph(H, [], { rowsInOrder: true }), cap);
     case 'gradient-descent':
@@ -62,6 +66,19 @@ function gradientDescent(H: SparseMatrix, degrees: Uint32Array, spec: Of<'gradie
   const bound = Math.ceil(spec.threshold ?? -0.5);
   const least = degrees.map((d) => Math.min(d + 2, Math.max(0, Math.ceil((2 + d - bound) / 2))));
   return () => bitFlippingKernel(planGraph(H, [least]), { cap, remembersReceived: true, stopsWhenStuck: true });
+}
+
+/** What this kernel does not take the readable decoder refuses, with its reasons. */
+function finiteAlphabet(
+  H: SparseMatrix,
+  degrees: Uint32Array,
+  spec: Of<'finite-alphabet'>,
+  cap: number,
+): Emitter | null {
+  const table: BitTable = spec.table ?? rememberedTable;
+  const symmetric = table.every((row, a) => row.every((level, b) => level === table[b]![a]));
+  if (!symmetric || degrees.some((d) => d !== 3)) return null;
+  return () => finiteAlphabetKernel(planGraph(H), table, cap);
 }
 
 function gallager(H: SparseMatrix, degrees: Uint32Array, spec: Of<'gallager-a' | 'gallager-b'>, cap: number): Emitter {
