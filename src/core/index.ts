@@ -20,7 +20,12 @@ export { type Citation, FormatError, InfeasibleError, LimitError, ParamError } f
 export type { Enclosure, Grade, Graded } from './evidence.ts';
 export { exportMatrix, importMatrix, matrixFormats } from './formats/index.ts';
 export { type Calibration, calibrate } from './simulation/calibrate.ts';
-export { type Enumeration, type EnumerationOptions, enumerateStratum } from './simulation/enumerate-stratum.ts';
+export {
+  computedStratum,
+  type Enumeration,
+  type EnumerationOptions,
+  enumerateStratum,
+} from './simulation/enumerate-stratum.ts';
 export { guaranteedRadius } from './simulation/guaranteed-radius.ts';
 export { type NearestWordSpec, runNearestWordShard, type WordTally } from './simulation/nearest-word-shard.ts';
 export { createPatternSource, type PatternSource } from './simulation/patterns.ts';
@@ -29,7 +34,13 @@ export type { RunSpec } from './simulation/run-spec.ts';
 export { describeKernel, type Kernel, runShard, type ShardOptions } from './simulation/shard.ts';
 export { countedShards, type StoppingRule, stoppingReason } from './simulation/stopping.ts';
 export { runStratum } from './simulation/strata.ts';
-export { type StratifiedRate, type Stratum, stratifiedCurve, stratifiedRate } from './simulation/stratified-rate.ts';
+export {
+  provedStrata,
+  type StratifiedRate,
+  type Stratum,
+  stratifiedCurve,
+  stratifiedRate,
+} from './simulation/stratified-rate.ts';
 export { allocateShards, dominantStrata } from './simulation/stratum-planning.ts';
 export { emptyTally, mergeTallies, type Tally, tallySchema } from './simulation/tally.ts';
 export { berInterval } from './statistics/ber-interval.ts';

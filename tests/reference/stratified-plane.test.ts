@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { guaranteedRadius } from '../../src/core/simulation/guaranteed-radius.ts';
 import type { RunSpec } from '../../src/core/simulation/run-spec.ts';
 import { runStratum } from '../../src/core/simulation/strata.ts';
-import { type Stratum, stratifiedCurve } from '../../src/core/simulation/stratified-rate.ts';
+import { provedStrata, type Stratum, stratifiedCurve } from '../../src/core/simulation/stratified-rate.ts';
 import { simulatedCodes } from './simulated-codes.ts';
 
 const n = 273;
@@ -33,12 +33,7 @@ describe('PG(2,16) by strata', () => {
   });
 
   it('gives from one set of strata the rates that direct runs gave, and 1.8·10^-10 at p = 0.002', async () => {
-    const strata: Stratum[] = Array.from({ length: 8 }, (_, i) => ({
-      weight: i + 1,
-      frames: 0,
-      frameErrors: 0,
-      grade: 'proved',
-    }));
+    const strata: Stratum[] = provedStrata(8);
     for (let weight = 9; weight <= 15; weight++) strata.push({ weight, ...(await runStratum(spec, weight, 0)) });
     const ps = [...direct.map(({ p }) => p), 0.002];
     const rates = stratifiedCurve(strata, n, ps, 0.95);

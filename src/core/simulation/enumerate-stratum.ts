@@ -1,5 +1,6 @@
 import { createDecoder, decodesErasures } from '../decoders/create-decoder.ts';
 import { erased } from '../decoders/decoder.ts';
+import type { Symmetry } from '../designs/block-design.ts';
 import { LimitError, ParamError } from '../errors.ts';
 import { followsSymmetry, mapsRowsOntoThemselves, symmetryOf } from './code-symmetry.ts';
 import { orbitPatterns } from './orbit-patterns.ts';
@@ -7,13 +8,15 @@ import { type PermutationGroup, permutationGroup, trivialGroup } from './permuta
 import type { RunSpec } from './run-spec.ts';
 import { drive, type ShardOptions } from './shard.ts';
 import { stratumSpec } from './strata.ts';
+import type { Stratum } from './stratified-rate.ts';
 import type { Tally } from './tally.ts';
 import { keepTally } from './tally-frame.ts';
 import { validateSpec } from './validate-spec.ts';
 
 export interface EnumerationOptions extends ShardOptions {
-  /** Column permutations that map the set of rows onto itself; found in the matrix when not given, checked when given. */
-  symmetry?: readonly Uint32Array[];
+  /** Column permutations that map the set of rows onto itself, such as `columnSymmetry` of a code; found in the matrix
+   *  when not given, checked when given. */
+  symmetry?: readonly Pick<Symmetry, 'pointPerm'>[];
   /** Branches to do, of the `branches` in all: `from` up to, without, `to`. All of them when not given. */
   from?: number;
   to?: number;
@@ -61,7 +64,8 @@ function leastRepresentatives(n: number, weight: number, order: number): number 
   return Math.floor(count);
 }
 
-function groupFor({ H, decoder }: RunSpec, given: readonly Uint32Array[] | undefined): PermutationGroup {
+function groupFor({ H, decoder }: RunSpec, symmetry: EnumerationOptions['symmetry']): PermutationGroup {
+  const given = symmetry?.map(({ pointPerm }) => pointPerm);
   for (const permutation of given ?? []) {
     if (permutation.length !== H.cols || !mapsRowsOntoThemselves(H, permutation))
       throw new ParamError('symmetry', permutation, 'permutations of the columns that keep the set of rows');
@@ -110,4 +114,13 @@ function refuseInexact(tally: Tally): void {
   const largest = Math.max(tally.bits, tally.bitErrorsSquared);
   if (largest > Number.MAX_SAFE_INTEGER)
     throw new LimitError('counts of an enumeration', largest, Number.MAX_SAFE_INTEGER, 'in one tally');
+}
+
+/** What an enumeration says of its weight, for `stratifiedRate`.
+ *  @throws ParamError on one that was not completed. */
+export function computedStratum(weight: number, enumeration: Enumeration): Stratum {
+  if (!enumeration.complete)
+    throw new ParamError('enumeration', `${enumeration.patterns} patterns`, 'all patterns of the weight');
+  const { frames, frameErrors, bitErrors, bitErrorsSquared } = enumeration;
+  return { weight, frames, frameErrors, bitErrors, bitErrorsSquared, grade: 'computed' };
 }

@@ -1,3 +1,4 @@
+import { systematicEncoder } from '../codes/encode/systematic-encoder.ts';
 import { createDecoder } from '../decoders/create-decoder.ts';
 import { createFrameSource } from './frames.ts';
 import type { RunSpec } from './run-spec.ts';
@@ -17,7 +18,8 @@ function stepsPerPause({ H, decoder }: RunSpec): number {
 export async function* referenceShard(spec: RunSpec, index: number): AsyncGenerator<number, Tally> {
   const frames = await createFrameSource(spec, index);
   const decoder = createDecoder(spec.H, spec.decoder, spec.channel, spec.rate);
-  const keeper = keepTally(spec.H.cols);
+  const information = spec.bits === 'information' ? systematicEncoder(spec).infoPositions : undefined;
+  const keeper = keepTally(spec.H.cols, information);
   const budget = stepsPerPause(spec);
   let steps = 0;
   for (let done = 0; done < spec.framesPerShard; done++) {

@@ -15,4 +15,7 @@ export interface RunSpec {
   /** The all-zero word, or a random codeword from a stream of its own, so that the error patterns are the same. By
    *  default random words on the Z channel, whose errors depend on them, and zeros elsewhere. */
   sent?: 'zero' | 'random';
+  /** Positions over which bit errors are counted: all n, unless only those that carry information in the code's
+   *  systematic encoder are asked for. Counted by the reference decoders only. */
+  bits?: 'all' | 'information';
 }

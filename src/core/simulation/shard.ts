@@ -29,7 +29,7 @@ export async function runShard(
   checkCall(index, kernel);
   validateSpec(spec);
   const complete = withRate(spec);
-  const fast = kernel === 'wasm' ? fastShard(complete, index, options) : null;
+  const fast = kernel === 'wasm' && spec.bits !== 'information' ? fastShard(complete, index, options) : null;
   return fast ?? drive(referenceShard(complete, index), options);
 }
 
@@ -39,6 +39,8 @@ export async function describeKernel(spec: RunSpec): Promise<{ kernel: Kernel; r
   validateSpec(spec);
   if (!simdAvailable())
     return { kernel: 'reference', reason: 'this engine has no WebAssembly SIMD, so frames are decoded one at a time' };
+  if (spec.bits === 'information')
+    return { kernel: 'reference', reason: 'errors of the information bits alone are counted one frame at a time' };
   const fast = fastShard({ ...withRate(spec), framesPerShard: 1 }, 0);
   if (!fast)
     return {

@@ -33,6 +33,11 @@ interface Fractions {
 const none: RateBounds = { estimate: 0, lower: 0, upper: 0 };
 const unknown: RateBounds = { estimate: 1, lower: 0, upper: 1 };
 
+/** Weights up to a guaranteed radius, at which no pattern fails. */
+export function provedStrata(radius: number): Stratum[] {
+  return Array.from({ length: radius + 1 }, (_, weight) => ({ weight, frames: 0, frameErrors: 0, grade: 'proved' }));
+}
+
 /** FER(p) = Σ_w P(W = w)·φ_w for independent errors, from what is known of φ_w. The limits hold together with the stated
  *  probability at any one p, and at all p at once: each of the S sampled strata has exact limits that miss with
  *  probability (1 − level)/S (with bit errors: half of it for the failing share, half for their number), and a weight

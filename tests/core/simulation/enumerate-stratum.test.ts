@@ -4,7 +4,7 @@ import { matrixFromRows } from '../../../src/core/codes/sparse-matrix.ts';
 import type { DecoderSpec } from '../../../src/core/decoders/decoder-spec.ts';
 import { LimitError, ParamError } from '../../../src/core/errors.ts';
 import { symmetryOf } from '../../../src/core/simulation/code-symmetry.ts';
-import { enumerateStratum } from '../../../src/core/simulation/enumerate-stratum.ts';
+import { computedStratum, enumerateStratum } from '../../../src/core/simulation/enumerate-stratum.ts';
 import type { RunSpec } from '../../../src/core/simulation/run-spec.ts';
 import { mergeTallies } from '../../../src/core/simulation/tally.ts';
 import { countEveryPattern } from '../../models/pattern-enumeration.ts';
@@ -67,6 +67,8 @@ describe('an enumerated stratum', () => {
       enumerateStratum(spec(plane4, { kind: 'bit-flipping' }), 4, { symmetry: [], from: middle }),
     ]);
     expect(parts.map(({ complete }) => complete)).toEqual([false, false]);
+    expect(() => computedStratum(4, parts[0]!)).toThrow(ParamError);
+    expect(computedStratum(4, whole)).toMatchObject({ weight: 4, frames: 5985, grade: 'computed' });
     expect(whole).toMatchObject(mergeTallies(parts[0]!, parts[1]!));
     expect(parts[0]!.patterns + parts[1]!.patterns).toBe(5985n);
   });
@@ -79,9 +81,9 @@ describe('an enumerated stratum', () => {
 
   it('refuses a permutation that is no symmetry', async () => {
     const swap = Uint32Array.from({ length: 21 }, (_, j) => (j < 2 ? 1 - j : j));
-    await expect(enumerateStratum(spec(plane4, { kind: 'gallager-b' }), 2, { symmetry: [swap] })).rejects.toThrow(
-      ParamError,
-    );
+    await expect(
+      enumerateStratum(spec(plane4, { kind: 'gallager-b' }), 2, { symmetry: [{ pointPerm: swap }] }),
+    ).rejects.toThrow(ParamError);
   });
 
   it('refuses a decoder that must know p, and a channel whose errors are not alike everywhere', async () => {

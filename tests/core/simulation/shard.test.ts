@@ -52,6 +52,15 @@ describe('a shard', () => {
     },
   );
 
+  it('counts errors over the information bits alone when asked', async () => {
+    const all = await runShard(spec({ kind: 'gallager-b' }), 0);
+    const information = await runShard(spec({ kind: 'gallager-b' }, { bits: 'information' }), 0);
+    expect(information.bits).toBe(400 * 11);
+    expect(information.bitErrors).toBeLessThan(all.bitErrors);
+    expect(information.bitErrors).toBeGreaterThan(0.3 * all.bitErrors);
+    expect([information.frameErrors, information.iterations]).toEqual([all.frameErrors, all.iterations]);
+  });
+
   it('pauses often enough to be stopped within 50 ms, and stops', async () => {
     const controller = new AbortController();
     let pauses = 0;
