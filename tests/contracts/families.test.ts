@@ -5,6 +5,7 @@ import { mapsBlocksOntoThemselves } from '../../src/core/designs/block-symmetry.
 import { buildDesign, listFamilies, predictDesign } from '../../src/core/designs/design.ts';
 import { families, familyById } from '../../src/core/designs/families/index.ts';
 import type { DesignPrediction, EnumerationWindow } from '../../src/core/designs/family.ts';
+import { transposeDesign } from '../../src/core/designs/geometry/transpose-design.ts';
 import { verifyDesign } from '../../src/core/designs/verify.ts';
 import { ParamError } from '../../src/core/errors.ts';
 import type { Enclosure } from '../../src/core/evidence.ts';
@@ -168,7 +169,22 @@ function codesAsPredicted(design: BlockDesign, prediction: DesignPrediction, sai
     if (H.cols - rank <= 14) encloses(code.distance.value, exhaustiveDistance(H), `${at} distance`);
     expect([code.rowWeight, code.columnWeight], at).toEqual(weightsOf(H));
     expect(code.oneStepRadius.value * 2, at).toBeLessThanOrEqual(code.columnWeight);
+    const columns = code.checks === 'blocks' ? design : transposeDesign(design);
+    if (code.structure === 'cyclic') expect(shiftsWithin(columns, code.n), `${at} cyclic`).toBe(true);
+    if (code.structure === 'quasi-cyclic') {
+      const sizes = Array.from({ length: code.n - 1 }, (_, i) => i + 2).filter((size) => code.n % size === 0);
+      expect(
+        sizes.some((size) => shiftsWithin(columns, size)),
+        `${at} quasi-cyclic`,
+      ).toBe(true);
+    }
   }
+}
+
+/** Whether moving each run of `size` columns on by one, the last to the front, maps the checks onto themselves. */
+function shiftsWithin(columns: BlockDesign, size: number): boolean {
+  const shift = Uint32Array.from({ length: columns.v }, (_, c) => ((c + 1) % size === 0 ? c + 1 - size : c + 1));
+  return mapsBlocksOntoThemselves(columns, shift);
 }
 
 function weightsOf(H: { rows: number; cols: number; rowStart: Uint32Array; colIndex: Uint32Array }): number[] {

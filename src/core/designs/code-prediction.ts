@@ -25,6 +25,8 @@ export function rankOfTwoDesign({ v, b, k, r, lambda }: TwoDesignCounts): Graded
 
 export interface CodeFacts {
   rank?: Graded<Enclosure>;
+  /** The blocks are closed under x → x + 1 modulo v and listed orbit by orbit. */
+  cyclic?: boolean;
   structure?: CodePrediction['structure'];
   /** What is known of the distance in one orientation, beyond the bound from the girth. */
   distance?: Partial<Record<CodePrediction['checks'], Graded<Enclosure>>>;
@@ -56,9 +58,18 @@ export function predictTwoDesignCodes(counts: TwoDesignCounts, facts: CodeFacts 
           ? 'as many checks orthogonal on each bit as its column weight (Massey 1963)'
           : 'checks are not orthogonal, so one-step majority logic guarantees nothing by this argument',
       },
-      structure: facts.structure ?? 'none',
+      structure: facts.cyclic ? structureOfCyclicDesign(checks, counts) : (facts.structure ?? 'none'),
     };
   });
+}
+
+/** Points as bits: cyclic. Blocks as bits: circulants of size v, unless a short orbit leaves b no multiple of v. */
+function structureOfCyclicDesign(
+  checks: CodePrediction['checks'],
+  { v, b }: TwoDesignCounts,
+): CodePrediction['structure'] {
+  if (checks === 'blocks' || b === v) return 'cyclic';
+  return b % v === 0 ? 'quasi-cyclic' : 'none';
 }
 
 function dimensionFrom(n: number, rank: Graded<Enclosure>): Graded<Enclosure> {

@@ -45,10 +45,8 @@ export const cyclicDifferenceFamily = defineFamily({
   enumerate: enumerateFamilies,
   predict({ v, k, lambda }) {
     const counts = { v, b: (lambda * v * (v - 1)) / (k * (k - 1)), k, r: (lambda * (v - 1)) / (k - 1), lambda };
-    const symmetric = counts.b === v;
-    const structure = symmetric ? 'cyclic' : 'quasi-cyclic';
     const rank = k === 3 && lambda === 1 && v > 7 ? rankOfTripleSystem(v) : undefined;
-    return { t: 2, ...counts, cyclic: true, codes: predictTwoDesignCodes(counts, { rank, structure }) };
+    return { t: 2, ...counts, cyclic: true, codes: predictTwoDesignCodes(counts, { rank, cyclic: true }) };
   },
   build({ v, k, lambda }) {
     const b = (lambda * v * (v - 1)) / (k * (k - 1));

@@ -40,7 +40,13 @@ export const lu3 = defineFamily({
 
 function predictGraph(q: number): DesignPrediction {
   const counts = { v: q ** 3, b: q ** 3, k: q, r: q };
-  const codes = predictPartialLinearCodes(counts, { girth: 8, rank: rankOfGraph(q) });
+  // For a prime q, adding one to c and to z moves runs of q points and of q blocks on by one: q × q circulants.
+  const structure = primePowerOf(q)!.m === 1 ? 'quasi-cyclic' : 'none';
+  const codes = predictPartialLinearCodes(counts, {
+    girth: 8,
+    rank: rankOfGraph(q),
+    structure: { blocks: structure, points: structure },
+  });
   return { t: 1, ...counts, lambda: q, partialLinear: true, resolvable: true, codes };
 }
 

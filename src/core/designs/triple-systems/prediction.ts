@@ -19,7 +19,7 @@ export function predictTripleSystem({ v, method }: { v: number; method: string }
     codes: predictTwoDesignCodes(counts, {
       rank,
       distance: { points: distance },
-      structure: cyclic ? 'quasi-cyclic' : 'none',
+      cyclic,
     }),
   };
 }
