@@ -1,19 +1,18 @@
-import { type FormEvent, type ReactNode, useRef, useState } from 'react';
+import { type ReactNode, useRef } from 'react';
 import { endpoints } from '@/api/endpoints.ts';
-import { ApiFailure, call } from '@/client/api.ts';
 import { useApi } from '@/client/hooks.ts';
 import { Button } from '@/components/ui/Button.tsx';
 import { TextField } from '@/components/ui/fields.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
 import { counted } from '@/components/ui/numbers.ts';
-import { paths } from '@/paths.ts';
 import { CodeChoice } from './CodeChoice.tsx';
 import { DecoderFields } from './DecoderFields.tsx';
 import { PartError } from './PartError.tsx';
-import { type FieldErrors, type Judged, OFFERED_DECODERS, serverErrors } from './run-draft.ts';
+import { type Judged, OFFERED_DECODERS } from './run-draft.ts';
 import { StoppingFields } from './StoppingFields.tsx';
 import { SweepFields } from './SweepFields.tsx';
 import { useRunDraft } from './use-run-draft.ts';
+import { useRunSubmission } from './use-run-submission.ts';
 
 interface Props {
   projectId: string;
@@ -24,29 +23,8 @@ export function NewRunForm({ projectId }: Props) {
   const codes = useApi(endpoints.listCodes, { params: { id: projectId }, query: { limit: 500 } });
   const requirements = useApi(endpoints.getRequirements, { params: { id: projectId } });
   const { draft, name, judged, change } = useRunDraft(codes.data?.codes, requirements.data?.requirements);
-  const [wasSent, setWasSent] = useState(false);
-  const [refusal, setRefusal] = useState<{ message: string; fields: FieldErrors } | null>(null);
-  const [isBusy, setIsBusy] = useState(false);
   const form = useRef<HTMLFormElement>(null);
-  const errors = { ...(refusal?.fields ?? {}), ...(wasSent ? judged.errors : {}) };
-
-  const onSubmit = async (event: FormEvent) => {
-    event.preventDefault();
-    setWasSent(true);
-    setRefusal(null);
-    const { run } = judged;
-    if (!run) return focusFirstError(form.current);
-    setIsBusy(true);
-    try {
-      const answer = await call(endpoints.createRun, { params: { id: projectId }, body: run });
-      location.assign(paths.run(projectId, answer.run.id));
-    } catch (error) {
-      setIsBusy(false);
-      if (!(error instanceof ApiFailure)) throw error;
-      setRefusal({ message: error.message, fields: serverErrors(error.fields, run) });
-      focusFirstError(form.current);
-    }
-  };
+  const { errors, refusal, isBusy, onSubmit } = useRunSubmission(projectId, judged, form);
 
   return (
     <form ref={form} onSubmit={onSubmit} noValidate className="grid max-w-3xl gap-7" aria-label="New run">
@@ -94,7 +72,7 @@ export function NewRunForm({ projectId }: Props) {
       </Part>
       {refusal && (
         <Notice kind="fail" word="Refused" live>
-          {refusal.message} Nothing was stored.
+          {refusal} Nothing was stored.
         </Notice>
       )}
       <div className="flex flex-wrap items-center gap-x-5 gap-y-2 border-ink border-t pt-4">
@@ -112,10 +90,6 @@ function countText({ points, mostShards }: Judged, codes: number): string {
   if (points === 0) return `${counted(codes, 'code')} chosen, no points yet.`;
   const shards = mostShards === null ? '' : `, at most ${counted(mostShards, 'shard')}`;
   return `${counted(points, 'point')}${shards}.`;
-}
-
-function focusFirstError(form: HTMLFormElement | null): void {
-  requestAnimationFrame(() => form?.querySelector<HTMLElement>('[aria-invalid="true"], [data-error]')?.focus());
 }
 
 function Part({ title, error, children }: { title: string; error?: string | undefined; children: ReactNode }) {

@@ -5,6 +5,7 @@ import { CurveSwatch } from '../CurveSwatch.tsx';
 import type { ChartCurve } from '../chart-curve.ts';
 import { Figure } from '../Figure.tsx';
 import { intervalText, levelText, parameterText, rateText } from '../rate-text.ts';
+import type { Mark } from './marks.ts';
 
 /** A point in one sentence, for the status line that screen readers hear. */
 export function pointSentence(label: string, point: CurvePoint, kind: RateKind): string {
@@ -15,16 +16,15 @@ export function pointSentence(label: string, point: CurvePoint, kind: RateKind):
 
 interface Props {
   chartCurve: ChartCurve;
-  point: CurvePoint;
+  mark: Mark;
   kind: RateKind;
-  x: number;
-  y: number;
   /** Width of the drawing, to turn the box inward near the right edge. */
   width: number;
 }
 
 /** The figures of the point under the pointer or the keyboard. */
-export function Readout({ chartCurve, point, kind, x, y, width }: Props) {
+export function Readout({ chartCurve, mark, kind, width }: Props) {
+  const { point, x, y } = mark;
   const turnsLeft = x > width / 2;
   const rate = point[kind];
   return (

@@ -1,14 +1,12 @@
-import type { RateKind } from '@/client/curves/curve.ts';
 import { counted } from '@/components/ui/numbers.ts';
-import type { ChartCurve } from '../chart-curve.ts';
 import { parameterText, rateText } from '../rate-text.ts';
-import type { Requirement } from './domain.ts';
+import type { ChartModel } from './chart-model.ts';
 
 /** The chart in words, for its description: what each curve does from its first to its last point. */
-export function describeChart(curves: readonly ChartCurve[], kind: RateKind, requirement: Requirement | null): string {
+export function describeChart({ placed, kind, requirement }: ChartModel): string {
   const name = kind === 'fer' ? 'Frame error rate' : 'Bit error rate';
   const sentences = [`${name} against the crossover probability p, both axes logarithmic, p falling to the right.`];
-  for (const { label, curve, style } of curves) {
+  for (const { label, curve, style } of placed.map(({ chartCurve }) => chartCurve)) {
     const first = curve.points[0];
     const last = curve.points.at(-1);
     if (!first || !last) {
