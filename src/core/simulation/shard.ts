@@ -1,6 +1,7 @@
 import { ParamError } from '../errors.ts';
 import { rank } from '../gf2/rank.ts';
 import { fastShard, simdAvailable } from '../kernels/index.ts';
+import { laneShard } from './lane-shard.ts';
 import { referenceShard } from './reference-shard.ts';
 import type { RunSpec } from './run-spec.ts';
 import type { Tally } from './tally.ts';
@@ -17,8 +18,8 @@ export interface ShardOptions {
 }
 
 /** Decodes the frames of shard `index`; a pure function of spec and index. `wasm` runs the fast kernel where there is
- *  one for the decoder and the engine, and the readable reference elsewhere; `describeKernel` says which. Both give the
- *  same tally to the last integer, except sum-product, which agrees within its interval.
+ *  one for the decoder and the engine, 32 lanes of TypeScript for simple hard decisions elsewhere, and the readable
+ *  reference for the rest; `describeKernel` says which. All give the same tally to the last integer, except sum-product, which agrees within its interval.
  *  @throws ParamError on a spec out of range. */
 export async function runShard(
   spec: RunSpec,
@@ -30,25 +31,37 @@ export async function runShard(
   validateSpec(spec);
   const complete = withRate(spec);
   const fast = kernel === 'wasm' && spec.bits !== 'information' ? fastShard(complete, index, options) : null;
-  return fast ?? drive(referenceShard(complete, index), options);
+  if (fast) return fast;
+  const lanes = kernel === 'wasm' ? laneShard(complete, index) : null;
+  return drive(lanes ?? referenceShard(complete, index), options);
+}
+
+/** The path a shard takes: a kernel made for its matrix, 32 frames at a time in TypeScript, or one at a time. */
+export interface KernelDescription {
+  kernel: Kernel | 'lanes';
+  reason: string;
 }
 
 /** Which path `runShard` takes for a spec, and why. Makes the kernel where there is one, and decodes a frame.
  *  @throws ParamError on a spec out of range. */
-export async function describeKernel(spec: RunSpec): Promise<{ kernel: Kernel; reason: string }> {
+export async function describeKernel(spec: RunSpec): Promise<KernelDescription> {
   validateSpec(spec);
-  if (!simdAvailable())
-    return { kernel: 'reference', reason: 'this engine has no WebAssembly SIMD, so frames are decoded one at a time' };
   if (spec.bits === 'information')
     return { kernel: 'reference', reason: 'errors of the information bits alone are counted one frame at a time' };
-  const fast = fastShard({ ...withRate(spec), framesPerShard: 1 }, 0);
-  if (!fast)
-    return {
-      kernel: 'reference',
-      reason: `no fast kernel for ${spec.decoder.kind} on ${spec.channel.kind}: frames are decoded one at a time`,
-    };
-  await fast;
-  return { kernel: 'wasm', reason: `a kernel made for this matrix and ${spec.decoder.kind}` };
+  const one = { ...withRate(spec), framesPerShard: 1 };
+  const fast = fastShard(one, 0);
+  if (fast) {
+    await fast;
+    return { kernel: 'wasm', reason: `a kernel made for this matrix and ${spec.decoder.kind}` };
+  }
+  const why = simdAvailable()
+    ? `no fast kernel for ${spec.decoder.kind} on ${spec.channel.kind}`
+    : 'this engine has no WebAssembly SIMD';
+  const lanes = laneShard(one, 0);
+  await drive(lanes ?? referenceShard(one, 0), {});
+  return lanes
+    ? { kernel: 'lanes', reason: `${why}: 32 frames at a time in TypeScript` }
+    : { kernel: 'reference', reason: `${why}: one frame at a time` };
 }
 
 /** Runs a shard that hands back control now and then, to its end or until it is stopped. */
