@@ -20,6 +20,7 @@ import { quadraticResidue } from './quadratic-residue.ts';
 import { reeUnital } from './ree-unital.ts';
 import { sphericalGeometry } from './spherical-geometry.ts';
 import { splitCayleyHexagon } from './split-cayley-hexagon.ts';
+import { steinerQuadruple } from './steiner-quadruple.ts';
 import { steinerTriple } from './steiner-triple.ts';
 import { transversal } from './transversal.ts';
 import { witt } from './witt.ts';
@@ -43,6 +44,7 @@ export const families: readonly Family[] = [
   projectiveSpread,
   steinerTriple,
   kirkmanTriple,
+  steinerQuadruple,
   witt,
   transversal,
   quadraticResidue,
