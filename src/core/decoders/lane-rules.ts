@@ -42,15 +42,18 @@ function flippingLanes(
 ): LaneRule {
   const word = new Int32Array(H.cols);
   const checks = bitEdges.map((e) => edgeCheck[e]!);
-  const counter = laneCounter(largestDegree(degrees));
+  const votes = new Int32Array(largestDegree(degrees));
+  const counter = laneCounter(votes.length);
   return {
     word,
     load() {},
     iterate(lanes, syndrome) {
       let flipped = 0;
       for (let j = 0; j < H.cols; j++) {
-        counter.clear();
-        for (let t = bitStart[j]!; t < bitStart[j + 1]!; t++) counter.add(syndrome[checks[t]!]!);
+        const from = bitStart[j]!;
+        const degree = degrees[j]!;
+        for (let t = 0; t < degree; t++) votes[t] = syndrome[checks[from + t]!]!;
+        counter.count(votes, degree);
         const flip = counter.atLeast(thresholds[j]!) & lanes;
         word[j]! ^= flip;
         flipped |= flip;
@@ -60,6 +63,7 @@ function flippingLanes(
   };
 }
 
+/** Messages are kept in the order of the bits' edges, so that those of a bit lie side by side. */
 function gallagerLanes(
   { H, edgeCheck, bitStart, bitEdges }: TannerGraph,
   degrees: Uint32Array,
@@ -67,35 +71,34 @@ function gallagerLanes(
 ): LaneRule {
   const word = new Int32Array(H.cols);
   const received = new Int32Array(H.cols);
-  const toCheck = new Int32Array(H.colIndex.length);
+  const checks = bitEdges.map((e) => edgeCheck[e]!);
+  const toCheck = new Int32Array(checks.length);
   const checkSum = new Int32Array(H.rows);
-  const counter = laneCounter(largestDegree(degrees));
+  const differs = new Int32Array(largestDegree(degrees));
+  const counter = laneCounter(differs.length);
   return {
     word,
     load(lanes) {
-      for (let j = 0; j < H.cols; j++) received[j] = (received[j]! & ~lanes) | (word[j]! & lanes);
-      for (let e = 0; e < toCheck.length; e++)
-        toCheck[e] = (toCheck[e]! & ~lanes) | (received[H.colIndex[e]!]! & lanes);
+      for (let j = 0; j < H.cols; j++) {
+        received[j] = (received[j]! & ~lanes) | (word[j]! & lanes);
+        for (let t = bitStart[j]!; t < bitStart[j + 1]!; t++)
+          toCheck[t] = (toCheck[t]! & ~lanes) | (received[j]! & lanes);
+      }
     },
     iterate(lanes) {
       checkSum.fill(0);
-      for (let e = 0; e < toCheck.length; e++) checkSum[edgeCheck[e]!]! ^= toCheck[e]!;
+      for (let t = 0; t < toCheck.length; t++) checkSum[checks[t]!]! ^= toCheck[t]!;
       for (let j = 0; j < H.cols; j++) {
         const y = received[j]!;
-        counter.clear();
-        for (let t = bitStart[j]!; t < bitStart[j + 1]!; t++) {
-          const e = bitEdges[t]!;
-          counter.add(checkSum[edgeCheck[e]!]! ^ toCheck[e]! ^ y);
-        }
-        word[j] = y ^ counter.atLeast(Math.ceil(degrees[j]! / 2));
+        const from = bitStart[j]!;
+        const degree = degrees[j]!;
+        for (let t = 0; t < degree; t++) differs[t] = checkSum[checks[from + t]!]! ^ toCheck[from + t]! ^ y;
+        counter.count(differs, degree);
+        word[j] = y ^ counter.atLeast((degree + 1) >> 1);
         // D less one where the message itself differs is at least b: D is above b, or is b and the message agrees.
         const reaches = counter.atLeast(thresholds[j]!);
         const passes = counter.atLeast(thresholds[j]! + 1);
-        for (let t = bitStart[j]!; t < bitStart[j + 1]!; t++) {
-          const e = bitEdges[t]!;
-          const differs = checkSum[edgeCheck[e]!]! ^ toCheck[e]! ^ y;
-          toCheck[e] = y ^ (passes | (reaches & ~differs));
-        }
+        for (let t = 0; t < degree; t++) toCheck[from + t] = y ^ (passes | (reaches & ~differs[t]!));
       }
       return lanes;
     },
@@ -105,21 +108,38 @@ function gallagerLanes(
 /** A count in each lane, held as one word for each of its binary digits. */
 function laneCounter(most: number) {
   const digits = 32 - Math.clz32(most);
-  const planes = new Int32Array(digits);
+  const limit = 2 ** digits;
+  const planes = new Int32Array(Math.max(2, digits));
+  const carryFrom = (lanes: number, digit: number) => {
+    let carry = lanes;
+    for (let k = digit; carry !== 0; k++) {
+      const plane = planes[k]!;
+      planes[k] = plane ^ carry;
+      carry &= plane;
+    }
+  };
   return {
-    clear: () => planes.fill(0),
-    /** Adds one in these lanes. */
-    add(lanes: number) {
-      let carry = lanes;
-      for (let k = 0; carry !== 0; k++) {
-        const digit = planes[k]!;
-        planes[k] = digit ^ carry;
-        carry &= digit;
+    /** Counts the first `size` votes in each lane, two at a time by a full adder on the lowest digit. */
+    count(votes: Int32Array, size: number): void {
+      for (let k = 2; k < digits; k++) planes[k] = 0;
+      let ones = 0;
+      let twos = 0;
+      for (let t = 0; t < size; t += 2) {
+        const a = votes[t]!;
+        const b = t + 1 < size ? votes[t + 1]! : 0;
+        const either = ones ^ a;
+        const carry = (ones & a) | (either & b);
+        ones = either ^ b;
+        const higher = twos & carry;
+        twos ^= carry;
+        if (higher !== 0) carryFrom(higher, 2);
       }
+      planes[0] = ones;
+      planes[1] = twos;
     },
     /** The lanes whose count is at least b: from the lowest digit up, what is set decides unless a higher one differs. */
     atLeast(b: number): number {
-      if (b >= 2 ** digits) return 0;
+      if (b >= limit) return 0;
       let lanes = -1;
       for (let k = 0; k < digits; k++) lanes = (b >>> k) & 1 ? planes[k]! & lanes : planes[k]! | lanes;
       return lanes;
