@@ -19,3 +19,10 @@ export function affineOnTwoCopies(q: number, e: number, exchange: boolean): Uint
     ? [...shifts, scale, Uint32Array.from({ length: 2 * q }, (_, x) => (x + q) % (2 * q))]
     : [...shifts, scale];
 }
+
+/** The same multipliers on several copies of a prime field, x + jq, and a point fixed by all, ∞ = copies·q. */
+export function affineOnCopiesWithInfinity(q: number, copies: number, multiplier: number): Uint32Array[] {
+  const onAll = (f: (x: number) => number) =>
+    Uint32Array.from({ length: copies * q + 1 }, (_, x) => (x === copies * q ? x : x - (x % q) + (f(x % q) % q)));
+  return [onAll((x) => x + 1), onAll((x) => x * multiplier)];
+}

@@ -1,5 +1,5 @@
 import { seededRandom } from '../../algebra/seeded-random.ts';
-import { affineOnTwoCopies, affineWithInfinity } from './groups.ts';
+import { affineOnCopiesWithInfinity, affineOnTwoCopies, affineWithInfinity } from './groups.ts';
 import { quadruplesUnderGroup } from './prescribed-group.ts';
 
 /** Which group each base order is sought under, and the index of its multipliers; found by trial, once. */
@@ -14,6 +14,7 @@ const BASE: Record<number, (v: number) => Uint32Array[]> = {
   50: () => affineOnTwoCopies(25, 1, true),
   58: () => affineOnTwoCopies(29, 1, true),
   62: () => affineWithInfinity(61, 4),
+  70: () => affineOnCopiesWithInfinity(23, 3, 2),
   74: () => affineOnTwoCopies(37, 1, true),
   82: () => affineWithInfinity(81, 1),
   86: () => affineOnTwoCopies(43, 2, false),
