@@ -1,20 +1,38 @@
 import type { BuiltCode } from '@workers/build/api.ts';
+import { type ReactNode, useEffect, useRef } from 'react';
 import { duration, wholeNumber } from '@/components/ui/numbers.ts';
 import { CertificateBlock } from '../CertificateBlock.tsx';
 import { MatrixPlot } from '../matrix-plot/MatrixPlot.tsx';
 import { Fingerprint, PropertiesBlock } from '../PropertiesBlock.tsx';
 import WeightCharts from '../WeightCharts.tsx';
 
-/** What the build found: certificate, properties, weights, the matrix. */
-export function BuiltResult({ built, elapsedMs }: { built: BuiltCode; elapsedMs: number }) {
+interface Props {
+  built: BuiltCode;
+  elapsedMs: number;
+  /** What can be done with it. */
+  children: ReactNode;
+}
+
+/** What the build found: certificate, properties, weights, the matrix. Comes into view by itself. */
+export function BuiltResult({ built, elapsedMs, children }: Props) {
+  const top = useRef<HTMLElement>(null);
+  useEffect(() => top.current?.scrollIntoView({ block: 'start', behavior: 'smooth' }), []);
   const { n, k, designTitle, fingerprint, properties, certificate, rowWeights, columnWeights } = built;
   return (
-    <section aria-label="Built code" className="grid gap-6" data-built-code>
-      <div role="status">
-        <h2>
-          ({wholeNumber(n)}, {wholeNumber(k)}) {designTitle}
-        </h2>
-        <p className="text-quiet">Built and verified in this browser in {duration(elapsedMs)}.</p>
+    <section
+      ref={top}
+      aria-label="Built code"
+      className="grid min-w-0 gap-6 border-ink border-t pt-5 lg:col-span-2"
+      data-built-code
+    >
+      <div className="flex flex-wrap items-end justify-between gap-x-8 gap-y-4">
+        <div role="status">
+          <h2>
+            ({wholeNumber(n)}, {wholeNumber(k)}) {designTitle}
+          </h2>
+          <p className="text-quiet">Built and verified in this browser in {duration(elapsedMs)}.</p>
+        </div>
+        {children}
       </div>
       <div className="grid items-start gap-6 lg:grid-cols-2">
         <PropertiesBlock

@@ -40,8 +40,9 @@ export function KeepForm({ projectId, built, request }: Props) {
   };
 
   return (
-    <form onSubmit={submit} className="grid gap-3">
+    <form onSubmit={submit} className="flex flex-wrap items-start gap-x-4 gap-y-3">
       <TextField
+        className="w-72"
         label="name (optional)"
         hint="how the project calls it; else its design names it"
         maxLength={120}
@@ -50,11 +51,11 @@ export function KeepForm({ projectId, built, request }: Props) {
         onChange={(event) => setName(event.target.value)}
       />
       {failure && (
-        <Notice kind="fail" word="Not kept" live>
+        <Notice kind="fail" word="Not kept" live className="order-last w-full">
           {failure.message}
         </Notice>
       )}
-      <Button kind="primary" type="submit" busy={busy}>
+      <Button kind="primary" type="submit" busy={busy} className="mt-4">
         {busy ? 'The server builds it too' : 'Keep in this project'}
       </Button>
     </form>

@@ -83,21 +83,21 @@ function Bench({ engine, projectId, mayKeep, search }: Props & { engine: Engine 
         />
         {refusal && <RefusalNotice refusal={refusal} />}
       </div>
-      <div className="grid gap-4 lg:row-span-2">
+      <div className="grid gap-4">
         <Prediction family={family} predicted={predicted} checks={choice.checks} typed={choice.params} />
         <BuildControls build={build} allowed={predicted.ok} onStart={() => start(request)} onCancel={cancel} />
-        {build.state === 'built' &&
-          (mayKeep ? (
-            <KeepForm projectId={projectId} built={build.built} request={build.request} />
-          ) : (
-            <Notice kind="note" word="Not kept">
-              Only an engineer or the owner can keep a code in this project.
-            </Notice>
-          ))}
       </div>
       {build.state === 'built' && (
         <Suspense fallback={<p className="text-quiet">Drawing …</p>}>
-          <BuiltResult built={build.built} elapsedMs={build.elapsedMs} />
+          <BuiltResult built={build.built} elapsedMs={build.elapsedMs}>
+            {mayKeep ? (
+              <KeepForm projectId={projectId} built={build.built} request={build.request} />
+            ) : (
+              <Notice kind="note" word="Not kept">
+                Only an engineer or the owner can keep a code in this project.
+              </Notice>
+            )}
+          </BuiltResult>
         </Suspense>
       )}
     </div>
