@@ -16,7 +16,9 @@ interface Props {
 /** What the build found: certificate, properties, weights, the matrix. Comes into view by itself. */
 export function BuiltResult({ built, elapsedMs, children }: Props) {
   const top = useRef<HTMLElement>(null);
-  useEffect(() => top.current?.scrollIntoView({ block: 'start', behavior: 'smooth' }), []);
+  useEffect(() => {
+    top.current?.scrollIntoView({ block: 'start', behavior: 'smooth' });
+  }, []);
   const { n, k, designTitle, fingerprint, properties, certificate, rowWeights, columnWeights } = built;
   return (
     <section
