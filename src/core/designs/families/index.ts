@@ -1,5 +1,12 @@
 import { ParamError } from '../../errors.ts';
 import type { Family } from '../family.ts';
+import { classesKept } from '../operations/classes.ts';
+import { complement } from '../operations/complement.ts';
+import { derived } from '../operations/derived.ts';
+import { dual } from '../operations/dual.ts';
+import { relabel } from '../operations/relabel.ts';
+import { residual } from '../operations/residual.ts';
+import { union } from '../operations/union.ts';
 import { affineGeometry } from './affine-geometry.ts';
 import { affinePlane } from './affine-plane.ts';
 import { biplane } from './biplane.ts';
@@ -51,6 +58,13 @@ export const families: readonly Family[] = [
   hadamard,
   cyclicDifferenceFamily,
   biplane,
+  derived,
+  residual,
+  complement,
+  dual,
+  classesKept,
+  union,
+  relabel,
 ];
 
 /** The family with this id. @throws ParamError that lists every id. */
