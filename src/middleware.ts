@@ -14,7 +14,15 @@ export const onRequest = defineMiddleware(async (context, next) => {
     checkOrigin(request, url.origin);
     locals.user = await currentUser(database(), request);
   } catch (error) {
-    return errorResponse(error, `${request.method} ${url.pathname}`);
+    const refusal = errorResponse(error, `${request.method} ${url.pathname}`);
+    return url.pathname.startsWith('/api/') ? refusal : asText(refusal);
   }
   return next();
 });
+
+/** For pages: the same refusal in words, since no page can be rendered without its database. */
+async function asText(refusal: Response): Promise<Response> {
+  const { error } = await refusal.json();
+  const headers = { 'Content-Type': 'text/plain; charset=utf-8', 'Cache-Control': 'no-store' };
+  return new Response(`Blockwright: ${error.message}\n`, { status: refusal.status, headers });
+}

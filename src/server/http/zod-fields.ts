@@ -1,5 +1,8 @@
 import type { z } from 'zod';
 
+/** How zod begins where a schema has no words of its own; what follows is what is accepted. */
+const complaint = /^(Invalid (input|option|discriminator value)|Too (small|big))[:.] [Ee]xpected /;
+
 /** Each bad field of a parse, by its dotted path, with what is accepted there. */
 export function fieldsOf(error: z.core.$ZodError): Record<string, string> {
   const fields: Record<string, string> = {};
@@ -20,7 +23,7 @@ function collect(issue: z.core.$ZodIssue, prefix: PropertyKey[], fields: Record<
     for (const inner of nearest) collect(inner, path, fields);
     return;
   }
-  put(fields, path, issue.message);
+  put(fields, path, issue.message.replace(complaint, ''));
 }
 
 function put(fields: Record<string, string>, path: PropertyKey[], accepted: string): void {

@@ -20,6 +20,7 @@ const acceptedOf = (data: Record<string, unknown>, message: string): string =>
 
 /** The engine names a family's parameter; the request holds it under `design.params`. */
 function fieldOf(param: string): string {
+  if (param.startsWith('design.') || param.startsWith('derivation.')) return param;
   if (param === 'family' || param.startsWith('params')) return `design.${param}`;
   if (param === 'checks' || param === 'kind' || param.startsWith('transforms')) return `derivation.${param}`;
   return `design.params.${param}`;
