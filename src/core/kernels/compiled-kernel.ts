@@ -14,8 +14,8 @@ export interface Draws {
   random: Uint32Array;
   /** Weights of the patterns: one weight, or the law of independent errors. */
   weights: number | WeightTable;
-  /** Ratio P(0)/P(1) of a received 0, for kernels that want it. */
-  ratio: number;
+  /** P(0) − P(1) of a received 0, for kernels that want it. */
+  bias: number;
 }
 
 interface Instance {
@@ -69,7 +69,7 @@ export function begin({ memory }: Pick<Instance, 'memory'>, image: KernelImage, 
   const words = new Uint32Array(memory.buffer);
   const wordAt = (place: number) => place >> 2;
   words.fill(0, wordAt(control.frameErrors), wordAt(control.parameter));
-  new Float32Array(memory.buffer)[wordAt(control.parameter)] = draws.ratio;
+  new Float64Array(memory.buffer)[control.parameter >> 3] = draws.bias;
   words.fill(0, wordAt(image.places.histogram), wordAt(image.places.histogram) + image.cap + 2);
   words.set(draws.random, wordAt(control.random));
   words[wordAt(control.left)] = draws.frames;

@@ -40,7 +40,7 @@ const nothing = { params: [], results: [] } as const;
 
 /** What a kernel brings. All functions take their masks from the control block. */
 export interface LaneKernel {
-  lanes: 128 | 16 | 4;
+  lanes: 128 | 16 | 2;
   /** Filling lanes a second time in a step costs another syndrome pass; it is done when so many are free. */
   refillAt: number;
   cap: number;

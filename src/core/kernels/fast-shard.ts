@@ -22,10 +22,10 @@ export interface FastShardOptions {
 export function fastShard(spec: RunSpec, index: number, options: FastShardOptions = {}): Promise<Tally> | null {
   if (!simdAvailable()) return slicedShard(spec, index, options);
   const weights = patternWeights(spec);
-  const ratio = zeroRatio(spec);
-  if (weights === null || ratio === null) return null;
+  const bias = zeroBias(spec);
+  if (weights === null) return null;
   const kernel = kernelFor(spec);
-  return kernel && runOn(kernel, spec, index, { weights, ratio }, options);
+  return kernel && runOn(kernel, spec, index, { weights, bias }, options);
 }
 
 /** How the channel's patterns are weighted; null where they are not independent of what is sent or of each other. */
@@ -44,16 +44,13 @@ function patternWeights({ H, channel, rate }: RunSpec): (() => Draws['weights'])
   }
 }
 
-/** Below this log-likelihood ratio a channel output says next to nothing, and 32-bit ratios cannot tell it from 1. */
-const faintest = 1e-3;
-
-/** P(0)/P(1) of a received 0 where the decoder reads it, else 1; null where the channel is too faint for the kernel.
+/** P(0) − P(1) = tanh(L/2) of a received 0 where the decoder reads it, else 0.
  *  @throws ParamError where the channel has no such ratio, as the reference does. */
-function zeroRatio({ channel, decoder, rate }: RunSpec): number | null {
-  if (decoder.kind !== 'sum-product') return 1;
+function zeroBias({ channel, decoder, rate }: RunSpec): number {
+  if (decoder.kind !== 'sum-product') return 0;
   const ratios = new Float64Array(1);
   channelReading(channel, rate, decoder.designP)(new Uint8Array(1), ratios);
-  return ratios[0]! < faintest ? null : Math.exp(ratios[0]!);
+  return Math.tanh(ratios[0]! / 2);
 }
 
 function kernelFor({ H, decoder, channel }: RunSpec): Promise<CompiledKernel> | null {
@@ -70,15 +67,15 @@ async function runOn(
   compiling: Promise<CompiledKernel>,
   spec: RunSpec,
   index: number,
-  draws: { weights: () => Draws['weights']; ratio: number },
+  draws: { weights: () => Draws['weights']; bias: number },
   { signal, pause }: FastShardOptions,
 ): Promise<Tally> {
   const kernel = await compiling;
   const { image } = kernel;
   const instance = await kernel.take();
   const random = await streamState(spec.seed, index);
-  const { ratio } = draws;
-  begin(instance, image, { frames: spec.framesPerShard, random, weights: draws.weights(), ratio });
+  const { bias } = draws;
+  begin(instance, image, { frames: spec.framesPerShard, random, weights: draws.weights(), bias });
   const steps = Math.max(1, Math.floor(sliceNs / image.stepNs));
   signal?.throwIfAborted();
   while (instance.run(steps) === 0) {

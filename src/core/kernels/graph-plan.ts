@@ -26,6 +26,7 @@ export interface GraphPlan {
   /** Whether the kernel's order of columns is that of the matrix. */
   plainColumns: boolean;
   largestColumn: number;
+  largestRow: number;
   /** The kernel's constants a column, as given. */
   settings: readonly Uint32Array[];
 }
@@ -55,10 +56,13 @@ export function planGraph(
     columnOrder: byDegree.order,
     columnClasses: byDegree.classes,
     plainColumns: byDegree.order.every((j, s) => j === s),
-    largestColumn: degrees.reduce((most, d) => Math.max(most, d), 0),
+    largestColumn: largest(degrees),
+    largestRow: largest(weights),
     settings,
   };
 }
+
+const largest = (values: Uint32Array): number => values.reduce((most, value) => Math.max(most, value), 0);
 
 /** Row 0's columns when row j is {d + j} or {d − j} (mod n) for all j. The second kind is the first with its rows
  *  counted backwards, which only schedules in index order could tell apart; those do not ask. */

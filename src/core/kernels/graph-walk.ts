@@ -3,6 +3,7 @@
 
 import { rowOf, type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
 import {
+  base,
   countLoop,
   type Expr,
   type FunctionBuilder,
@@ -30,8 +31,10 @@ export interface Site {
   /** The kernel's constants for the column: numbers, or read from the table in the mixed rest. */
   setting(k: number): number | Expr<'i32'>;
   /** Runs the body for each neighbour, as repeated code or as a loop. `edge` is the place in an array of one vector an
-   *  edge, in the order of this side. */
-  eachNeighbour(body: (neighbour: Place, edge: Place) => Statement[]): Statement;
+   *  edge, in the order of this side; `slot` the same within the site, from 0. */
+  eachNeighbour(body: (neighbour: Place, edge: Place, slot: Place) => Statement[]): Statement;
+  /** The same from the last to the first. */
+  eachNeighbourBackwards(body: (neighbour: Place, edge: Place, slot: Place) => Statement[]): Statement;
   /** Neighbours one by one, where the weight is known. */
   neighbours: readonly { neighbour: Place; edge: Place }[];
 }
@@ -168,6 +171,8 @@ function loopOver(at: Local<'i32'>, c: WeightClass, parts: Statement[]): Stateme
   return countLoop(at, { from: c.from * vectorBytes, to: c.to * vectorBytes, step: vectorBytes }, parts);
 }
 
+const slot = (t: number): Place => ({ address: base, offset: vectorBytes * t });
+
 function unrolledSite(own: Local<'i32'>, weight: number, c: WeightClass, neighbours: Site['neighbours']): Site {
   return {
     own: { address: own, offset: 0 },
@@ -175,7 +180,16 @@ function unrolledSite(own: Local<'i32'>, weight: number, c: WeightClass, neighbo
     degree: i32.of(weight),
     setting: (k) => c.settings[k]!,
     neighbours,
-    eachNeighbour: (body) => sequence(...neighbours.flatMap(({ neighbour, edge }) => body(neighbour, edge))),
+    eachNeighbour: (body) =>
+      sequence(...neighbours.flatMap(({ neighbour, edge }, t) => body(neighbour, edge, slot(t)))),
+    eachNeighbourBackwards: (body) =>
+      sequence(
+        ...neighbours.flatMap((_, back) => {
+          const t = neighbours.length - 1 - back;
+          const { neighbour, edge } = neighbours[t]!;
+          return body(neighbour, edge, slot(t));
+        }),
+      ),
   };
 }
 
@@ -252,7 +266,7 @@ function mixedLoop(
         last.set(i32.add(walker, i32.shl(weight, 2))),
         vector.set(edge),
         whileLoop(i32.ltU(walker, last), [
-          ...inner({ address: i32.load(walker), offset: 0 }, { address: vector, offset: 0 }),
+          ...inner(...placesAt(walker, vector)),
           walker.set(i32.add(walker, wordBytes)),
           vector.set(i32.add(vector, vectorBytes)),
         ]),
@@ -260,7 +274,27 @@ function mixedLoop(
       f.giveBack(walker, last, vector);
       return code;
     },
+    eachNeighbourBackwards: (inner) => {
+      const [walker, first, vector] = [f.borrow('i32'), f.borrow('i32'), f.borrow('i32')];
+      const code = sequence(
+        first.set(i32.add(entry, header)),
+        walker.set(i32.add(first, i32.shl(weight, 2))),
+        vector.set(i32.add(edge, i32.shl(weight, 4))),
+        whileLoop(i32.gtU(walker, first), [
+          walker.set(i32.sub(walker, wordBytes)),
+          vector.set(i32.sub(vector, vectorBytes)),
+          ...inner(...placesAt(walker, vector)),
+        ]),
+      );
+      f.giveBack(walker, first, vector);
+      return code;
+    },
   };
+  const placesAt = (walker: Local<'i32'>, vector: Local<'i32'>): [Place, Place, Place] => [
+    { address: i32.load(walker), offset: 0 },
+    { address: vector, offset: 0 },
+    { address: i32.sub(vector, edge), offset: 0 },
+  ];
   return sequence(
     entry.set(side.tables[k]!),
     edge.set(side.edges[k]!),

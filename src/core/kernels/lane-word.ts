@@ -1,6 +1,6 @@
 /** How one frame's bit at one position is marked in a kernel's words; the draw of patterns is written against this. */
 
-import { type Expr, type FunctionBuilder, f32, i32, type Statement, sequence } from './assembler/index.ts';
+import { type Expr, type FunctionBuilder, i32, type Statement, sequence } from './assembler/index.ts';
 
 export interface LaneWord {
   /** Sets the locals that the other two use, for the frame in `lane`. */
@@ -42,15 +42,15 @@ export const byteLanes =
     };
   };
 
-/** 4 lanes of a positive float, a ratio: marked when below 1, taken to its inverse by a toggle. */
-export const ratioLanes =
+/** 2 lanes of a double, marked by its sign. */
+export const doubleLanes =
   (base: number): LaneWordOf =>
   (f) => {
-    const byte = f.local('i32');
+    const signByte = f.local('i32');
     return {
-      prepare: (lane) => byte.set(i32.shl(lane, 2)),
-      address: (vector) => i32.add(vector, byte),
-      isMarked: (address) => f32.lt(f32.load(address, base), f32.of(1)),
-      toggle: (address) => f32.store(address, f32.div(f32.of(1), f32.load(address, base)), base),
+      prepare: (lane) => signByte.set(i32.add(i32.shl(lane, 3), 7)),
+      address: (vector) => i32.add(vector, signByte),
+      isMarked: (address) => i32.ltS(i32.load8S(address, base), 0),
+      toggle: (address) => i32.store8(address, i32.xor(i32.load8U(address, base), 128), base),
     };
   };

@@ -1,7 +1,7 @@
 /** Where things lie in a kernel's memory. The control block comes first, at places every kernel shares; tables and
  *  words follow, each aligned to 16 bytes. */
 
-/** Bytes of a vector of 128 bits: 128 frames of one bit, 16 of a byte, 4 of a float. */
+/** Bytes of a vector of 128 bits: 128 frames of one bit, 16 of a byte, 2 of a double. */
 export const vectorBytes = 16;
 
 /** Places in the control block. Lane masks are 128 bits, lane 0 lowest; kernels of fewer lanes use the low bits. */
@@ -31,7 +31,7 @@ export const control = {
   bitErrors: 120,
   bitErrorsSquared: 128,
   undetected: 136,
-  /** What the channel tells a soft kernel: a float, the ratio of a received 0. */
+  /** What the channel tells a soft kernel: a double, tanh(L/2) of a received 0. */
   parameter: 144,
   /** Bytes of the block. */
   size: 160,

@@ -1,6 +1,5 @@
-/** Words of frames with a byte (16 lanes) or a float (4 lanes) a bit: how their masks, decisions and syndromes are told.
- *  The decision rides in the word itself: a byte's sign, or the lowest bit of a float, which it moves by one part in
- *  2^23. So the XOR of a check's words holds the check's parity in the same bit. */
+/** Words of frames with a byte (16 lanes) or a double (2 lanes) a bit: how their masks, decisions and syndromes are told.
+ *  A decision is the sign of a lane, so that the XOR of a check's words holds the check's parity in the same place. */
 
 import {
   base,
@@ -11,6 +10,7 @@ import {
   i16x8,
   i32,
   i32x4,
+  i64x2,
   type Local,
   type ModuleBuilder,
   memoryCopy,
@@ -25,14 +25,14 @@ import { type SideTables, walk } from './graph-walk.ts';
 import { control, type MemoryLayout, vectorBytes } from './memory-layout.ts';
 import { at, parityInto } from './votes.ts';
 
-export type SoftLanes = 16 | 4;
+export type SoftLanes = 16 | 2;
 
 /** All ones in the lanes that a mask of the control block names. */
 export function laneMask(lanes: SoftLanes, place: number): V128 {
   const bits = i32.load(base, place);
-  if (lanes === 4) {
-    const own = v128.ofBytes([1, 2, 4, 8].flatMap((bit) => [bit, 0, 0, 0]));
-    return i32x4.eq(v128.and(i32x4.splat(bits), own), own);
+  if (lanes === 2) {
+    const own = v128.ofBytes([1, 2].flatMap((bit) => [bit, 0, 0, 0, 0, 0, 0, 0]));
+    return i64x2.eq(v128.and(i32x4.splat(bits), own), own);
   }
   const own = v128.ofBytes(Array.from({ length: 16 }, (_, lane) => 1 << (lane & 7)));
   const spread = v128.shuffle(i16x8.splat(bits), v128.zero, [0, 0, 0, 0, 0, 0, 0, 0, 1, 1, 1, 1, 1, 1, 1, 1]);
@@ -41,7 +41,7 @@ export function laneMask(lanes: SoftLanes, place: number): V128 {
 
 /** One bit a lane: its decision. */
 export const decisionsOf = (lanes: SoftLanes, word: V128): Expr<'i32'> =>
-  lanes === 16 ? i8x16.bitmask(word) : i32x4.bitmask(i32x4.shl(word, 31));
+  lanes === 16 ? i8x16.bitmask(word) : i64x2.bitmask(word);
 
 /** Bytes of a position's decisions when they are packed. */
 const packedBytes = (lanes: SoftLanes) => (lanes === 16 ? 2 : 1);
@@ -136,7 +136,7 @@ function checkLoop(i: Local<'i32'>, any: Local<'v128'>, checks: V128, n: number,
 function foldLanes(any: Local<'v128'>, lanes: SoftLanes): Expr<'i32'> {
   const words = [0, 1, 2, 3].map((k) => i32x4.extract(any, k)).reduce((a, b) => i32.or(a, b));
   const halves = i32.or(words, i32.shrU(words, 16));
-  return lanes === 16 ? i32.and(halves, 0xffff) : i32.and(i32.or(halves, i32.shrU(halves, 8)), 15);
+  return lanes === 16 ? i32.and(halves, 0xffff) : i32.and(i32.or(halves, i32.shrU(halves, 8)), 3);
 }
 
 /** Wrong bits of one lane, from its number. */
@@ -145,20 +145,20 @@ export function emitSoftWeigh(m: ModuleBuilder, n: number, lanes: SoftLanes, wor
     const lane = f.param(0, 'i32');
     const i = f.local('i32');
     const count = f.local('i32');
-    const byte = i32.load8U(i32.add(i, lane), words);
-    const bit = lanes === 16 ? i32.shrU(byte, 7) : i32.and(byte, 1);
+    const sign = i32.shrU(i32.load8U(i32.add(i, lane), words), 7);
     f.emit(
-      ...(lanes === 4 ? [lane.set(i32.shl(lane, 2))] : []),
-      eachVector(i, n, [count.set(i32.add(count, bit))]),
+      // The byte that holds the lane's sign.
+      ...(lanes === 2 ? [lane.set(i32.add(i32.shl(lane, 3), 7))] : []),
+      eachVector(i, n, [count.set(i32.add(count, sign))]),
       count,
     );
   });
 }
 
-/** The constant in all four floats. */
-export const allFloats = (value: number): V128 => {
-  const bytes = [...new Uint8Array(new Float32Array([value]).buffer)];
-  return v128.ofBytes([...bytes, ...bytes, ...bytes, ...bytes]);
+/** The constant in both doubles. */
+export const bothDoubles = (value: number): V128 => {
+  const bytes = [...new Uint8Array(new Float64Array([value]).buffer)];
+  return v128.ofBytes([...bytes, ...bytes]);
 };
 
 /** The constant in all sixteen bytes. */

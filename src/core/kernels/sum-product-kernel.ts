@@ -1,67 +1,80 @@
-/** Sum-product decoding, flooding, four frames a word, in 32-bit floats. Everything is kept as a ratio e^L = P(0)/P(1)
- *  in place of the log-likelihood ratio L, so that no logarithm is needed:
+/** Sum-product decoding, flooding, two frames a word, in double precision. A log-likelihood ratio L is kept as
+ *  x = tanh(L/2), so that neither tanh nor its inverse is ever computed:
  *
- *  - a bit's message to a check is its total T over the check's message g, and tanh(L/2) = (T − g)/(T + g) =: d;
- *  - with P the product of a check's d, the check's message back is (1 + P/d)/(1 − P/d) = (d + P)/(d − P);
- *  - a bit's total is its channel ratio times its checks' messages.
+ *  - a check sends a bit the product of the others' x, by products from the left and from the right;
+ *  - e^L = (1 + x)/(1 − x), so that a bit's total is a pair, A : B, the products of the 1 + x and of the 1 − x of its
+ *    messages and of the channel;
+ *  - without one message that is A·(1 − x) : B·(1 + x), and a : b has tanh(L/2) = (a − b)/(a + b).
  *
- *  Multiplication by factors of size at most 1 is monotone under rounding, so |P| ≤ |d|; P taken down by 2^-22 keeps
- *  d − P from 0 and messages within e^±16, where the readable decoder has room to e^±35: both are beyond what decides a
- *  bit. Totals are held within 10^±30 as they are multiplied up. A total ends in two bits of its own: the lowest is the
- *  decision, the next is 0, and it is 1 in every message, so that T and g never cancel to 0/0. Not equal to the readable
- *  decoder bit for bit: agreement is within the interval of a measured rate. */
+ *  Frames that never settle drive messages to the cuts at ±30 and 1 − 10^-15, where their course depends on how 1 − x is
+ *  rounded. Hence double precision and the readable decoder's order of products: 32 bits agree in frame errors but not
+ *  in the bit errors of such frames. Agreement is within the interval of a measured rate, not bit for bit. */
 
 import {
   base,
+  type FunctionBuilder,
   type FunctionRef,
-  f32,
-  f32x4,
+  f64,
+  f64x2,
   type Local,
   ModuleBuilder,
   type Statement,
+  sequence,
   type V128,
   v128,
 } from './assembler/index.ts';
 import { arrayBytes } from './bit-words.ts';
 import { eachVector, emitConductor, reserveConductor } from './conductor.ts';
 import type { GraphPlan } from './graph-plan.ts';
-import { rowTables, type SideTables, walk } from './graph-walk.ts';
+import { rowTables, type SideTables, type Site, walk } from './graph-walk.ts';
 import { finishKernel, type KernelImage, positionSpace } from './kernel-image.ts';
-import { ratioLanes } from './lane-word.ts';
+import { doubleLanes } from './lane-word.ts';
 import { control, MemoryLayout, vectorBytes } from './memory-layout.ts';
-import { allFloats, emitSoftSyndrome, emitSoftWeigh, laneMask } from './soft-words.ts';
+import { bothDoubles, emitSoftSyndrome, emitSoftWeigh, laneMask } from './soft-words.ts';
 import { at, put } from './votes.ts';
 
 const nothing = { params: [], results: [] } as const;
-const lanes = 4;
+const lanes = 2;
 
-const most = 1e30;
-const least = 1e-30;
-/** 1 − 2^-22. */
-const shrink = 1 - 2 ** -22;
-/** Totals this near to 1 say nothing: the received bit stands. */
-const undecided = 1e-6;
-
-const lowBits = (bits: number): V128 => v128.ofBytes([0, 1, 2, 3].flatMap(() => [bits, 0, 0, 0]));
+/** tanh(30/2): messages to checks are cut at ±30. */
+const largestFactor = Math.tanh(15);
+const largestProduct = 1 - 1e-15;
+/** |L| ≤ 10^-9 says nothing: |A − B| ≤ 5·10^-10·(A + B). */
+const undecided = 5e-10;
+/** Least A and B: some twenty messages at their cut one way. Beyond that, both ways at once, a total is not exact. */
+const least = 1e-290;
 
 interface Arrays {
+  /** ±tanh(L/2) of the channel, negative for a received 1. */
   channel: number;
-  totals: number;
-  /** Products under way, from the channel's ratio on; twice over for a circulant. */
-  products: number;
-  /** Messages of the checks, an edge each, rows together; the d of the row in hand while it is worked on. */
+  /** Totals A and B. */
+  zeros: number;
+  ones: number;
+  /** The next totals as they are multiplied up; twice over for a circulant. */
+  nextZeros: number;
+  nextOnes: number;
+  /** Words whose sign is the decision. */
+  decisions: number;
+  /** Messages of the checks, an edge each, rows together; products from the left for the row in hand. */
   messages: number;
+  /** The factors of the row in hand. */
+  factors: number;
 }
 
 export function sumProductKernel(plan: GraphPlan, cap: number): KernelImage {
   const { H } = plan;
   const layout = new MemoryLayout();
   const places = reserveConductor(layout, H.cols, cap);
+  const perBit = () => layout.reserve(arrayBytes(plan, H.cols));
   const arrays: Arrays = {
     channel: layout.reserve(vectorBytes * H.cols),
-    totals: layout.reserve(arrayBytes(plan, H.cols)),
-    products: layout.reserve(arrayBytes(plan, H.cols)),
+    zeros: perBit(),
+    ones: perBit(),
+    nextZeros: perBit(),
+    nextOnes: perBit(),
+    decisions: layout.reserve(vectorBytes * H.cols),
     messages: layout.reserve(vectorBytes * H.colIndex.length),
+    factors: layout.reserve(vectorBytes * plan.largestRow),
   };
   const rows = rowTables(plan, layout);
   const positions = positionSpace(plan, layout);
@@ -71,19 +84,19 @@ export function sumProductKernel(plan: GraphPlan, cap: number): KernelImage {
     refillAt: 1,
     cap,
     positions: positions.space,
-    word: ratioLanes(arrays.channel),
+    word: doubleLanes(arrays.channel),
     clear: emitClear(m, plan, arrays),
     filled: emitFilled(m, plan, arrays),
-    syndrome: emitSoftSyndrome(m, layout, plan, rows, lanes, arrays.totals),
+    syndrome: emitSoftSyndrome(m, layout, plan, rows, lanes, arrays.decisions),
     iterate: emitIterate(m, plan, rows, arrays),
     beforeWeighing: null,
-    weigh: emitSoftWeigh(m, H.cols, lanes, arrays.totals),
+    weigh: emitSoftWeigh(m, H.cols, lanes, arrays.decisions),
   });
-  const stepNs = 4 * H.colIndex.length;
+  const stepNs = 5 * H.colIndex.length;
   return finishKernel(m, layout, { n: H.cols, cap, places, word: arrays.channel, stepNs, tables: [rows, positions] });
 }
 
-/** The channel's ratio for a received 0 in the lanes that hold no frame. */
+/** The channel's value of a received 0 in the lanes that hold no frame. */
 function emitClear(m: ModuleBuilder, plan: GraphPlan, { channel }: Arrays): FunctionRef {
   return m.func(nothing, (f) => {
     const i = f.local('i32');
@@ -91,92 +104,105 @@ function emitClear(m: ModuleBuilder, plan: GraphPlan, { channel }: Arrays): Func
     const zero = f.local('v128');
     f.emit(
       active.set(laneMask(lanes, control.active)),
-      zero.set(f32x4.splat(f32.load(base, control.parameter))),
+      zero.set(f64x2.splat(f64.load(base, control.parameter))),
       eachVector(i, plan.H.cols, [v128.store(i, v128.bitselect(v128.load(i, channel), zero, active), channel)]),
     );
   });
 }
 
-/** Totals of the fresh lanes begin as the channel's ratios, and so do the products of all lanes. */
+const oneMore = (x: V128): V128 => f64x2.add(bothDoubles(1), x);
+const oneLess = (x: V128): V128 => f64x2.sub(bothDoubles(1), x);
+const within = (x: V128, most: number): V128 => f64x2.pmax(f64x2.pmin(x, bothDoubles(most)), bothDoubles(-most));
+
+/** Totals of the fresh lanes begin as the channel's. */
 function emitFilled(m: ModuleBuilder, plan: GraphPlan, arrays: Arrays): FunctionRef {
   return m.func(nothing, (f) => {
     const i = f.local('i32');
     const fresh = f.local('v128');
-    const total = f.local('v128');
-    const ratio = v128.load(i, arrays.channel);
+    const channel = v128.load(i, arrays.channel);
+    const taken = (value: V128, array: number) => v128.bitselect(value, v128.load(i, array), fresh);
     f.emit(
       fresh.set(laneMask(lanes, control.fresh)),
-      eachVector(i, plan.H.cols, [
-        total.set(v128.bitselect(ratio, v128.load(i, arrays.totals), fresh)),
-        ...storeTotal(plan, i, total, ratio, arrays),
-      ]),
+      storeTotals(f, plan, i, arrays, taken(oneMore(channel), arrays.zeros), taken(oneLess(channel), arrays.ones)),
     );
   });
 }
 
-/** Stores a total with its decision in the lowest bits, and starts the next products. */
-function storeTotal(
+/** Stores totals and decisions of all bits, and starts the next products with the channel. */
+function storeTotals(
+  f: FunctionBuilder,
   plan: GraphPlan,
   i: Local<'i32'>,
-  total: Local<'v128'>,
-  ratio: V128,
-  { totals, products }: Arrays,
-): Statement[] {
-  const received = f32x4.lt(ratio, allFloats(1));
-  const limit = v128.bitselect(allFloats(1 + undecided), allFloats(1 - undecided), received);
-  const decision = v128.and(f32x4.lt(total, limit), lowBits(1));
-  const marked = v128.or(v128.andnot(total, lowBits(3)), decision);
+  arrays: Arrays,
+  zerosNow: V128,
+  onesNow: V128,
+): Statement {
+  const [zeros, ones, channel, margin] = [f.local('v128'), f.local('v128'), f.local('v128'), f.local('v128')];
   const second = vectorBytes * plan.H.cols;
-  const code = [total.set(marked), v128.store(i, total, totals), v128.store(i, ratio, products)];
-  if (!plan.circulant) return code;
-  return [...code, v128.store(i, total, totals + second), v128.store(i, allFloats(1), products + second)];
+  const copies = plan.circulant ? [0, second] : [0];
+  const store = (array: number, value: V128) => copies.map((copy) => v128.store(i, value, array + copy));
+  return eachVector(i, plan.H.cols, [
+    zeros.set(zerosNow),
+    ones.set(onesNow),
+    channel.set(v128.load(i, arrays.channel)),
+    ...store(arrays.zeros, zeros),
+    ...store(arrays.ones, ones),
+    v128.store(i, oneMore(channel), arrays.nextZeros),
+    v128.store(i, oneLess(channel), arrays.nextOnes),
+    ...copies
+      .slice(1)
+      .flatMap((copy) => [arrays.nextZeros, arrays.nextOnes].map((next) => v128.store(i, bothDoubles(1), next + copy))),
+    // A − B below −margin is a 1, or below the margin where a 1 was received.
+    margin.set(f64x2.mul(f64x2.add(zeros, ones), bothDoubles(-undecided))),
+    margin.set(v128.xor(margin, v128.and(channel, bothDoubles(-0)))),
+    v128.store(i, f64x2.lt(f64x2.sub(zeros, ones), margin), arrays.decisions),
+  ]);
 }
 
 function emitIterate(m: ModuleBuilder, plan: GraphPlan, rows: SideTables, arrays: Arrays): FunctionRef {
-  const { channel, totals, products, messages } = arrays;
   return m.func(nothing, (f) => {
-    const vector = () => f.local('v128');
-    const [kept, freshOnes, product, d, message, low, high] = Array.from({ length: 7 }, vector) as [
-      Local<'v128'>,
-      Local<'v128'>,
-      Local<'v128'>,
-      Local<'v128'>,
-      Local<'v128'>,
-      Local<'v128'>,
-      Local<'v128'>,
-    ];
+    const kept = f.local('v128');
     const i = f.local('i32');
-    const within = (value: V128) => f32x4.pmax(f32x4.pmin(value, high), low);
+    const second = vectorBytes * plan.H.cols;
+    const whole = (next: number): V128 => {
+      const product = v128.load(i, next);
+      const all = plan.circulant ? f64x2.mul(product, v128.load(i, next + second)) : product;
+      return f64x2.pmax(all, bothDoubles(least));
+    };
     f.emit(
-      // Fresh lanes have no messages yet: 1, with the bit that every message has.
+      // Fresh lanes have had no message yet: x = 0.
       kept.set(v128.not(laneMask(lanes, control.fresh))),
-      freshOnes.set(v128.andnot(v128.or(allFloats(1), lowBits(2)), kept)),
-      low.set(allFloats(least)),
-      high.set(allFloats(most)),
-      walk(f, rows, (check) => [
-        product.set(allFloats(shrink)),
-        check.eachNeighbour((bit, edge) => [
-          message.set(v128.or(v128.and(at(edge, messages), kept), freshOnes)),
-          d.set(at(bit, totals)),
-          d.set(f32x4.div(f32x4.sub(d, message), f32x4.add(d, message))),
-          put(edge, messages, d),
-          product.set(f32x4.mul(product, d)),
-        ]),
-        check.eachNeighbour((bit, edge) => [
-          d.set(at(edge, messages)),
-          message.set(v128.or(f32x4.div(f32x4.add(d, product), f32x4.sub(d, product)), lowBits(2))),
-          put(edge, messages, message),
-          put(bit, products, within(f32x4.mul(at(bit, products), message))),
-        ]),
-      ]),
-    );
-    const wrapped = v128.load(i, products + vectorBytes * plan.H.cols);
-    const total = v128.load(i, products);
-    f.emit(
-      eachVector(i, plan.H.cols, [
-        d.set(plan.circulant ? within(f32x4.mul(total, wrapped)) : total),
-        ...storeTotal(plan, i, d, v128.load(i, channel), arrays),
-      ]),
+      walk(f, rows, (check) => checkPass(f, check, arrays, kept)),
+      storeTotals(f, plan, i, arrays, whole(arrays.nextZeros), whole(arrays.nextOnes)),
     );
   });
+}
+
+function checkPass(f: FunctionBuilder, check: Site, arrays: Arrays, kept: Local<'v128'>): Statement[] {
+  const { zeros, ones, nextZeros, nextOnes, messages, factors } = arrays;
+  const [x, a, b, product] = [f.borrow('v128'), f.borrow('v128'), f.borrow('v128'), f.borrow('v128')];
+  const multiply = (bit: Parameters<typeof at>[0], next: number, factor: V128) =>
+    put(bit, next, f64x2.pmax(f64x2.mul(at(bit, next), factor), bothDoubles(least)));
+  const code = [
+    product.set(bothDoubles(1)),
+    check.eachNeighbour((bit, edge, slot) => [
+      x.set(v128.and(at(edge, messages), kept)),
+      a.set(f64x2.mul(at(bit, zeros), oneLess(x))),
+      b.set(f64x2.mul(at(bit, ones), oneMore(x))),
+      x.set(within(f64x2.div(f64x2.sub(a, b), f64x2.add(a, b)), largestFactor)),
+      put(slot, factors, x),
+      put(edge, messages, product),
+      product.set(f64x2.mul(product, x)),
+    ]),
+    product.set(bothDoubles(1)),
+    check.eachNeighbourBackwards((bit, edge, slot) => [
+      x.set(within(f64x2.mul(at(edge, messages), product), largestProduct)),
+      put(edge, messages, x),
+      product.set(f64x2.mul(product, at(slot, factors))),
+      multiply(bit, nextZeros, oneMore(x)),
+      multiply(bit, nextOnes, oneLess(x)),
+    ]),
+  ];
+  f.giveBack(x, a, b, product);
+  return [sequence(...code)];
 }

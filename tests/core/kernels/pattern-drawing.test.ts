@@ -18,7 +18,7 @@ async function drawnByKernel(spec: Pick<RunSpec, 'H' | 'seed'>, index: number, w
   const kernel = await CompiledKernel.compile(image);
   const instance = await kernel.take();
   const law = typeof weights === 'number' ? weights : bscWeightTable(n, weights.p);
-  begin(instance, image, { frames: 400, random: await streamState(spec.seed, index), weights: law, ratio: 1 });
+  begin(instance, image, { frames: 400, random: await streamState(spec.seed, index), weights: law, bias: 0 });
   instance.refill();
   const bytes = new Uint8Array(instance.memory.buffer, image.word, vectorBytes * n);
   return Array.from({ length: 128 }, (_, lane) => {

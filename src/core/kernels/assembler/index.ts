@@ -22,5 +22,5 @@ export {
 } from './function-builder.ts';
 export { base, memoryCopy, memoryFill } from './memory-access.ts';
 export { ModuleBuilder } from './module-builder.ts';
-export { f32, type Int32, type Int64, i32, i64 } from './numeric.ts';
-export { f32x4, i8x16, i16x8, i32x4, i64x2, type V128, v128 } from './simd.ts';
+export { f32, f64, type Int32, type Int64, i32, i64 } from './numeric.ts';
+export { f32x4, f64x2, i8x16, i16x8, i32x4, i64x2, type V128, v128 } from './simd.ts';

@@ -104,3 +104,11 @@ export const f32 = {
   load: loader({ type: 'f32', opcode: 0x2a, alignment: 2 }),
   store: storer<'f32'>({ type: 'f32', opcode: 0x38, alignment: 2 }),
 } as const;
+
+const doubleBytes = (value: number): number[] => [...new Uint8Array(new Float64Array([value]).buffer)];
+
+export const f64 = {
+  of: (value: number) => expression('f64', 0x44, ...doubleBytes(value)),
+  load: loader({ type: 'f64', opcode: 0x2b, alignment: 3 }),
+  store: storer<'f64'>({ type: 'f64', opcode: 0x39, alignment: 3 }),
+} as const;

@@ -97,6 +97,10 @@ export const i32x4 = {
 } as const;
 
 export const i64x2 = {
+  bitmask: test(196),
+  shl: shift(203),
+  shrS: shift(204),
+  eq: binary(214),
   splat: (a: Expr<'i64'>): V128 => expression('v128', a.code, ...op(18)),
   extract: (a: V128, lane: number): Expr<'i64'> => expression('i64', a.code, ...op(29), lane),
 } as const;
@@ -122,4 +126,19 @@ export const f32x4 = {
   pmin: binary(234),
   /** a < b ? b : a. */
   pmax: binary(235),
+} as const;
+
+export const f64x2 = {
+  splat: (a: Expr<'f64'>): V128 => expression('v128', a.code, ...op(20)),
+  extract: (a: V128, lane: number): Expr<'f64'> => expression('f64', a.code, ...op(33), lane),
+  lt: binary(73),
+  gt: binary(74),
+  abs: unary(236),
+  neg: unary(237),
+  add: binary(240),
+  sub: binary(241),
+  mul: binary(242),
+  div: binary(243),
+  pmin: binary(246),
+  pmax: binary(247),
 } as const;

@@ -10,6 +10,8 @@ import {
   type FunctionBuilder,
   f32,
   f32x4,
+  f64,
+  f64x2,
   i8x16,
   i16x8,
   i32,
@@ -228,6 +230,8 @@ describe('every instruction', () => {
     [base, a32],
     [base, a64],
     [base, f32.of(1)],
+    [base, f64.of(1)],
+    [f64.of(1)],
     [a128, b128, a128],
     [a128, 1],
     [a128, b128, Array.from({ length: 16 }, (_, i) => i)],
@@ -238,7 +242,19 @@ describe('every instruction', () => {
     [2.5],
     [new Uint8Array(16)],
   ];
-  for (const [group, emitters] of Object.entries({ i32, i64, f32, v128, i8x16, i16x8, i32x4, i64x2, f32x4 })) {
+  for (const [group, emitters] of Object.entries({
+    i32,
+    i64,
+    f32,
+    v128,
+    i8x16,
+    i16x8,
+    i32x4,
+    i64x2,
+    f32x4,
+    f64,
+    f64x2,
+  })) {
     test(`of ${group} validates with operands of its own types`, () => {
       for (const [name, emit] of Object.entries(emitters)) {
         const some = operandLists.some((operands) => {
