@@ -10,7 +10,7 @@ interface Props {
 export function Ruler({ stations, current }: Props) {
   return (
     <nav aria-label="Steps of the project" className="relative overflow-x-auto" data-ruler data-screen-only>
-      <ol className="flex min-w-full border-ink border-r">
+      <ol className="flex w-max min-w-full border-ink border-r">
         {stations.map((station) => (
           <li
             key={station.step}

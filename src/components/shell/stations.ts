@@ -22,7 +22,7 @@ export function stationsOf(project: Pick<Project, 'id' | 'counts'>): Station[] {
     {
       step: 'requirements',
       label: 'Requirements',
-      state: counts.requirements === 0 ? 'none stated' : `${counts.requirements} stated`,
+      state: counts.requirements === 0 ? 'none stated' : 'stated',
       href: paths.requirements(id),
     },
     { step: 'candidates', label: 'Candidates', state: 'the catalogue', href: paths.candidates(id) },

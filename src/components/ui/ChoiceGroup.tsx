@@ -1,4 +1,4 @@
-import { useId } from 'react';
+import { useEffect, useId, useRef } from 'react';
 import { classes } from './classes.ts';
 
 interface Props<V extends string> {
@@ -23,13 +23,21 @@ export function ChoiceGroup<V extends string>({
   className,
 }: Props<V>) {
   const name = useId();
+  const strip = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    const chosen = strip.current?.querySelector('input:checked')?.closest('label');
+    if (strip.current && chosen) strip.current.scrollTop = chosen.offsetTop - chosen.offsetHeight;
+  }, []);
   return (
     <fieldset className={classes('min-w-0', className)} disabled={disabled}>
       <legend className="mb-1 text-quiet text-tiny">{legend}</legend>
       <div
+        ref={strip}
         className={classes(
-          'border-rule border-t border-l',
-          columns ? 'grid grid-cols-[repeat(auto-fill,minmax(min(15rem,100%),1fr))]' : 'flex flex-wrap',
+          'relative border-rule border-t border-l',
+          columns
+            ? 'grid grid-cols-[repeat(auto-fill,minmax(min(15rem,100%),1fr))] max-sm:max-h-80 max-sm:overflow-y-auto max-sm:border-b'
+            : 'flex flex-wrap',
         )}
       >
         {choices.map((choice) => (

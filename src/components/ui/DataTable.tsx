@@ -46,7 +46,10 @@ export function DataTable<Row>({ caption, showCaption, columns, rows, rowKey, se
               {columns.map((column) => (
                 <td
                   key={column.key}
-                  className={classes('py-2 pr-4 align-baseline last:pr-1', numeric(column) && 'text-right font-mono')}
+                  className={classes(
+                    'py-2 pr-4 align-baseline last:pr-1',
+                    numeric(column) ? 'text-right font-mono' : 'min-w-32',
+                  )}
                 >
                   {column.cell(row)}
                 </td>

@@ -2,6 +2,7 @@
  *  Empty text is undefined; text that is no number is NaN, for a schema to refuse. */
 export function typedNumber(text: string): number | undefined {
   const plain = text
+    .replace(/10(?=[⁻⁺⁰¹²³⁴-⁹])/g, '10^')
     .normalize('NFKC')
     .replace(/[\s\u2009\u202f_]/g, '')
     .replace(/\u2212|\u2013/g, '-')

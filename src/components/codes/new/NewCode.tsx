@@ -143,7 +143,8 @@ interface PredictionProps {
 }
 
 function Prediction({ family, predicted, checks, typed }: PredictionProps) {
-  const params = family.params.map(({ name }) => `${name} = ${typed[name] || '…'}`).join(', ');
+  const stated = family.params.filter(({ name, optional }) => typed[name] || !optional);
+  const params = stated.map(({ name }) => `${name} = ${typed[name] || '…'}`).join(', ');
   if (!predicted.ok) {
     return (
       <TitleBlock
