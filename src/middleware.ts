@@ -1,8 +1,13 @@
 import { defineMiddleware } from 'astro:middleware';
 import { currentUser } from './server/auth/current-user.ts';
-import { database, ready } from './server/db/database.ts';
+import { database, ready, type Seeder } from './server/db/database.ts';
 import { checkOrigin } from './server/http/check-origin.ts';
 import { errorResponse } from './server/http/error-response.ts';
+import { anyUser } from './server/repositories/users.ts';
+
+// Loaded only where there may be something to seed.
+const seedDemo: Seeder = async (db) =>
+  (await anyUser(db)) === false && (await import('../db/seeds/demo.ts')).seedDemo(db);
 
 /** Before every route: the database is ready, the change comes from our own pages, and `locals.user` says who asks.
  *  Headers are set in src/server/main.mjs, where static files pass too. */
@@ -10,7 +15,7 @@ export const onRequest = defineMiddleware(async (context, next) => {
   const { request, url, locals } = context;
   locals.user = null;
   try {
-    await ready();
+    await ready(seedDemo);
     checkOrigin(request, url.origin);
     locals.user = await currentUser(database(), request);
   } catch (error) {

@@ -18,28 +18,29 @@ export function database(): Database {
 export const inTransaction = <T>(db: Database, work: (trx: Database) => Promise<T>): Promise<T> =>
   db.transaction((trx) => work(trx));
 
+/** Fills an empty database with the demo; false when there was something in it. Handed in by the middleware, because
+ *  the seeds themselves are made with this server's repositories. */
+export type Seeder = (db: Database) => Promise<boolean>;
+
 let readiness: Promise<void> | undefined;
 
 /** Resolves when the database is migrated, the demo seeded (local mode, empty database) and interrupted jobs are
- *  taken up. A failure is told to every request until a restart of it succeeds. */
-export function ready(): Promise<void> {
-  readiness ??= prepare().catch((error) => {
+ *  taken up. After a failure the next request tries again. */
+export function ready(seedDemo: Seeder): Promise<void> {
+  readiness ??= prepare(seedDemo).catch((error) => {
     readiness = undefined;
     throw error;
   });
   return readiness;
 }
 
-async function prepare(): Promise<void> {
+async function prepare(seedDemo: Seeder): Promise<void> {
   const db = database();
   const { migrateSafely } = await import('./migrate.ts');
   const { migrationSource } = await import('./migration-source.ts');
   const applied = await migrateSafely(db, migrationSource);
   if (applied.length > 0) console.log(`Migrated the database: ${applied.join(', ')}`);
-  if (!isProduction()) {
-    const { seedDemo } = await import('../../../db/seeds/demo.ts');
-    if (await seedDemo(db)) console.log('Seeded the demo projects.');
-  }
+  if (!isProduction() && (await seedDemo(db))) console.log('Seeded the demo projects.');
   const { redoInterruptedJobs } = await import('../use-cases/jobs/redo-interrupted-jobs.ts');
   await redoInterruptedJobs(db);
 }
