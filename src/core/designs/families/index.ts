@@ -10,6 +10,7 @@ import { union } from '../operations/union.ts';
 import { affineGeometry } from './affine-geometry.ts';
 import { affinePlane } from './affine-plane.ts';
 import { biplane } from './biplane.ts';
+import { covering } from './covering.ts';
 import { cyclicDifferenceFamily } from './cyclic-difference-family.ts';
 import { denniston } from './denniston.ts';
 import { generalisedQuadrangle } from './generalised-quadrangle.ts';
@@ -19,6 +20,7 @@ import { inversivePlane } from './inversive-plane.ts';
 import { kirkmanTriple } from './kirkman-triple.ts';
 import { linearGroupSteiner } from './linear-group-steiner.ts';
 import { lu3 } from './lu3.ts';
+import { packing } from './packing.ts';
 import { projectiveGeometry } from './projective-geometry.ts';
 import { projectivePlane } from './projective-plane.ts';
 import { projectiveSpread } from './projective-spread.ts';
@@ -58,6 +60,8 @@ export const families: readonly Family[] = [
   hadamard,
   cyclicDifferenceFamily,
   biplane,
+  packing,
+  covering,
   derived,
   residual,
   complement,
