@@ -1,4 +1,5 @@
 import { type ChildProcess, spawn, spawnSync } from 'node:child_process';
+import { createHash } from 'node:crypto';
 import { mkdirSync, mkdtempSync, rmSync, statSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -7,7 +8,7 @@ import { fileURLToPath } from 'node:url';
 
 export const root = fileURLToPath(new URL('../..', import.meta.url));
 
-const lock = join(root, 'dist.lock');
+const lock = join(tmpdir(), `blockwright-build-${createHash('sha256').update(root).digest('hex').slice(0, 12)}`);
 const lockIsStaleMs = 10 * 60_000;
 
 /** Builds when a source has changed since; test files that run at once wait for one another. */
@@ -40,7 +41,12 @@ export interface RunningServer {
   kill(): Promise<void>;
 }
 
-export const scratchDir = (): string => mkdtempSync(join(tmpdir(), 'blockwright-test-'));
+/** A folder of its own, gone when the test process ends. */
+export function scratchDir(): string {
+  const dir = mkdtempSync(join(tmpdir(), 'blockwright-test-'));
+  process.once('exit', () => rmSync(dir, { recursive: true, force: true }));
+  return dir;
+}
 
 /** Starts the built server on a free port with its own data folder. */
 export async function startServer(env: Record<string, string> = {}): Promise<RunningServer> {
