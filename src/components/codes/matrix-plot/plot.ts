@@ -120,7 +120,9 @@ export function openPlot(
     recolour() {
       scene.colours = coloursOf(canvas);
       scene.tiles.clear();
-      request();
+      // Whole and at once, since a page about to be printed draws no further frame.
+      while (!paint(scene, view));
+      report();
     },
     close() {
       stopListening();
