@@ -24,7 +24,7 @@ export function Dialog({ title, open, onClose, children, actions }: Props) {
       ref={ref}
       aria-labelledby={heading}
       onClose={onClose}
-      className="m-auto w-[min(32rem,calc(100vw-2rem))] border border-ink bg-sheet p-5 text-ink backdrop:bg-ink/40"
+      className="m-auto w-[min(32rem,calc(100vw-2rem))] border border-ink bg-sheet p-5 text-ink backdrop:bg-[#0b1820]/60"
     >
       <h2 id={heading}>{title}</h2>
       <div className="mt-2">{children}</div>
