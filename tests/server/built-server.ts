@@ -1,10 +1,11 @@
-import { type ChildProcess, spawn, spawnSync } from 'node:child_process';
+import { type ChildProcess, execFile, spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { mkdirSync, mkdtempSync, rmSync, statSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
 import { fileURLToPath } from 'node:url';
+import { promisify } from 'node:util';
 
 export const root = fileURLToPath(new URL('../..', import.meta.url));
 
@@ -24,8 +25,7 @@ export async function ensureBuilt(): Promise<void> {
     }
   }
   try {
-    const { status, stderr, stdout } = spawnSync(process.execPath, ['start.mjs', '--build-only'], { cwd: root });
-    if (status !== 0) throw new Error(`The build failed:\n${stdout}${stderr}`);
+    await promisify(execFile)(process.execPath, ['start.mjs', '--build-only'], { cwd: root, maxBuffer: 2 ** 26 });
   } finally {
     rmSync(lock, { recursive: true, force: true });
   }
@@ -58,6 +58,7 @@ export async function startServer(env: Record<string, string> = {}): Promise<Run
     env: { ...inherited, NODE_ENV: 'production', PORT: '0', DATA_DIR: dataDir, ...env },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
+  process.once('exit', () => child.kill('SIGKILL'));
   const ended = new Promise<void>((resolve) => child.once('exit', () => resolve()));
   const base = await listeningAddress(child);
   const end = async (signal: NodeJS.Signals) => {
