@@ -12,7 +12,7 @@ describe('a kernel gives the reference tally to the last integer, on any matrix,
         fc.asyncProperty(runs(decoders), async ({ spec, index }) => {
           expect(await fastShard(spec, index)).toEqual(await runShard(spec, index, 'reference'));
         }),
-        { numRuns: 60 },
+        { numRuns: 40 },
       );
     });
   }
@@ -32,7 +32,7 @@ describe('a kernel gives the reference tally to the last integer, on any matrix,
       fc.asyncProperty(runs(decoders, { from: regularColumns(3) }), async ({ spec, index }) => {
         expect(await fastShard(spec, index)).toEqual(await runShard(spec, index, 'reference'));
       }),
-      { numRuns: 50 },
+      { numRuns: 40 },
     );
   });
 
@@ -44,7 +44,7 @@ describe('a kernel gives the reference tally to the last integer, on any matrix,
           expect(await fastShard(spec, index)).toEqual(await runShard(spec, index, 'reference'));
         },
       ),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 });
