@@ -46,31 +46,45 @@ interface SubsetOrbits {
   members: Uint32Array[];
 }
 
+/** Orbits on subsets of 3 or 4 points. A subset waiting to be moved is packed seven bits a point, so v is below 128. */
 function orbitsOfSubsets(v: number, size: number, generators: readonly ArrayLike<number>[]): SubsetOrbits {
   const ranking = subsetRanking(v, size);
+  const terms = ranking.terms;
   const orbitOf = new Int32Array(ranking.count).fill(-1);
   const members: Uint32Array[] = [];
-  const image = new Array<number>(size);
+  const image = new Int32Array(size);
+  const packed = new Int32Array(ranking.count);
   for (let start = 0; start < ranking.count; start++) {
     if (orbitOf[start] !== -1) continue;
     const orbit = [start];
+    packed[0] = subsetOfRank(ranking, start).reduce((bits, p, i) => bits | (p << (7 * i)), 0);
     orbitOf[start] = members.length;
     for (let i = 0; i < orbit.length; i++) {
-      const points = subsetOfRank(ranking, orbit[i]!);
+      const points = packed[i]!;
       for (const g of generators) {
-        for (let j = 0; j < size; j++) image[j] = g[points[j]!]!;
-        const rank = rankOfSubset(
-          ranking,
-          image.sort((a, b) => a - b),
-        );
+        for (let j = 0; j < size; j++) insertAscending(image, j, g[(points >>> (7 * j)) & 127]!);
+        let rank = 0;
+        let bits = 0;
+        for (let j = 0; j < size; j++) {
+          rank += terms[j]![image[j]!]!;
+          bits |= image[j]! << (7 * j);
+        }
         if (orbitOf[rank] !== -1) continue;
         orbitOf[rank] = members.length;
+        packed[orbit.length] = bits;
         orbit.push(rank);
       }
     }
     members.push(Uint32Array.from(orbit));
   }
   return { ranking, orbitOf, members };
+}
+
+/** Puts x among the first `count` entries, which are ascending. */
+function insertAscending(list: Int32Array, count: number, x: number): void {
+  let at = count;
+  for (; at > 0 && list[at - 1]! > x; at--) list[at] = list[at - 1]!;
+  list[at] = x;
 }
 
 /** Orbits of triples the orbit of quadruples covers exactly once; null when it covers some triple twice. */
