@@ -27,6 +27,7 @@ const lanes = 16;
 
 interface Arrays {
   channel: number;
+  /** Twice over for a circulant. */
   posteriors: number;
   /** Flooding: the next posteriors as they are added up, from the channel on; twice over for a circulant. */
   sums: number;
@@ -41,18 +42,16 @@ export function minSumKernel(plan: GraphPlan, settings: MinSumSettings): KernelI
   const { H } = plan;
   const { cap } = settings;
   const layered = settings.schedule === 'layered';
-  // The layered schedule updates posteriors in place, which two copies would hinder.
-  const messagePlan = layered ? { ...plan, circulant: null } : plan;
   const layout = new MemoryLayout();
   const places = reserveConductor(layout, H.cols, cap);
   const arrays: Arrays = {
     channel: layout.reserve(vectorBytes * H.cols),
-    posteriors: layout.reserve(arrayBytes(messagePlan, H.cols)),
-    sums: layered ? 0 : layout.reserve(arrayBytes(messagePlan, H.cols)),
+    posteriors: layout.reserve(arrayBytes(plan, H.cols)),
+    sums: layered ? 0 : layout.reserve(arrayBytes(plan, H.cols)),
     decisions: layout.reserve(vectorBytes * H.cols),
     messages: layout.reserve(vectorBytes * H.colIndex.length),
   };
-  const rows = rowTables(messagePlan, layout);
+  const rows = rowTables(plan, layout);
   const positions = positionSpace(plan, layout);
   const m = new ModuleBuilder();
   emitConductor(m, places, {
@@ -62,9 +61,9 @@ export function minSumKernel(plan: GraphPlan, settings: MinSumSettings): KernelI
     positions: positions.space,
     word: byteLanes(arrays.channel),
     clear: emitClear(m, H.cols, arrays, settings.c),
-    filled: emitFilled(m, messagePlan, arrays, layered),
+    filled: emitFilled(m, plan, arrays, layered),
     syndrome: emitSoftSyndrome(m, layout, plan, rows, lanes, arrays.decisions),
-    iterate: emitIterate(m, messagePlan, rows, arrays, settings),
+    iterate: emitIterate(m, plan, rows, arrays, settings),
     beforeWeighing: null,
     weigh: emitSoftWeigh(m, H.cols, lanes, arrays.decisions),
   });
@@ -151,6 +150,10 @@ function emitIterate(
 ): FunctionRef {
   const { posteriors, sums, messages } = arrays;
   const layered = settings.schedule === 'layered';
+  const bytes = vectorBytes * plan.H.cols;
+  // Layered on a circulant: check i meets its bits at i + d, unwrapped, so that bit j is met at j by the checks up to j
+  // and at j + n by those after. Its posterior moves from the first copy to the second after check j.
+  const latest = plan.circulant ? posteriors + bytes : posteriors;
   return m.func(nothing, (f) => {
     const kept = f.local('v128');
     const message = f.local('v128');
@@ -189,11 +192,12 @@ function emitIterate(
             ? put(bit, posteriors, i8x16.add(message, magnitude))
             : put(bit, sums, i8x16.add(at(bit, sums), magnitude)),
         ]),
+        ...(layered && plan.circulant ? [put(check.own, latest, at(check.own, posteriors))] : []),
       ]),
     );
     const i = f.local('i32');
-    const sum = v128.load(i, layered ? posteriors : sums);
-    const wrapped = v128.load(i, sums + vectorBytes * plan.H.cols);
+    const sum = v128.load(i, layered ? latest : sums);
+    const wrapped = v128.load(i, sums + bytes);
     f.emit(
       eachVector(i, plan.H.cols, [
         message.set(!layered && plan.circulant ? i8x16.add(sum, wrapped) : sum),
