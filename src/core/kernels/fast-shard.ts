@@ -3,7 +3,7 @@ import { channelReading } from '../channels/reading.ts';
 import { streamState } from '../simulation/random.ts';
 import type { RunSpec } from '../simulation/run-spec.ts';
 import type { Tally } from '../simulation/tally.ts';
-import { bscWeightTable } from '../simulation/weight-table.ts';
+import { bscWeightTable, type WeightTable } from '../simulation/weight-table.ts';
 import { begin, type CompiledKernel, type Draws, giveBack, kernelOf, readTally } from './compiled-kernel.ts';
 import { emitterFor } from './kernel-for.ts';
 import { simdAvailable } from './simd-available.ts';
@@ -17,7 +17,8 @@ export interface FastShardOptions {
 }
 
 /** The shard decoded by a kernel made for its matrix, or in words of 32 frames on an engine without SIMD; null where
- *  there is neither for the decoder and the channel. Equal to the reference to the last integer; the sum-product kernel within its interval.
+ *  there is neither for the decoder and the channel. Equal to the reference to the last integer; the sum-product kernel
+ *  within its interval.
  *  @throws ParamError on settings that the matrix does not allow, as the reference does. */
 export function fastShard(spec: RunSpec, index: number, options: FastShardOptions = {}): Promise<Tally> | null {
   if (!simdAvailable()) return slicedShard(spec, index, options);
@@ -32,16 +33,29 @@ export function fastShard(spec: RunSpec, index: number, options: FastShardOption
 function patternWeights({ H, channel, rate }: RunSpec): (() => Draws['weights']) | null {
   switch (channel.kind) {
     case 'bsc':
-      return () => bscWeightTable(H.cols, channel.p);
+      return () => weightTable(H.cols, channel.p);
     case 'bec':
-      return () => bscWeightTable(H.cols, channel.e);
+      return () => weightTable(H.cols, channel.e);
     case 'awgn-hard':
-      return rate === undefined ? null : () => bscWeightTable(H.cols, hardCrossover(channel.ebn0Db, rate));
+      return rate === undefined ? null : () => weightTable(H.cols, hardCrossover(channel.ebn0Db, rate));
     case 'stratum':
       return () => channel.weight;
     default:
       return null;
   }
+}
+
+/** Tables of the latest laws: a long word's takes longer to work out than a short shard to decode. */
+const tables = new Map<string, WeightTable>();
+const mostTables = 16;
+
+function weightTable(n: number, p: number): WeightTable {
+  const key = `${n} ${p}`;
+  const table = tables.get(key) ?? bscWeightTable(n, p);
+  tables.delete(key);
+  tables.set(key, table);
+  if (tables.size > mostTables) tables.delete(tables.keys().next().value!);
+  return table;
 }
 
 /** P(0) − P(1) = tanh(L/2) of a received 0 where the decoder reads it, else 0.
@@ -57,7 +71,8 @@ function kernelFor({ H, decoder, channel }: RunSpec): Promise<CompiledKernel> | 
   const erasing = decoder.kind === 'peeling';
   if (channel.kind !== 'stratum' && erasing !== (channel.kind === 'bec')) return null;
   const emit = emitterFor(decoder, H);
-  return emit && kernelOf(H, JSON.stringify(decoder), emit);
+  // The design p reaches the kernel as a number at run time.
+  return emit && kernelOf(H, JSON.stringify({ ...decoder, designP: undefined }), emit);
 }
 
 /** Work between two pauses. */
