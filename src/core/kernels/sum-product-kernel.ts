@@ -26,7 +26,7 @@ import {
 import { arrayBytes } from './bit-words.ts';
 import { eachVector, emitConductor, reserveConductor } from './conductor.ts';
 import type { GraphPlan } from './graph-plan.ts';
-import { rowTables, type SideTables, type Site, walk } from './graph-walk.ts';
+import { type Place, rowTables, type SideTables, type Site, walk } from './graph-walk.ts';
 import { finishKernel, type KernelImage, positionSpace } from './kernel-image.ts';
 import { doubleLanes } from './lane-word.ts';
 import { control, MemoryLayout, vectorBytes } from './memory-layout.ts';
@@ -41,8 +41,14 @@ const largestFactor = Math.tanh(15);
 const largestProduct = 1 - 1e-15;
 /** |L| ≤ 10^-9 says nothing: |A − B| ≤ 5·10^-10·(A + B). */
 const undecided = 5e-10;
-/** Least A and B: some twenty messages at their cut one way. Beyond that, both ways at once, a total is not exact. */
+/** Least A and B. */
 const least = 1e-290;
+
+/** Column weight up to which products of any messages stay in range when each 1 ± x is taken 2^21 times: between 2^-22
+ *  and 2^22 it then is. Above it products are held from falling below the least, which tells on a total only when more
+ *  than twenty messages stand at their cut for each value. */
+const freeColumn = 44;
+const scaleOf = (plan: GraphPlan): number => (plan.largestColumn <= freeColumn ? 2 ** 21 : 1);
 
 interface Arrays {
   /** ±tanh(L/2) of the channel, negative for a received 1. */
@@ -55,7 +61,7 @@ interface Arrays {
   nextOnes: number;
   /** Words whose sign is the decision. */
   decisions: number;
-  /** Messages of the checks, an edge each, rows together; products from the left for the row in hand. */
+  /** Messages x of the checks times the scale, an edge each, rows together; products from the left for the row in hand. */
   messages: number;
   /** The factors of the row in hand. */
   factors: number;
@@ -172,35 +178,42 @@ function emitIterate(m: ModuleBuilder, plan: GraphPlan, rows: SideTables, arrays
     f.emit(
       // Fresh lanes have had no message yet: x = 0.
       kept.set(v128.not(laneMask(lanes, control.fresh))),
-      walk(f, rows, (check) => checkPass(f, check, arrays, kept)),
+      walk(f, rows, (check) => checkPass(f, check, arrays, kept, scaleOf(plan))),
       storeTotals(f, plan, i, arrays, whole(arrays.nextZeros), whole(arrays.nextOnes)),
     );
   });
 }
 
-function checkPass(f: FunctionBuilder, check: Site, arrays: Arrays, kept: Local<'v128'>): Statement[] {
+function checkPass(f: FunctionBuilder, check: Site, arrays: Arrays, kept: Local<'v128'>, scale: number): Statement[] {
   const { zeros, ones, nextZeros, nextOnes, messages, factors } = arrays;
   const [x, a, b, product] = [f.borrow('v128'), f.borrow('v128'), f.borrow('v128'), f.borrow('v128')];
-  const multiply = (bit: Parameters<typeof at>[0], next: number, factor: V128) =>
-    put(bit, next, f64x2.pmax(f64x2.mul(at(bit, next), factor), bothDoubles(least)));
+  const more = f64x2.add(bothDoubles(scale), x);
+  const less = f64x2.sub(bothDoubles(scale), x);
+  const multiply = (bit: Place, next: number, factor: V128) => {
+    const multiplied = f64x2.mul(at(bit, next), factor);
+    return put(bit, next, scale > 1 ? multiplied : f64x2.pmax(multiplied, bothDoubles(least)));
+  };
+  // Of two bits or more, no product of factors comes as near to 1 as the cut.
+  const cut = (value: V128) =>
+    check.weight !== null && check.weight > 1 ? value : within(value, largestProduct * scale);
   const code = [
     product.set(bothDoubles(1)),
     check.eachNeighbour((bit, edge, slot) => [
       x.set(v128.and(at(edge, messages), kept)),
-      a.set(f64x2.mul(at(bit, zeros), oneLess(x))),
-      b.set(f64x2.mul(at(bit, ones), oneMore(x))),
+      a.set(f64x2.mul(at(bit, zeros), less)),
+      b.set(f64x2.mul(at(bit, ones), more)),
       x.set(within(f64x2.div(f64x2.sub(a, b), f64x2.add(a, b)), largestFactor)),
       put(slot, factors, x),
       put(edge, messages, product),
       product.set(f64x2.mul(product, x)),
     ]),
-    product.set(bothDoubles(1)),
+    product.set(bothDoubles(scale)),
     check.eachNeighbourBackwards((bit, edge, slot) => [
-      x.set(within(f64x2.mul(at(edge, messages), product), largestProduct)),
+      x.set(cut(f64x2.mul(at(edge, messages), product))),
       put(edge, messages, x),
       product.set(f64x2.mul(product, at(slot, factors))),
-      multiply(bit, nextZeros, oneMore(x)),
-      multiply(bit, nextOnes, oneLess(x)),
+      multiply(bit, nextZeros, more),
+      multiply(bit, nextOnes, less),
     ]),
   ];
   f.giveBack(x, a, b, product);
