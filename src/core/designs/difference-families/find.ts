@@ -5,8 +5,8 @@ import { differenceSet } from './difference-sets.ts';
 import { searchFamily } from './search.ts';
 import { wilsonFamily } from './wilson.ts';
 
-/** Nodes of the backtracking search, and tries of Wilson's random block: a few seconds at most. */
-export const FAMILY_SEARCH_NODES = 4_000_000;
+/** Nodes of the backtracking search, and tries of Wilson's random block: three seconds or so at most. */
+export const FAMILY_SEARCH_NODES = 60_000_000;
 const WILSON_TRIES = 200_000;
 
 /** Base blocks of a cyclic 2-(v,k,λ) design, by the first method that gives one:

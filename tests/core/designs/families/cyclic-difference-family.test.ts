@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { primesUpTo } from '../../../../src/core/algebra/integers.ts';
+import { isPrime, primesUpTo } from '../../../../src/core/algebra/integers.ts';
 import { developCyclically } from '../../../../src/core/designs/develop.ts';
 import {
   differenceTable,
@@ -37,13 +37,28 @@ describe('difference families', () => {
   it('k = 4 and 5 are found for every prime p ≡ 1 (mod k(k − 1)) up to 1,000', () => {
     let found = 0;
     for (const { v, k, lambda } of cyclicDifferenceFamily.enumerate({ maxPoints: 1000, maxBlocks: 1e6 })) {
-      if ((k !== 4 && k !== 5) || v < 100) continue;
+      if ((k !== 4 && k !== 5) || v <= 100 || !isPrime(v)) continue;
       expect(isDifferenceFamily(v, lambda, findDifferenceFamily(v, k, lambda)!), `(${v},${k})`).toBe(true);
       found++;
     }
     const primes = primesUpTo(1000).filter((p) => p > 100);
     const expected = [12, 20].map((m) => primes.filter((p) => p % m === 1).length);
-    expect(found).toBe(expected[0]! + expected[1]! + 1); // and the searched order 100
+    expect(found).toBe(expected[0]! + expected[1]!);
+  });
+
+  it('composite orders are reached by search and by products', () => {
+    for (const [v, k] of [
+      [49, 4],
+      [85, 4],
+      [100, 4],
+      [133, 4],
+      [169, 4],
+      [481, 4],
+      [81, 5],
+      [85, 5],
+    ] as const) {
+      expect(isDifferenceFamily(v, 1, findDifferenceFamily(v, k, 1)!), `(${v},${k},1)`).toBe(true);
+    }
   });
 
   it('Singer, twin-prime and fourth-power sets are difference sets', () => {
