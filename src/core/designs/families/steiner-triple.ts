@@ -112,7 +112,7 @@ function reaches(method: Params['method'], v: number): boolean {
     case 'random':
       return true;
     case 'anti-pasch':
-      return isPaschFreeBose(v) || v <= MAX_PASCH_REMOVAL_POINTS;
+      return isPaschFreeBose(v) || isPaschFreeNetto(v) || v <= MAX_PASCH_REMOVAL_POINTS;
   }
 }
 
@@ -124,7 +124,7 @@ const REACH: Record<Params['method'], string> = {
   projective: '2^(m+1) − 1 for method projective',
   netto: 'a prime power ≡ 7 (mod 12) for method netto',
   random: 'any admissible v',
-  'anti-pasch': `v ≡ 3 (mod 6) with v/3 prime to 7, or v at most ${MAX_PASCH_REMOVAL_POINTS}, for method anti-pasch`,
+  'anti-pasch': `v ≡ 3 (mod 6) with v/3 prime to 7, a prime power ≡ 19 (mod 24), or v at most ${MAX_PASCH_REMOVAL_POINTS}, for method anti-pasch`,
 };
 
 function requireMethodReaches({ v, method, seed }: Params): void {
@@ -173,6 +173,7 @@ function buildTripleSystem({ v, method, seed = '1' }: Params): BlockDesign {
  *  Elsewhere a seeded descent. @throws LimitError when its budget is spent with Pasches left. */
 function paschFreeTriples(v: number, seed: string): Uint32Array {
   if (isPaschFreeBose(v)) return boseTriples(v);
+  if (isPaschFreeNetto(v)) return nettoTriples(v);
   const random = seededRandom(seed);
   const { triples, pasches } = removePasches(v, climbOrStop(v, random), random, PASCH_MOVES);
   if (pasches > 0)
@@ -183,6 +184,11 @@ function paschFreeTriples(v: number, seed: string): Uint32Array {
       'moves',
     );
   return triples;
+}
+
+/** Netto's system has no Pasch when q ≡ 19 (mod 24). Source: R. M. Robinson, Math. Comp. 29 (1975) 223–241. */
+function isPaschFreeNetto(v: number): boolean {
+  return v % 24 === 19 && primePowerOf(v) !== null;
 }
 
 function isPaschFreeBose(v: number): boolean {

@@ -73,7 +73,7 @@ describe('steiner-triple', () => {
       expect(again.blockPoints).toEqual(one.blockPoints);
       if (v > 9) expect(other.blockPoints).not.toEqual(one.blockPoints);
     }
-    for (const v of [15, 21, 25, 45]) {
+    for (const v of [15, 19, 21, 25, 43, 45, 67, 139, 163, 211, 307, 331]) {
       const sparse = steinerTriple.build(steinerTriple.parse({ v, method: 'anti-pasch', seed: 's1' }));
       expect(verifyDesign(sparse, { t: 2, lambda: 1 }).holds).toBe(true);
       expect(countPasches(sparse)).toBe(0);
