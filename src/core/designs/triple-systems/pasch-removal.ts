@@ -8,8 +8,9 @@ export interface PaschRemoval {
   moves: number;
 }
 
-/** Chance of taking a move that adds one Pasch, in 2^32nds: enough to leave a local minimum, too little to lose one. */
-const UPHILL = 0.08 * 2 ** 32;
+/** Chance of taking a move that adds one Pasch, in 2^32nds: it falls from this to nothing, again and again. */
+const HOTTEST = 0.35 * 2 ** 32;
+const MOVES_A_COOLING = 15_000;
 
 /** Descends on the number of Pasch configurations by cycle switching: where the triples on a and b, seen as edges on
  *  the other points, form a cycle, exchanging a and b along that one cycle gives another triple system. A Pasch is
@@ -28,7 +29,8 @@ export function removePasches(v: number, start: Uint32Array, random: SeededRando
     if (cycle.length === 0) continue;
     system.exchange(a, b, cycle);
     const worse = system.pasches - before;
-    if (worse > 1 || (worse === 1 && random.next32() > UPHILL)) system.exchange(b, a, cycle);
+    const uphill = HOTTEST * (1 - (moves % MOVES_A_COOLING) / MOVES_A_COOLING);
+    if (worse > 1 || (worse === 1 && random.next32() > uphill)) system.exchange(b, a, cycle);
   }
   return { triples: system.triples(), pasches: system.pasches, moves };
 }
