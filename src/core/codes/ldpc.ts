@@ -2,6 +2,7 @@ import { z } from 'zod';
 import type { BlockDesign, DesignSpec, Symmetry } from '../designs/block-design.ts';
 import { ParamError } from '../errors.ts';
 import { type SparseMatrix, transpose } from './sparse-matrix.ts';
+import { applyTransforms } from './transforms/registry.ts';
 
 /** A step from one matrix to the next; each kind is one file in transforms/. */
 export interface Transform {
@@ -30,7 +31,8 @@ export interface LdpcCode {
 
 /** The parity-check matrix of a design: its incidence matrix, or the transpose.
  *  `checks: 'blocks'` gives b rows and v columns, `checks: 'points'` v rows and b columns.
- *  @throws ParamError on an unknown orientation. */
+ *  Transforms are then applied in order; what was known of the design's symmetry does not outlive them.
+ *  @throws ParamError on an unknown orientation, and as the transforms do. */
 export function deriveLdpc(
   design: BlockDesign,
   options: { checks: 'blocks' | 'points'; transforms?: Transform[] },
@@ -43,11 +45,14 @@ export function deriveLdpc(
   };
   const { checks } = options;
   if (checks !== 'blocks' && checks !== 'points') throw new ParamError('checks', checks, '"blocks" or "points"');
+  const H = checks === 'blocks' ? incidence : transpose(incidence);
+  const transforms = options.transforms ?? [];
+  const classes = checks === 'blocks' ? { rowClasses: design.classes } : { columnClasses: design.classes };
   return {
-    H: checks === 'blocks' ? incidence : transpose(incidence),
+    H: applyTransforms({ H, ...classes }, transforms).H,
     checks,
     design: design.spec,
-    transforms: [],
-    columnSymmetry: checks === 'blocks' ? design.symmetry : undefined,
+    transforms: [...transforms],
+    columnSymmetry: checks === 'blocks' && transforms.length === 0 ? design.symmetry : undefined,
   };
 }
