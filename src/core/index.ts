@@ -1,10 +1,29 @@
 /** The one door to the engine. Names and shapes exported here are kept stable; a change of one is noted in CHANGELOG.md. */
+
+export { awgnCapacity, binaryInputAwgn } from './bounds/awgn-capacity.ts';
+export { type BchReference, bchReference } from './bounds/bch-reference.ts';
+export { becConverse, becRandomCodingUnion } from './bounds/bec-bounds.ts';
+export { becCapacity } from './bounds/bec-capacity.ts';
+export { gilbertVarshamovBound, hammingBound, plotkinBound, singletonBound } from './bounds/block-code-bounds.ts';
+export { bscCapacity, bscDispersion, bscShannonLimit } from './bounds/bsc-capacity.ts';
+export { bscConverse } from './bounds/bsc-converse.ts';
+export { bscRandomCodingUnion } from './bounds/bsc-random-coding.ts';
+export { johnsonBound, johnsonPackingBound, refinedJohnsonBound } from './bounds/johnson-bound.ts';
+export { normalApproximation } from './bounds/normal-approximation.ts';
+export { schonheimBound } from './bounds/schonheim-bound.ts';
+export { undetectedErrorRate, unionBound } from './bounds/union-bound.ts';
 export { type Channel, channelSchema } from './channels/channel.ts';
 export { analyseLdpc, type LdpcAnalysis } from './codes/analyse-ldpc.ts';
+export { type ConstantWeightCode, deriveConstantWeight } from './codes/constant-weight.ts';
+export { threshold, thresholdOfMatrix } from './codes/density-evolution/threshold.ts';
+export { generatorPolynomial } from './codes/encode/generator-polynomial.ts';
+export { type SystematicEncoder, systematicEncoder } from './codes/encode/systematic-encoder.ts';
 export { fingerprint } from './codes/fingerprint.ts';
 export { deriveLdpc, type LdpcCode, type Transform } from './codes/ldpc.ts';
 export { type CodeSheet, codeSheet, type SheetRequest } from './codes/sheet.ts';
 export { type SparseMatrix, syndrome } from './codes/sparse-matrix.ts';
+export { exactFit, rankFits } from './codes/transforms/exact-fit.ts';
+export { transformKinds } from './codes/transforms/registry.ts';
 export { decoderCard, decoderCards, edgeVisitsPerBit } from './decoders/catalogue.ts';
 export { createDecoder } from './decoders/create-decoder.ts';
 export { type DecoderSpec, decoderSchema } from './decoders/decoder-spec.ts';
@@ -19,6 +38,7 @@ export { type DesignCertificate, verifyDesign } from './designs/verify.ts';
 export { type Citation, FormatError, InfeasibleError, LimitError, ParamError } from './errors.ts';
 export type { Enclosure, Grade, Graded } from './evidence.ts';
 export { exportMatrix, importMatrix, matrixFormats } from './formats/index.ts';
+export { eliminationRank, rank } from './gf2/rank.ts';
 export { type Calibration, calibrate } from './simulation/calibrate.ts';
 export {
   computedStratum,
