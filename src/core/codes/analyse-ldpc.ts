@@ -73,7 +73,7 @@ export function analyseLdpc(
     columnWeights,
     girth,
     ...(counted && { cycles, cyclesPerColumn: counted.perColumn }),
-    distance: distanceOf(code, { k, girth, cyclic, leastColumnWeight: columnWeights[0]?.[0] ?? 0 }),
+    distance: distanceOf(code, { k, girth, cyclic, leastColumnWeight: columnWeights[0]?.[0] ?? 0 }, options.distance),
     cyclic,
     circulant,
     evidence: {
