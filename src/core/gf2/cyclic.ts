@@ -28,7 +28,9 @@ export function circulantOf(H: SparseMatrix): Circulant | null {
 }
 
 function everyRowMoves(H: SparseMatrix, weight: number, step: 1 | -1): boolean {
-  const { cols: n, colIndex } = H;
+  const n = H.cols;
+  // Signed words stay machine integers where unsigned ones may become floating point.
+  const colIndex = new Int32Array(H.colIndex.buffer, H.colIndex.byteOffset, H.colIndex.length);
   const last = weight - 1;
   for (let r = 1; r < n; r++) {
     // Going down the rows for +1, up them for −1: the later row is the earlier one moved right.
@@ -36,7 +38,10 @@ function everyRowMoves(H: SparseMatrix, weight: number, step: 1 | -1): boolean {
     const to = (step === 1 ? r : r - 1) * weight;
     const wraps = weight > 0 && colIndex[from + last] === n - 1 ? 1 : 0;
     if (wraps && colIndex[to] !== 0) return false;
-    for (let e = 0; e < weight - wraps; e++) if (colIndex[to + e + wraps] !== colIndex[from + e]! + 1) return false;
+    let differences = 0;
+    const end = from + weight - wraps;
+    for (let a = from, b = to + wraps; a < end; a++, b++) differences |= (colIndex[b]! - colIndex[a]!) ^ 1;
+    if (differences !== 0) return false;
   }
   return true;
 }

@@ -9,6 +9,7 @@ export interface Peeled {
 
 /** Sparse pre-elimination without fill. Leaves a core in which every row and every column has two ones or more. */
 export function peel(H: SparseMatrix): Peeled {
+  if (!hasSingleOne(H)) return { pivots: 0, core: H };
   const T = transpose(H);
   const lines = [weightsOf(H), weightsOf(T)] as const;
   const gone = [new Uint8Array(H.rows), new Uint8Array(H.cols)] as const;
@@ -36,7 +37,14 @@ export function peel(H: SparseMatrix): Peeled {
     gone[side][index] = 1;
     remove(other, partner);
   }
-  return pivots === 0 ? { pivots, core: H } : { pivots, core: surviving(H, gone[0], gone[1]) };
+  return { pivots, core: surviving(H, gone[0], gone[1]) };
+}
+
+/** Whether some row or column holds exactly one; most matrices of designs end here. */
+function hasSingleOne(H: SparseMatrix): boolean {
+  const counts = new Uint32Array(H.cols);
+  for (let e = 0; e < H.colIndex.length; e++) counts[H.colIndex[e]!]!++;
+  return counts.includes(1) || weightsOf(H).includes(1);
 }
 
 function weightsOf(H: SparseMatrix): Uint32Array {
