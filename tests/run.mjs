@@ -5,10 +5,11 @@ import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { ensurePackages } from '../src/server/start/packages.mjs';
+import { installIfStale } from '../src/server/start/start.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
 const reports = mkdtempSync(join(tmpdir(), 'blockwright-tests-'));
+const vitestEntry = 'node_modules/vitest/vitest.mjs';
 const totals = { passed: 0, failed: 0 };
 
 function run(title, command, args, env = {}) {
@@ -36,7 +37,16 @@ async function check(title, command, args) {
 
 async function vitest(title, project) {
   const report = join(reports, `${project}.json`);
-  const args = ['node_modules/vitest/vitest.mjs', 'run', '--project', project, '--reporter=default', '--reporter=json'];
+  const args = [
+    vitestEntry,
+    'run',
+    '--config',
+    'tests/vitest.config.ts',
+    '--project',
+    project,
+    '--reporter=default',
+    '--reporter=json',
+  ];
   const good = await run(title, process.execPath, [...args, `--outputFile.json=${report}`]);
   if (!existsSync(report)) {
     totals.failed += 1;
@@ -86,10 +96,10 @@ function ensureClients() {
   return left.length < wanted.length;
 }
 
-await ensurePackages(root);
+installIfStale();
 await check('types', process.execPath, ['node_modules/astro/astro.js', 'check', '--minimumFailingSeverity', 'warning']);
 await check('lint', process.execPath, ['node_modules/@biomejs/biome/bin/biome', 'ci', '.']);
-await check('build', process.execPath, ['src/server/start/build.mjs']);
+await check('build', process.execPath, ['src/server/start/start.mjs', '--build-only']);
 await vitest('engine', 'core');
 await vitest('server and client', 'server');
 await vitest('components', 'components');

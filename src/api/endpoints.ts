@@ -75,7 +75,12 @@ export const endpoints = {
   getRun: endpoint('GET', '/runs/:id', 'A run with the tallies of its points', {
     response: z.object({ run: runSchema, points: z.array(pointSchema) }),
   }),
-  runEvents: endpoint('GET', '/runs/:id/events', 'Server-sent `run` events: the run, and its points as they change', {}),
+  runEvents: endpoint(
+    'GET',
+    '/runs/:id/events',
+    'Server-sent `run` events: the run, and its points as they change',
+    {},
+  ),
   patchRun: endpoint('PATCH', '/runs/:id', 'Pause, resume, stop or rename a run', {
     body: runPatchSchema,
     response: z.object({ run: runSchema }),

@@ -25,7 +25,10 @@ export async function ensureBuilt(): Promise<void> {
     }
   }
   try {
-    await promisify(execFile)(process.execPath, ['start.mjs', '--build-only'], { cwd: root, maxBuffer: 2 ** 26 });
+    await promisify(execFile)(process.execPath, ['src/server/start/start.mjs', '--build-only'], {
+      cwd: root,
+      maxBuffer: 2 ** 26,
+    });
   } finally {
     rmSync(lock, { recursive: true, force: true });
   }

@@ -1,5 +1,9 @@
 import Database from 'better-sqlite3';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { RunSpec } from '@/core/simulation/run-spec.ts';
+import { runShard } from '@/core/simulation/shard.ts';
+import { buildDemoCode } from '../../db/seeds/demo/build.ts';
+import { demoProjects } from '../../db/seeds/demo/scenario.ts';
 import { type ApiClient, demoClient } from './api-client.ts';
 import { type RunningServer, startServer } from './built-server.ts';
 import { framesPerShard, freshRun, tallyWith } from './run-kit.ts';
@@ -11,6 +15,8 @@ beforeAll(async () => {
   client = await demoClient(server.base, 'engineer');
 }, 300_000);
 afterAll(() => server.stop());
+
+const pg16 = demoProjects.flatMap((project) => project.codes).find((code) => code.key === 'pg16')!;
 
 const shard = (pointId: string, index: number, frameErrors: number) => ({
   pointId,
@@ -69,6 +75,18 @@ describe('handing in shards', () => {
     const fresh = await client.post(path, { shards: [shard(pointIds[0]!, 0, 4), shard(pointIds[0]!, 1, 0)] });
     expect([fresh.status, fresh.body.error.code]).toEqual([409, 'run-closed']);
     expect((await client.post(path, { shards: [shard(pointIds[0]!, 0, 4)] })).body.duplicates).toBe(1);
+  });
+
+  it('takes what the engine computes from the run’s own statement', async () => {
+    const { run, pointIds } = await freshRun(client);
+    const { H } = await buildDemoCode(pg16);
+    const tallies = await Promise.all(
+      run.points.map(({ channel, decoder }: RunSpec) =>
+        runShard({ H, channel, decoder, seed: run.seed, framesPerShard: run.framesPerShard }, 0),
+      ),
+    );
+    const shards = tallies.map((tally, i) => ({ pointId: pointIds[i], index: 0, tally }));
+    expect((await client.post(`/runs/${run.id}/shards`, { shards })).body.accepted).toBe(2);
   });
 
   it('takes 500 in one batch', async () => {

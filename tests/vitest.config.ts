@@ -2,13 +2,14 @@ import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
 const alias = {
-  '@': fileURLToPath(new URL('./src', import.meta.url)),
-  '@workers': fileURLToPath(new URL('./workers', import.meta.url)),
+  '@': fileURLToPath(new URL('../src', import.meta.url)),
+  '@workers': fileURLToPath(new URL('../workers', import.meta.url)),
 };
 
 // One project a kind of test: the engine under plain Node, the server under plain Node with a scratch database,
 // React parts under happy-dom. Browser tests and benches have their own commands.
 export default defineConfig({
+  root: fileURLToPath(new URL('..', import.meta.url)),
   resolve: { alias },
   test: {
     pool: 'forks',

@@ -7,7 +7,7 @@ import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSy
 import { dirname, join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 
-const root = dirname(fileURLToPath(import.meta.url));
+const root = fileURLToPath(new URL('../../..', import.meta.url));
 const sources = ['src', 'workers', 'public', 'db', 'astro.config.mjs', 'package-lock.json', 'tsconfig.json'];
 const installStamp = join(root, 'node_modules', '.blockwright-lock');
 const buildStamp = join(root, 'dist', '.blockwright-sources');
@@ -68,5 +68,5 @@ if (process.argv[1] && import.meta.url === pathToFileURL(process.argv[1]).href) 
   installIfStale();
   buildIfStale();
   // `npm run build` stops here.
-  if (!process.argv.includes('--build-only')) await import('./src/server/main.mjs');
+  if (!process.argv.includes('--build-only')) await import('../main.mjs');
 }
