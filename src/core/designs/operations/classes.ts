@@ -37,11 +37,11 @@ export const classesKept = defineFamily({
       throw new ParamError('of', of.family, 'a design whose construction gives its parallel classes');
     if (keep > inner.r) throw new ParamError('keep', keep, `an integer from 2 to ${inner.r}, the number of classes`);
   },
-  *enumerate(window): Generator<Params> {
+  *enumerate(within): Generator<Params> {
     for (const family of ['kirkman-triple', 'affine-plane']) {
-      for (const of of specsOf(family, { ...window, maxBlocks: 8 * window.maxBlocks })) {
+      for (const of of specsOf(family, { ...within, maxBlocks: 8 * within.maxBlocks })) {
         const { resolvable, r, v, k } = predictDesign(of);
-        for (let keep = 3; resolvable && keep < r && (keep * v) / k <= window.maxBlocks; keep++) yield { of, keep };
+        for (let keep = 3; resolvable && keep < r && (keep * v) / k <= within.maxBlocks; keep++) yield { of, keep };
       }
     }
   },
