@@ -79,7 +79,7 @@ test('3. PG(2,64) is built, verified and analysed in a worker while the page nev
   });
   await page.getByRole('button', { name: 'Build and verify' }).click();
   // The matrix plot draws a quarter of a million ones; it is part of what must not freeze the page.
-  await page.locator('[data-built-code]').waitFor({ timeout: 30_000 });
+  await page.locator('[data-built-code] [data-matrix-canvas]').waitFor({ timeout: 30_000 });
   await page.waitForTimeout(1500);
   const built = await textOf(page, '[data-built-code]');
   expect(built).toContain('(4161, 3431)');
@@ -103,7 +103,7 @@ test('3. a triple system is built, kept, and shown with its certificate and ever
   await page.locator('[data-built-code]').waitFor();
   await page.getByLabel('name (optional)').fill('Triples on 31 points');
   await page.getByRole('button', { name: 'Keep in this project' }).click();
-  await page.waitForURL(/\/codes\/[^/]+$/);
+  await page.waitForURL(/\/codes\/(?!new)[^/]+$/);
   codeId = new URL(page.url()).pathname.split('/')[4]!;
   const text = await textOf(page);
   expect(text).toContain('155');

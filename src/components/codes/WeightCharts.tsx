@@ -9,7 +9,8 @@ interface Props {
   columnWeights: Weights;
 }
 
-/** Row and column weights in words and as bars; the drawing library is fetched only once they are in view. */
+/** Row and column weights in words and, where there is more than one, as bars; the drawing library is fetched only once
+ *  they are in view, and for a regular matrix, whose single bar would say nothing more, not at all. */
 export default function WeightCharts({ rowWeights, columnWeights }: Props) {
   return (
     <div className="grid gap-6 sm:grid-cols-2">
@@ -25,13 +26,15 @@ function Weight({ of, weights }: { of: 'row' | 'column'; weights: Weights }) {
   return (
     <figure className="min-w-0">
       <figcaption className="text-tiny">{weightText(weights, of)}</figcaption>
-      <div ref={place} className="mt-1 h-33" aria-hidden="true">
-        {seen && (
-          <Suspense fallback={null}>
-            <WeightBars of={of} weights={weights} />
-          </Suspense>
-        )}
-      </div>
+      {weights.length > 1 && (
+        <div ref={place} className="mt-1 h-33" aria-hidden="true">
+          {seen && (
+            <Suspense fallback={null}>
+              <WeightBars of={of} weights={weights} />
+            </Suspense>
+          )}
+        </div>
+      )}
     </figure>
   );
 }

@@ -1,5 +1,6 @@
 import type { BuiltCode } from '@workers/build/api.ts';
 import { type ReactNode, useEffect, useRef } from 'react';
+import { InTurn } from '@/components/ui/InTurn.tsx';
 import { duration, wholeNumber } from '@/components/ui/numbers.ts';
 import { CertificateBlock } from '../CertificateBlock.tsx';
 import { MatrixPlot } from '../matrix-plot/MatrixPlot.tsx';
@@ -37,20 +38,26 @@ export function BuiltResult({ built, elapsedMs, children }: Props) {
         {children}
       </div>
       <div className="grid items-start gap-6 lg:grid-cols-2">
-        <PropertiesBlock
-          title="Properties"
-          showTitle
-          properties={properties}
-          after={[{ label: 'Fingerprint', value: <Fingerprint hex={fingerprint} /> }]}
-        />
+        <InTurn turn={1} className="h-96">
+          <PropertiesBlock
+            title="Properties"
+            showTitle
+            properties={properties}
+            after={[{ label: 'Fingerprint', value: <Fingerprint hex={fingerprint} /> }]}
+          />
+        </InTurn>
         <div className="grid gap-6">
           <CertificateBlock certificate={certificate} />
-          <WeightCharts rowWeights={rowWeights} columnWeights={columnWeights} />
+          <InTurn turn={2} className="h-6">
+            <WeightCharts rowWeights={rowWeights} columnWeights={columnWeights} />
+          </InTurn>
         </div>
       </div>
       <div>
         <h2 className="mb-2">Matrix</h2>
-        <MatrixPlot H={built.H} />
+        <InTurn turn={3} className="aspect-square max-h-168">
+          <MatrixPlot H={built.H} />
+        </InTurn>
       </div>
     </section>
   );
