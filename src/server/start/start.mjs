@@ -36,12 +36,12 @@ function sourcesDigest() {
   return digestOf(lines.join('\n'));
 }
 
-function run(command, args, what) {
+function run(command, args, what, env = {}) {
   console.log(what);
   const { status, error } = spawnSync(command, args, {
     cwd: root,
     stdio: 'inherit',
-    env: { ...process.env, ASTRO_TELEMETRY_DISABLED: '1' },
+    env: { ...process.env, ASTRO_TELEMETRY_DISABLED: '1', ...env },
   });
   if (status === 0) return;
   console.error(error?.message ?? `${command} ${args.join(' ')} ended with status ${status}.`);
@@ -59,7 +59,9 @@ export function buildIfStale() {
   const digest = sourcesDigest();
   const built = existsSync(join(root, 'dist', 'server', 'entry.mjs')) && existsSync(buildStamp);
   if (built && readFileSync(buildStamp, 'utf8') === digest) return;
-  run(process.execPath, [join(root, 'node_modules', 'astro', 'astro.js'), 'build'], 'Building …');
+  const build = [join(root, 'node_modules', 'astro', 'astro.js'), 'build'];
+  // A NODE_ENV of the caller's, such as a test runner's, would make React's development markup for the production runtime.
+  run(process.execPath, build, 'Building …', { NODE_ENV: 'production' });
   mkdirSync(dirname(buildStamp), { recursive: true });
   writeFileSync(buildStamp, digest);
 }
