@@ -18,7 +18,7 @@ export function writeJson(H: SparseMatrix, provenance: Readonly<Record<string, u
  *  @throws FormatError with the place of a syntax error or the name of a wrong key; LimitError on size. */
 export function readJson(bytes: Uint8Array): SparseMatrix {
   const text = new TextDecoder().decode(bytes);
-  const value = parse(text) as { columns?: unknown; rows?: unknown; countedFrom?: unknown; onesByRow?: unknown };
+  const value = parseJson(text) as { columns?: unknown; rows?: unknown; countedFrom?: unknown; onesByRow?: unknown };
   const { columns, rows, onesByRow, countedFrom = 0 } = value ?? {};
   const lineOf = (key: string) => text.slice(0, Math.max(0, text.indexOf(`"${key}"`))).split('\n').length;
   const wrong = (key: string, expected: string, found: unknown) =>
@@ -49,7 +49,8 @@ export function readJson(bytes: Uint8Array): SparseMatrix {
 
 const isCount = (x: unknown): x is number => Number.isInteger(x) && (x as number) >= 1;
 
-function parse(text: string): unknown {
+/** @throws FormatError with the place of a syntax error. */
+export function parseJson(text: string): unknown {
   try {
     return JSON.parse(text.replace(/^\uFEFF/, ''));
   } catch (error) {

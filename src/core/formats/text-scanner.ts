@@ -56,9 +56,10 @@ export class TextScanner {
     return true;
   }
 
-  /** The next whole number, at most 2^32 − 1. `acrossLines` lets it stand on a later line.
+  /** The next whole number, at most 2^32 − 1. `acrossLines` lets it stand on a later line; `endedBy` is a further byte
+   *  that may follow it.
    *  @throws FormatError saying what was expected and what stands there. */
-  number(expected: string, acrossLines = true): number {
+  number(expected: string, acrossLines = true, endedBy = -1): number {
     this.skipBlank(acrossLines);
     let value = 0;
     const from = this.at;
@@ -68,7 +69,8 @@ export class TextScanner {
       value = value * 10 + digit;
       if (value > 0xffffffff) throw this.error(expected, 'a number over 4294967295', from);
     }
-    if (this.at === from || !this.atTokenEnd()) throw this.error(expected, this.tokenAt(from), from);
+    if (this.at === from || !(this.atTokenEnd() || this.bytes[this.at] === endedBy))
+      throw this.error(expected, this.tokenAt(from), from);
     return value;
   }
 
