@@ -32,7 +32,7 @@ const nodeWorkers = {
           target: 'node20',
           outDir: here('./dist/server/workers'),
           rollupOptions: {
-            input: { build: here('./workers/build/node.ts') },
+            input: { build: here('./workers/build/node.ts'), files: here('./workers/files/node.ts') },
             output: { entryFileNames: '[name].mjs' },
           },
         },

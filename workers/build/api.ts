@@ -1,16 +1,12 @@
 import type { CodeSheet, SheetRequest, SheetStep } from '@/core/codes/sheet.ts';
+import type { WorkerFailure } from '../failure.ts';
 
 /** What came of a build: the code's sheet and its matrix's fingerprint. */
 export interface BuiltCode extends CodeSheet {
   fingerprint: string;
 }
 
-/** An engine error as data, since classes do not cross a worker's border. */
-export interface BuildFailure {
-  code: string;
-  message: string;
-  data: Record<string, unknown>;
-}
+export type BuildFailure = WorkerFailure;
 
 export type BuildAnswer = { ok: true; built: BuiltCode } | { ok: false; failure: BuildFailure };
 

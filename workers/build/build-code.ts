@@ -1,5 +1,6 @@
 import { fingerprint } from '@/core/codes/fingerprint.ts';
 import { codeSheet, type SheetRequest, type SheetStep } from '@/core/codes/sheet.ts';
+import { failureOf } from '../failure.ts';
 import type { BuildAnswer } from './api.ts';
 
 /** Builds, verifies and analyses; an engine error comes back as data. */
@@ -8,8 +9,6 @@ export async function buildCode(request: SheetRequest, onStep: (step: SheetStep)
     const sheet = codeSheet(request, { clock: () => performance.now(), onStep });
     return { ok: true, built: { ...sheet, fingerprint: await fingerprint(sheet.H) } };
   } catch (error) {
-    if (!(error instanceof Error)) throw error;
-    const { name: _name, stack: _stack, message, ...data } = error as Error & { code?: string };
-    return { ok: false, failure: { code: data.code ?? 'internal', message, data: { ...data } } };
+    return { ok: false, failure: failureOf(error) };
   }
 }
