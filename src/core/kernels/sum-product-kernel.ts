@@ -2,9 +2,9 @@
  *  x = tanh(L/2), so that neither tanh nor its inverse is ever computed:
  *
  *  - a check sends a bit the product of the others' x, by products from the left and from the right;
- *  - e^L = (1 + x)/(1 − x), so that a bit's total is a pair, A : B, the products of the 1 + x and of the 1 − x of its
- *    messages and of the channel;
- *  - without one message that is A·(1 − x) : B·(1 + x), and a : b has tanh(L/2) = (a − b)/(a + b).
+ *  - e^L = (1 + x)/(1 − x), so that a bit's total is R = A/B, the product of the 1 + x of its messages and of the
+ *    channel over that of the 1 − x, divided once a bit;
+ *  - without one message that is R·(1 − x) : 1 + x, and a : b has tanh(L/2) = (a − b)/(a + b).
  *
  *  Frames that never settle drive messages to the cuts at ±30 and 1 − 10^-15, where their course depends on how 1 − x is
  *  rounded. Hence double precision and the readable decoder's order of products: 32 bits agree in frame errors but not
@@ -43,6 +43,8 @@ const largestProduct = 1 - 1e-15;
 const undecided = 5e-10;
 /** Least A and B. */
 const least = 1e-290;
+/** Most of R = A/B. Without one message, which is 2·10^15 at most, such a total is still beyond the cut at ±30. */
+const mostRatio = 1e300;
 
 /** Column weight up to which products of any messages stay in range when each 1 ± x is taken 2^21 times: between 2^-22
  *  and 2^22 it then is. Above it products are held from falling below the least, which tells on a total only when more
@@ -53,18 +55,19 @@ const scaleOf = (plan: GraphPlan): number => (plan.largestColumn <= freeColumn ?
 interface Arrays {
   /** ±tanh(L/2) of the channel, negative for a received 1. */
   channel: number;
-  /** Totals A and B. */
-  zeros: number;
-  ones: number;
-  /** The next totals as they are multiplied up; twice over for a circulant. */
+  /** Totals R = A/B; twice over for a circulant. */
+  ratio: number;
+  /** The next A and B as they are multiplied up; twice over for a circulant. */
   nextZeros: number;
   nextOnes: number;
   /** Words whose sign is the decision. */
   decisions: number;
-  /** Messages x of the checks times the scale, an edge each, rows together; products from the left for the row in hand. */
+  /** Messages x of the checks times the scale, an edge each, rows together. */
   messages: number;
-  /** The factors of the row in hand. */
+  /** The factors of the row in hand, and their products from the left: apart from the messages, which are too many for
+   *  the processor's nearest cache. */
   factors: number;
+  products: number;
 }
 
 export function sumProductKernel(plan: GraphPlan, cap: number): KernelImage {
@@ -74,13 +77,13 @@ export function sumProductKernel(plan: GraphPlan, cap: number): KernelImage {
   const perBit = () => layout.reserve(arrayBytes(plan, H.cols));
   const arrays: Arrays = {
     channel: layout.reserve(vectorBytes * H.cols),
-    zeros: perBit(),
-    ones: perBit(),
+    ratio: perBit(),
     nextZeros: perBit(),
     nextOnes: perBit(),
     decisions: layout.reserve(vectorBytes * H.cols),
     messages: layout.reserve(vectorBytes * H.colIndex.length),
     factors: layout.reserve(vectorBytes * plan.largestRow),
+    products: layout.reserve(vectorBytes * plan.largestRow),
   };
   const rows = rowTables(plan, layout);
   const positions = positionSpace(plan, layout);
@@ -129,12 +132,12 @@ function emitFilled(m: ModuleBuilder, plan: GraphPlan, arrays: Arrays): Function
     const taken = (value: V128, array: number) => v128.bitselect(value, v128.load(i, array), fresh);
     f.emit(
       fresh.set(laneMask(lanes, control.fresh)),
-      storeTotals(f, plan, i, arrays, taken(oneMore(channel), arrays.zeros), taken(oneLess(channel), arrays.ones)),
+      storeTotals(f, plan, i, arrays, oneMore(channel), oneLess(channel), taken),
     );
   });
 }
 
-/** Stores totals and decisions of all bits, and starts the next products with the channel. */
+/** Stores totals and decisions of all bits, as far as they are `taken`, and starts the next products with the channel. */
 function storeTotals(
   f: FunctionBuilder,
   plan: GraphPlan,
@@ -142,8 +145,10 @@ function storeTotals(
   arrays: Arrays,
   zerosNow: V128,
   onesNow: V128,
+  taken: (value: V128, array: number) => V128 = (value) => value,
 ): Statement {
-  const [zeros, ones, channel, margin] = [f.local('v128'), f.local('v128'), f.local('v128'), f.local('v128')];
+  const [zeros, ones, channel, ratio] = [f.local('v128'), f.local('v128'), f.local('v128'), f.local('v128')];
+  const margin = f.local('v128');
   const second = vectorBytes * plan.H.cols;
   const copies = plan.circulant ? [0, second] : [0];
   const store = (array: number, value: V128) => copies.map((copy) => v128.store(i, value, array + copy));
@@ -151,8 +156,8 @@ function storeTotals(
     zeros.set(zerosNow),
     ones.set(onesNow),
     channel.set(v128.load(i, arrays.channel)),
-    ...store(arrays.zeros, zeros),
-    ...store(arrays.ones, ones),
+    ratio.set(taken(f64x2.pmin(f64x2.div(zeros, ones), bothDoubles(mostRatio)), arrays.ratio)),
+    ...store(arrays.ratio, ratio),
     v128.store(i, oneMore(channel), arrays.nextZeros),
     v128.store(i, oneLess(channel), arrays.nextOnes),
     ...copies
@@ -161,7 +166,7 @@ function storeTotals(
     // A − B below −margin is a 1, or below the margin where a 1 was received.
     margin.set(f64x2.mul(f64x2.add(zeros, ones), bothDoubles(-undecided))),
     margin.set(v128.xor(margin, v128.and(channel, bothDoubles(-0)))),
-    v128.store(i, f64x2.lt(f64x2.sub(zeros, ones), margin), arrays.decisions),
+    v128.store(i, taken(f64x2.lt(f64x2.sub(zeros, ones), margin), arrays.decisions), arrays.decisions),
   ]);
 }
 
@@ -185,8 +190,8 @@ function emitIterate(m: ModuleBuilder, plan: GraphPlan, rows: SideTables, arrays
 }
 
 function checkPass(f: FunctionBuilder, check: Site, arrays: Arrays, kept: Local<'v128'>, scale: number): Statement[] {
-  const { zeros, ones, nextZeros, nextOnes, messages, factors } = arrays;
-  const [x, a, b, product] = [f.borrow('v128'), f.borrow('v128'), f.borrow('v128'), f.borrow('v128')];
+  const { ratio, nextZeros, nextOnes, messages, factors, products } = arrays;
+  const [x, a, product] = [f.borrow('v128'), f.borrow('v128'), f.borrow('v128')];
   const more = f64x2.add(bothDoubles(scale), x);
   const less = f64x2.sub(bothDoubles(scale), x);
   const multiply = (bit: Place, next: number, factor: V128) => {
@@ -200,22 +205,22 @@ function checkPass(f: FunctionBuilder, check: Site, arrays: Arrays, kept: Local<
     product.set(bothDoubles(1)),
     check.eachNeighbour((bit, edge, slot) => [
       x.set(v128.and(at(edge, messages), kept)),
-      a.set(f64x2.mul(at(bit, zeros), less)),
-      b.set(f64x2.mul(at(bit, ones), more)),
-      x.set(within(f64x2.div(f64x2.sub(a, b), f64x2.add(a, b)), largestFactor)),
+      a.set(f64x2.mul(at(bit, ratio), less)),
+      x.set(more),
+      x.set(within(f64x2.div(f64x2.sub(a, x), f64x2.add(a, x)), largestFactor)),
       put(slot, factors, x),
-      put(edge, messages, product),
+      put(slot, products, product),
       product.set(f64x2.mul(product, x)),
     ]),
     product.set(bothDoubles(scale)),
     check.eachNeighbourBackwards((bit, edge, slot) => [
-      x.set(cut(f64x2.mul(at(edge, messages), product))),
+      x.set(cut(f64x2.mul(at(slot, products), product))),
       put(edge, messages, x),
       product.set(f64x2.mul(product, at(slot, factors))),
       multiply(bit, nextZeros, more),
       multiply(bit, nextOnes, less),
     ]),
   ];
-  f.giveBack(x, a, b, product);
+  f.giveBack(x, a, product);
   return [sequence(...code)];
 }
