@@ -1,4 +1,5 @@
 import { type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
+import { type FileBytes, sizeOf } from './byte-source.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 import { TextScanner } from './text-scanner.ts';
 import { TextWriter } from './text-writer.ts';
@@ -20,20 +21,30 @@ export function writeAlist(H: SparseMatrix): Uint8Array {
 
 /** Reads padded and unpadded files, and files whose first line names rows before columns when the weights tell.
  *  @throws FormatError with line and column; @throws LimitError on a size that passes matrixLimits. */
-export function readAlist(bytes: Uint8Array): SparseMatrix {
-  const scan = new TextScanner(bytes);
-  const cols = scan.number('the number of columns N');
-  const rows = scan.number('the number of rows M', false);
-  refuseBeyondLimits(rows, cols, 0);
-  if (rows === 0 || cols === 0) throw scan.error('at least one row and one column', '0');
-  const maxColumnWeight = scan.number('the largest column weight');
-  const maxRowWeight = scan.number('the largest row weight', false);
-  const columnWeights = readWeights(scan, cols, maxColumnWeight, rows, 'column');
+export function readAlist(file: FileBytes): SparseMatrix {
+  const scan = new TextScanner(file);
+  const sizes: [number, number] = [scan.number('the number of columns N'), scan.number('the number of rows M', false)];
+  refuseBeyondLimits(sizes[1], sizes[0], 0);
+  if (sizes[0] === 0 || sizes[1] === 0) throw scan.error('at least one row and one column', '0');
+  const most: [number, number] = [
+    scan.number('the largest column weight'),
+    scan.number('the largest row weight', false),
+  ];
+  const begun = lineOfWeights(scan, Math.max(...sizes));
+  // Some writers name rows first. The line of column weights tells, unless the matrix is square.
+  if (begun.length !== sizes[0] && begun.length === sizes[1]) {
+    sizes.reverse();
+    most.reverse();
+  }
+  const [cols, rows] = sizes;
+  const [maxColumnWeight, maxRowWeight] = most;
+  const columnWeights = readWeights(scan, cols, maxColumnWeight, rows, 'column', begun);
   const rowWeights = readWeights(scan, rows, maxRowWeight, cols, 'row');
   const ones = sum(columnWeights);
   if (ones !== sum(rowWeights))
     throw scan.error(`row weights that sum to ${ones}, as the column weights do`, String(sum(rowWeights)));
   refuseBeyondLimits(rows, cols, ones);
+  if (4 * ones > sizeOf(file)) throw scan.error('as many ones as the file has room for', String(ones));
   const columns = readLists(scan, columnWeights, maxColumnWeight, rows, 'column');
   const matrix = readLists(scan, rowWeights, maxRowWeight, cols, 'row');
   if (!scan.atEnd()) throw scan.error('the end of the file', scan.tokenAt());
@@ -67,10 +78,28 @@ function writeLists(out: TextWriter, M: SparseMatrix, width: number): void {
   }
 }
 
-function readWeights(scan: TextScanner, count: number, most: number, limit: number, what: string): Uint32Array {
+/** The weights on the next line that is not empty. */
+function lineOfWeights(scan: TextScanner, atMost: number): number[] {
+  const weights: number[] = [];
+  if (scan.atEnd()) throw scan.error('the weights of the columns', 'the end of the file');
+  while (!scan.atLineEnd() && weights.length < atMost)
+    weights.push(scan.number(`the weight of column ${weights.length + 1}`, false));
+  return weights;
+}
+
+/** Weights, some of which may have been read already; they may go on over several lines. */
+function readWeights(
+  scan: TextScanner,
+  count: number,
+  most: number,
+  limit: number,
+  what: string,
+  begun: readonly number[] = [],
+): Uint32Array {
+  if (begun.length > count) throw scan.error(`${count} weights of ${what}s`, `${begun.length} or more`);
   const weights = new Uint32Array(count);
   for (let i = 0; i < count; i++) {
-    const weight = scan.number(`the weight of ${what} ${i + 1}`);
+    const weight = begun[i] ?? scan.number(`the weight of ${what} ${i + 1}`);
     if (weight > most || weight > limit)
       throw scan.error(`a weight of at most ${Math.min(most, limit)} for ${what} ${i + 1}`, String(weight));
     weights[i] = weight;

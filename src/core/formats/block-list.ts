@@ -1,4 +1,5 @@
 import { type BlockDesign, blockOf } from '../designs/block-design.ts';
+import type { FileBytes } from './byte-source.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 import { TextScanner } from './text-scanner.ts';
 import { TextWriter } from './text-writer.ts';
@@ -33,8 +34,8 @@ export function writeBlockListText(design: BlockDesign): Uint8Array {
 /** Reads files with or without the size line; points stand apart by blanks or commas. Without it the number of points
  *  is told by the largest, and the start of counting by a point 0; a file that shows none is refused.
  *  @throws FormatError with line and column; LimitError on a size that passes matrixLimits. */
-export function readBlockListText(bytes: Uint8Array): BlockList {
-  const scan = new TextScanner(bytes);
+export function readBlockListText(file: FileBytes): BlockList {
+  const scan = new TextScanner(file);
   if (scan.atEnd()) throw scan.error('a block, or the line "# points=… blocks=…"', 'the end of the file');
   const stated = readHead(scan);
   const blocks: Uint32Array[] = [];

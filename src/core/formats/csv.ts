@@ -1,4 +1,6 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import type { FileBytes } from './byte-source.ts';
+import { EntryList } from './entries.ts';
 import { matrixFromEntries } from './matrix-from-entries.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 import { TextScanner } from './text-scanner.ts';
@@ -26,29 +28,25 @@ interface Preamble {
 /** Reads files with or without the size line. Without it the size is the largest index; whether counting starts at 0 or 1
  *  is then told by an index 0, and where none stands the file is refused, since both would be possible.
  *  @throws FormatError with line and column; LimitError on a size that passes matrixLimits. */
-export function readCsv(bytes: Uint8Array): SparseMatrix {
-  const scan = new TextScanner(bytes);
+export function readCsv(file: FileBytes): SparseMatrix {
+  const scan = new TextScanner(file);
   if (scan.atEnd()) throw scan.error(`the line "${header}"`, 'the end of the file');
   const preamble = readPreamble(scan);
-  const rowOf: number[] = [];
-  const colOf: number[] = [];
+  const entries = new EntryList();
   while (!scan.atEnd()) {
     const row = scan.number('a row index');
     if (!scan.skipChar(',')) throw scan.error('a comma after the row index', scan.tokenAt());
     const col = scan.number('a column index', false);
     if (!scan.atLineEnd()) throw scan.error('the end of the line', scan.tokenAt());
     refuseOutside(scan, preamble, row, col);
-    rowOf.push(row);
-    colOf.push(col);
-    if ((rowOf.length & 0xffff) === 0) refuseBeyondLimits(0, 0, rowOf.length);
+    entries.push(row, col);
   }
-  const base = preamble.countedFrom ?? toldBase(scan, rowOf, colOf);
-  const rows = preamble.rows ?? largest(rowOf) + 1 - base;
-  const cols = preamble.cols ?? largest(colOf) + 1 - base;
+  const base = preamble.countedFrom ?? toldBase(scan, entries);
+  const rows = preamble.rows ?? entries.largestRow + 1 - base;
+  const cols = preamble.cols ?? entries.largestCol + 1 - base;
   if (rows === 0 || cols === 0) throw scan.error('at least one entry, or a line "# rows=… columns=…"', 'neither');
-  refuseBeyondLimits(rows, cols, rowOf.length);
-  const zeroBased = (list: number[]) => Uint32Array.from(list, (index) => index - base);
-  return matrixFromEntries(rows, cols, zeroBased(rowOf), zeroBased(colOf), scan);
+  refuseBeyondLimits(rows, cols, entries.count);
+  return matrixFromEntries(rows, cols, entries, scan, base);
 }
 
 function readPreamble(scan: TextScanner): Preamble {
@@ -90,13 +88,11 @@ function refuseOutside(scan: TextScanner, { rows, cols, countedFrom = 0 }: Pream
     );
 }
 
-function toldBase(scan: TextScanner, rowOf: readonly number[], colOf: readonly number[]): 0 {
-  if (rowOf.includes(0) || colOf.includes(0)) return 0;
+function toldBase(scan: TextScanner, entries: EntryList): 0 {
+  if (entries.hasZero) return 0;
   throw scan.errorAtLine(
     1,
     'a line "# rows=… columns=… counted-from=0" (or 1): no index is 0, so the start of counting cannot be told',
     'none',
   );
 }
-
-const largest = (list: readonly number[]) => list.reduce((most, x) => Math.max(most, x), -1);

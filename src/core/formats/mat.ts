@@ -2,6 +2,7 @@ import { unzlibSync } from 'fflate';
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { transpose } from '../codes/sparse-matrix.ts';
 import { FormatError, LimitError } from '../errors.ts';
+import { pairedEntries } from './entries.ts';
 import { matrixFromEntries } from './matrix-from-entries.ts';
 import { matrixLimits, refuseBeyondLimits } from './matrix-limits.ts';
 
@@ -89,7 +90,7 @@ function sparseFrom(parts: MatElement[]): SparseMatrix {
       colOf.push(c);
     }
   }
-  return matrixFromEntries(rows, cols, Uint32Array.from(rowOf), Uint32Array.from(colOf), { error: wrong });
+  return matrixFromEntries(rows, cols, pairedEntries(rowOf, colOf), { error: wrong });
 }
 
 interface MatElement {

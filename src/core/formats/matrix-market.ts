@@ -1,4 +1,6 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import { type FileBytes, sizeOf } from './byte-source.ts';
+import { EntryList } from './entries.ts';
 import { matrixFromEntries } from './matrix-from-entries.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 import { TextScanner } from './text-scanner.ts';
@@ -26,8 +28,8 @@ export function writeMatrixMarket(H: SparseMatrix): Uint8Array {
 
 /** Reads `coordinate pattern general`, and `coordinate integer general` with every value 0 or 1.
  *  @throws FormatError with line and column; @throws LimitError on a size that passes matrixLimits. */
-export function readMatrixMarket(bytes: Uint8Array): SparseMatrix {
-  const scan = new TextScanner(bytes);
+export function readMatrixMarket(file: FileBytes): SparseMatrix {
+  const scan = new TextScanner(file);
   const first = scan.restOfLine().trim().toLowerCase().replace(/\s+/g, ' ');
   const hasValues = first === banner.toLowerCase().replace('pattern', 'integer');
   if (!hasValues && first !== banner.toLowerCase())
@@ -42,9 +44,8 @@ export function readMatrixMarket(bytes: Uint8Array): SparseMatrix {
   const ones = scan.number('the number of entries', false);
   refuseBeyondLimits(rows, cols, ones);
   if (rows === 0 || cols === 0) throw scan.error('at least one row and one column', `${rows} × ${cols}`);
-  const rowOf = new Uint32Array(ones);
-  const colOf = new Uint32Array(ones);
-  let count = 0;
+  if (4 * ones > sizeOf(file)) throw scan.error('as many entries as the file has room for', String(ones));
+  const entries = new EntryList();
   for (let e = 0; e < ones; e++) {
     while (!scan.atEnd() && scan.peek() === 37) scan.restOfLine();
     const row = inRange(scan, scan.number(`entry ${e + 1} of ${ones}: a row from 1 to ${rows}`), rows, 'row');
@@ -53,11 +54,10 @@ export function readMatrixMarket(bytes: Uint8Array): SparseMatrix {
     if (value > 1) throw scan.error('a value 0 or 1', String(value));
     if (!scan.atLineEnd()) throw scan.error('the end of the line', scan.tokenAt());
     if (value === 0) continue;
-    rowOf[count] = row;
-    colOf[count++] = col;
+    entries.push(row, col);
   }
   if (!scan.atEnd()) throw scan.error(`the end of the file after ${ones} entries`, scan.tokenAt());
-  return matrixFromEntries(rows, cols, rowOf.subarray(0, count), colOf.subarray(0, count), scan);
+  return matrixFromEntries(rows, cols, entries, scan);
 }
 
 function inRange(scan: TextScanner, index: number, limit: number, what: string): number {

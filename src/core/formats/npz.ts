@@ -1,6 +1,7 @@
 import { unzipSync, zipSync } from 'fflate';
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { FormatError, LimitError } from '../errors.ts';
+import { pairedEntries } from './entries.ts';
 import { matrixFromEntries } from './matrix-from-entries.ts';
 import { matrixLimits, refuseBeyondLimits } from './matrix-limits.ts';
 import { decodeNpy, encodeNpy, npyElements } from './npy.ts';
@@ -71,7 +72,7 @@ export function readNpz(bytes: Uint8Array): SparseMatrix {
     colOf[count++] = col;
   }
   const place = { error: (expected: string, found: string) => new FormatError(1, 1, expected, found) };
-  return matrixFromEntries(rows, cols, rowOf.subarray(0, count), colOf.subarray(0, count), place);
+  return matrixFromEntries(rows, cols, pairedEntries(rowOf, colOf, count), place);
 }
 
 /** The row (or column) of each stored entry, from the pointers of a compressed layout. */

@@ -1,32 +1,41 @@
 import { FormatError } from '../errors.ts';
+import { bytesFrom, type FileBytes } from './byte-source.ts';
 
-/** Reads whitespace-separated whole numbers out of bytes, line by line, and knows where it is. Accepts CR, LF and
+/** Bytes held at once of a file that is read where it lies, and those kept of what went before, for messages. */
+const WINDOW = 1 << 20;
+const KEPT = 1 << 12;
+/** Characters of a line of text that are looked at. */
+const LONGEST_TEXT = 1 << 16;
+
+/** Reads whitespace-separated whole numbers out of a file, line by line, and knows where it is. Accepts CR, LF and
  *  CRLF, a UTF-8 byte order mark, and a missing last newline. Lines and columns count from 1. */
 export class TextScanner {
+  /** The part of the file in hand, and where in the file it begins. */
+  private bytes: Uint8Array;
+  private base = 0;
+  /** Place in `bytes`. */
   private at: number;
+  /** Place in the file. */
   private lineStart: number;
   line = 1;
 
-  constructor(private readonly bytes: Uint8Array) {
-    const hasMark = bytes[0] === 0xef && bytes[1] === 0xbb && bytes[2] === 0xbf;
-    this.at = hasMark ? 3 : 0;
+  constructor(private readonly file: FileBytes) {
+    this.bytes = file instanceof Uint8Array ? file : bytesFrom(file, 0, WINDOW);
+    const [a, b, c] = this.bytes;
+    this.at = a === 0xef && b === 0xbb && c === 0xbf ? 3 : 0;
     this.lineStart = this.at;
-  }
-
-  get column(): number {
-    return this.at - this.lineStart + 1;
   }
 
   /** True when nothing but white space is left in the file. */
   atEnd(): boolean {
     this.skipBlank(true);
-    return this.at >= this.bytes.length;
+    return !this.hasByte();
   }
 
   /** True when nothing but blanks is left on this line. */
   atLineEnd(): boolean {
     this.skipBlank(false);
-    return this.at >= this.bytes.length || isLineBreak(this.bytes[this.at]!);
+    return !this.hasByte() || isLineBreak(this.bytes[this.at]!);
   }
 
   /** Past the break, when nothing but blanks is left on this line. */
@@ -34,23 +43,23 @@ export class TextScanner {
     if (this.atLineEnd()) this.skipLineBreak();
   }
 
-  /** The rest of this line as text, without its break. */
+  /** The rest of this line as text, without its break; no more of it than anyone would read. */
   restOfLine(): string {
-    const from = this.at;
-    while (this.at < this.bytes.length && !isLineBreak(this.bytes[this.at]!)) this.at++;
-    const text = new TextDecoder().decode(this.bytes.subarray(from, this.at));
+    const found: number[] = [];
+    for (; this.hasByte() && !isLineBreak(this.bytes[this.at]!); this.at++)
+      if (found.length < LONGEST_TEXT) found.push(this.bytes[this.at]!);
     this.skipLineBreak();
-    return text;
+    return new TextDecoder().decode(Uint8Array.from(found));
   }
 
   peek(): number {
-    return this.bytes[this.at] ?? -1;
+    return this.hasByte() ? this.bytes[this.at]! : -1;
   }
 
   /** Skips one byte if it is `char`, with blanks around it. */
   skipChar(char: string): boolean {
     this.skipBlank(false);
-    if (this.bytes[this.at] !== char.charCodeAt(0)) return false;
+    if (this.peek() !== char.charCodeAt(0)) return false;
     this.at++;
     this.skipBlank(false);
     return true;
@@ -62,20 +71,20 @@ export class TextScanner {
   number(expected: string, acrossLines = true, endedBy = -1): number {
     this.skipBlank(acrossLines);
     let value = 0;
-    const from = this.at;
-    for (; this.at < this.bytes.length; this.at++) {
+    const from = this.base + this.at;
+    for (; this.hasByte(); this.at++) {
       const digit = this.bytes[this.at]! - 48;
       if (digit < 0 || digit > 9) break;
       value = value * 10 + digit;
-      if (value > 0xffffffff) throw this.error(expected, 'a number over 4294967295', from);
+      if (value > 0xffffffff) throw this.errorAt(from, expected, 'a number over 4294967295');
     }
-    if (this.at === from || !(this.atTokenEnd() || this.bytes[this.at] === endedBy))
-      throw this.error(expected, this.tokenAt(from), from);
+    if (this.base + this.at === from || !(this.atTokenEnd() || this.peek() === endedBy))
+      throw this.errorAt(from, expected, this.tokenFrom(from));
     return value;
   }
 
-  error(expected: string, found: string, at = this.at): FormatError {
-    return new FormatError(this.line, at - this.lineStart + 1, expected, found);
+  error(expected: string, found: string): FormatError {
+    return this.errorAt(this.base + this.at, expected, found);
   }
 
   /** An error about a whole line that has been read already. */
@@ -84,8 +93,17 @@ export class TextScanner {
   }
 
   /** What stands at the present place, for messages. */
-  tokenAt(from = this.at): string {
-    if (from >= this.bytes.length) return 'the end of the file';
+  tokenAt(): string {
+    return this.tokenFrom(this.base + this.at);
+  }
+
+  private errorAt(position: number, expected: string, found: string): FormatError {
+    return new FormatError(this.line, position - this.lineStart + 1, expected, found);
+  }
+
+  private tokenFrom(position: number): string {
+    if (!this.hasByte() && position === this.base + this.at) return 'the end of the file';
+    const from = Math.max(0, position - this.base);
     if (isLineBreak(this.bytes[from]!)) return 'the end of the line';
     let to = from;
     while (to < this.bytes.length && to - from < 20 && this.bytes[to]! > 32) to++;
@@ -96,25 +114,47 @@ export class TextScanner {
   }
 
   private atTokenEnd(): boolean {
-    const b = this.bytes[this.at];
-    return b === undefined || b === 32 || b === 9 || b === 44 || isLineBreak(b);
+    if (!this.hasByte()) return true;
+    const b = this.bytes[this.at]!;
+    return b === 32 || b === 9 || b === 44 || isLineBreak(b);
   }
 
   private skipBlank(acrossLines: boolean): void {
-    for (;;) {
-      const b = this.bytes[this.at];
+    while (this.hasByte()) {
+      const b = this.bytes[this.at]!;
       if (b === 32 || b === 9) this.at++;
-      else if (acrossLines && b !== undefined && isLineBreak(b)) this.skipLineBreak();
+      else if (acrossLines && isLineBreak(b)) this.skipLineBreak();
       else return;
     }
   }
 
   private skipLineBreak(): void {
-    if (this.at >= this.bytes.length) return;
-    if (this.bytes[this.at] === 13 && this.bytes[this.at + 1] === 10) this.at++;
+    if (!this.hasByte()) return;
+    const wasReturn = this.bytes[this.at] === 13;
     this.at++;
+    if (wasReturn && this.peek() === 10) this.at++;
     this.line++;
-    this.lineStart = this.at;
+    this.lineStart = this.base + this.at;
+  }
+
+  /** Whether a byte stands at `at`; moves the window on when it is past its end. */
+  private hasByte(): boolean {
+    return this.at < this.bytes.length || this.moveOn();
+  }
+
+  private moveOn(): boolean {
+    if (this.file instanceof Uint8Array) return false;
+    const next = this.base + this.bytes.length;
+    const fresh = bytesFrom(this.file, next, WINDOW);
+    if (fresh.length === 0) return false;
+    const kept = this.bytes.subarray(Math.max(0, this.bytes.length - KEPT));
+    const moved = new Uint8Array(kept.length + fresh.length);
+    moved.set(kept);
+    moved.set(fresh, kept.length);
+    this.bytes = moved;
+    this.base = next - kept.length;
+    this.at = kept.length;
+    return true;
   }
 }
 

@@ -32,6 +32,16 @@ test('alist is read padded and unpadded', () => {
   expect(importMatrix(bytes(unpadded), 'alist')).toEqual(H);
 });
 
+test('alist that names rows before columns is told by its line of column weights', () => {
+  expect(importMatrix(bytes(padded.replace('4 2\n2 3', '2 4\n3 2')), 'alist')).toEqual(H);
+  expect(failure(padded.replace('1 2 1 1\n', '1 2 1 1 1 1 1\n'), 'alist').expected).toContain('weight');
+});
+
+test('sizes that the file has no room for are refused before memory is taken', () => {
+  const banner = '%%MatrixMarket matrix coordinate pattern general\n';
+  expect(failure(`${banner}1000000 1000000 40000000\n1 1\n`, 'mtx').expected).toContain('room');
+});
+
 test('alist names the line and column of an index that counts from 0', () => {
   const error = failure(padded.replace('1 2 0\n2 3 4', '0 1 0\n2 3 4'), 'alist');
   expect(error).toMatchObject({ line: 9, expected: expect.stringContaining('indices count from 1'), found: '0' });
