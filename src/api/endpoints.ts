@@ -8,6 +8,16 @@ import {
 import { codeSchema, jobSchema, matrixFormatSchema, newCodeSchema } from './codes.ts';
 import { endpoint } from './endpoint.ts';
 import { newProjectSchema, projectSchema, requirementsSchema } from './projects.ts';
+import {
+  blockFormSchema,
+  generatorFormSchema,
+  newEndingSchema,
+  newReleaseSchema,
+  rebuildSchema,
+  releaseSchema,
+  releaseSheetSchema,
+  vectorQueryParams,
+} from './releases.ts';
 import { newRunSchema, pointSchema, runPatchSchema, runSchema, shardBatchSchema, shardReceiptSchema } from './runs.ts';
 
 const page = { after: z.string().optional(), limit: z.coerce.number().int().min(1).max(500).optional() };
@@ -63,6 +73,20 @@ export const endpoints = {
       response: z.looseObject({ fingerprint: z.string() }),
     },
   ),
+  getBlocks: endpoint('GET', '/codes/:id/blocks', 'The block list of the design as a file', {
+    query: z.strictObject({ form: blockFormSchema }),
+  }),
+  getGenerator: endpoint(
+    'GET',
+    '/codes/:id/generator',
+    'The generator as polynomial, circulants or systematic matrix',
+    {
+      query: z.strictObject({ form: generatorFormSchema }),
+    },
+  ),
+  getVectors: endpoint('GET', '/codes/:id/vectors', 'Test vectors for decoders, from a seed', {
+    query: vectorQueryParams,
+  }),
   listRuns: endpoint('GET', '/projects/:id/runs', 'Runs of the project, newest first', {
     query: z.object(page),
     response: z.object({ runs: z.array(runSchema), next: z.string().optional() }),
@@ -93,4 +117,30 @@ export const endpoints = {
     query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),
     response: z.object({ points: z.array(pointSchema) }),
   }),
+  listReleases: endpoint('GET', '/projects/:id/releases', 'Releases of the project, newest first', {
+    query: z.object(page),
+    response: z.object({ releases: z.array(releaseSchema), next: z.string().optional() }),
+  }),
+  createRelease: endpoint('POST', '/projects/:id/releases', 'Make and freeze a numbered bundle of a code', {
+    body: newReleaseSchema,
+    response: z.object({ release: releaseSchema }),
+    success: [201],
+  }),
+  getRelease: endpoint('GET', '/releases/:id', 'A release, its files and its manifest', {
+    response: releaseSheetSchema,
+  }),
+  endRelease: endpoint('POST', '/releases/:id/endings', 'Supersede or withdraw a release, with a reason', {
+    body: newEndingSchema,
+    response: z.object({ release: releaseSchema }),
+    success: [201],
+  }),
+  rebuildRelease: endpoint('POST', '/releases/:id/rebuild', 'Make the bundle again and compare its digest', {
+    response: rebuildSchema,
+  }),
+  getReleaseFile: endpoint(
+    'GET',
+    '/releases/:id/files/:name',
+    'A file of a release, or its whole bundle, in ranges',
+    {},
+  ),
 } as const;

@@ -21,3 +21,29 @@ export function authSecret(): string {
   if (secret.length < 32) throw new Error('AUTH_SECRET: a random secret of at least 32 characters is required.');
   return secret;
 }
+
+export interface S3Settings {
+  /** Absent for Amazon's own addresses. */
+  endpoint?: string;
+  bucket: string;
+  /** What every key begins with: empty, or ending in a slash. */
+  prefix: string;
+  region: string;
+  accessKeyId: string;
+  secretAccessKey: string;
+}
+
+/** Where released files go, when not into DATA_DIR; checked by src/server/environment.mjs at the start. */
+export function s3Settings(env: NodeJS.ProcessEnv = process.env): S3Settings | undefined {
+  const bucket = env.S3_BUCKET;
+  if (!bucket) return undefined;
+  const prefix = env.S3_PREFIX ?? '';
+  return {
+    ...(env.S3_ENDPOINT && { endpoint: env.S3_ENDPOINT }),
+    bucket,
+    prefix: prefix === '' || prefix.endsWith('/') ? prefix : `${prefix}/`,
+    region: env.S3_REGION ?? 'us-east-1',
+    accessKeyId: env.S3_ACCESS_KEY_ID ?? '',
+    secretAccessKey: env.S3_SECRET_ACCESS_KEY ?? '',
+  };
+}

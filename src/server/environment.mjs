@@ -14,7 +14,7 @@ function refuse(name, given, accepted) {
   throw new SettingError(`${name}: got ${JSON.stringify(given)}; accepted is ${accepted}.`);
 }
 
-/** Reads HOST, PORT, DATA_DIR, PUBLIC_URL, AUTH_SECRET and TRUST_PROXY. Makes the data folder, and in local mode the
+/** Reads HOST, PORT, DATA_DIR, PUBLIC_URL, AUTH_SECRET, TRUST_PROXY and the S3_ settings. Makes the data folder, and in local mode the
  *  secret in it. What later modules read is written back to process.env: DATA_DIR as an absolute path, AUTH_SECRET.
  *  @throws SettingError */
 export function prepareEnvironment(env = process.env) {
@@ -25,6 +25,7 @@ export function prepareEnvironment(env = process.env) {
     refuse('HOST', host, `${loopbackHosts.join(', ')} in local mode; other addresses need PUBLIC_URL`);
   }
   const port = readPort(env.PORT);
+  checkFileStore(env);
   const dataDir = readDataDir(env.DATA_DIR);
   env.DATA_DIR = dataDir;
   env.AUTH_SECRET = publicUrl ? productionSecret(env.AUTH_SECRET) : localSecret(dataDir);
@@ -63,6 +64,26 @@ function readDataDir(value) {
     throw new SettingError(`DATA_DIR: ${dataDir} cannot be made or used (${/** @type {Error} */ (error).message}).`);
   }
   return dataDir;
+}
+
+/** Released files go to DATA_DIR unless S3_BUCKET names a bucket; then the rest must be there too.
+ *  @param {NodeJS.ProcessEnv} env */
+function checkFileStore(env) {
+  const given = Object.keys(env).filter((name) => name.startsWith('S3_') && env[name] !== undefined);
+  if (given.length === 0) return;
+  const bucket = env.S3_BUCKET ?? '';
+  if (!/^[a-z0-9][a-z0-9.-]{1,61}[a-z0-9]$/.test(bucket)) {
+    refuse('S3_BUCKET', bucket, 'the name of a bucket, since other S3_ settings are there');
+  }
+  for (const name of ['S3_ACCESS_KEY_ID', 'S3_SECRET_ACCESS_KEY']) {
+    if (!env[name])
+      throw new SettingError(`${name}: nothing is set; with S3_BUCKET the key of that store is required.`);
+  }
+  const endpoint = env.S3_ENDPOINT;
+  if (endpoint === undefined) return;
+  const url = URL.canParse(endpoint) ? new URL(endpoint) : undefined;
+  const secure = url?.protocol === 'https:' || (url?.protocol === 'http:' && loopbackHosts.includes(url.hostname));
+  if (!secure) refuse('S3_ENDPOINT', endpoint, 'an https address; http only for loopback');
 }
 
 /** @param {string | undefined} value */

@@ -10,3 +10,18 @@ export function fileResponse(file: { bytes: Uint8Array; fileName: string; mediaT
     },
   });
 }
+
+/** The same for a file that is still being made, so that its size is not known. */
+export function streamResponse(file: {
+  stream: ReadableStream<Uint8Array>;
+  fileName: string;
+  mediaType: string;
+}): Response {
+  return new Response(file.stream, {
+    headers: {
+      'Content-Type': file.mediaType,
+      'Content-Disposition': `attachment; filename="${file.fileName}"`,
+      'Cache-Control': 'private, no-cache',
+    },
+  });
+}

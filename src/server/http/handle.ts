@@ -8,8 +8,8 @@ import { errorResponse } from './error-response.ts';
 import { readJson } from './read-json.ts';
 
 export interface Call<E extends Endpoint> extends Context {
-  /** Path parameters; every address that has one calls it `id`. */
-  params: { id: string };
+  /** Path parameters: every address that has one calls the first `id`; a file's second is its `name`. */
+  params: { id: string; name: string };
   query: z.output<E['query']>;
   body: z.output<E['body']>;
   request: Request;
@@ -56,7 +56,7 @@ async function parse<E extends Endpoint>(
   return {
     db: database(),
     caller: locals.user,
-    params: { id: params.id ?? '' },
+    params: { id: params.id ?? '', name: params.name ?? '' },
     query: query as z.output<E['query']>,
     body: body as z.output<E['body']>,
     request,

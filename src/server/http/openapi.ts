@@ -58,6 +58,12 @@ function successes(endpoint: Endpoint): Json {
 /** Addresses that answer with something else than JSON. */
 const fileTypes: Record<string, Json> = {
   '/runs/:id/events': { 'text/event-stream': { schema: { type: 'string' } } },
+  ...Object.fromEntries(
+    ['/codes/:id/blocks', '/codes/:id/generator', '/codes/:id/vectors', '/releases/:id/files/:name'].map((path) => [
+      path,
+      { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } },
+    ]),
+  ),
   '/codes/:id/matrix': { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } },
 };
 

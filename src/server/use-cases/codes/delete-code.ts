@@ -3,9 +3,10 @@ import { inTransaction } from '../../db/database.ts';
 import { Refusal } from '../../refusal.ts';
 import { recordEvent } from '../../repositories/audit-events.ts';
 import { deleteCode as deleteRow, runsUsingCode } from '../../repositories/codes.ts';
+import { releasesOfCode } from '../../repositories/releases.ts';
 import { codeToWrite } from './get-code.ts';
 
-/** Removes a code; one that a run measures stays, since its results would lose their subject. */
+/** Removes a code; one that a run measures or a release holds stays, since they would lose their subject. */
 export async function deleteCode(context: Context, codeId: string): Promise<void> {
   const { projectId, name, fingerprint } = await codeToWrite(context, codeId);
   await inTransaction(context.db, async (trx) => {
@@ -15,6 +16,11 @@ export async function deleteCode(context: Context, codeId: string): Promise<void
         'in-use',
         `${runs === 1 ? 'One run measures' : `${runs} runs measure`} this code, so it stays.`,
       );
+    }
+    const releases = await releasesOfCode(trx, codeId);
+    if (releases > 0) {
+      const holding = releases === 1 ? 'One release holds' : `${releases} releases hold`;
+      throw new Refusal('in-use', `${holding} this code, so it stays.`);
     }
     await deleteRow(trx, codeId);
     const content = { name, fingerprint };

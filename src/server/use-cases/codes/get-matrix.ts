@@ -1,9 +1,11 @@
 import type { MatrixFormat } from '@/api/codes.ts';
 import { matrixFormat } from '@/core/formats/index.ts';
+import { writeJson } from '@/core/formats/json.ts';
 import type { Context } from '../../context.ts';
 import { matrixOf } from '../../repositories/codes.ts';
 import { fileStem } from './file-stem.ts';
 import { getCode } from './get-code.ts';
+import { provenanceOf } from './provenance.ts';
 
 export interface MatrixFile {
   bytes: Uint8Array;
@@ -16,5 +18,6 @@ export async function getMatrix(context: Context, codeId: string, format: Matrix
   const code = await getCode(context, codeId);
   const codec = matrixFormat(format);
   const H = (await matrixOf(context.db, codeId))!;
-  return { bytes: codec.write(H), fileName: `${fileStem(code)}.${codec.extension}`, mediaType: codec.mediaType };
+  const bytes = format === 'json' ? writeJson(H, provenanceOf(code)) : codec.write(H);
+  return { bytes, fileName: `${fileStem(code)}.${codec.extension}`, mediaType: codec.mediaType };
 }
