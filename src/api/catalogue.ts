@@ -14,6 +14,10 @@ const windowSchema = z
   });
 
 const count = z.coerce.number('a whole number').int('a whole number').min(0, 'a whole number');
+const positive = z.coerce
+  .number('a whole number of bits')
+  .int('a whole number of bits')
+  .min(1, 'a whole number of bits from 1');
 
 /** The catalogue's query as an address holds it. */
 export const catalogueQueryParams = z.strictObject({
@@ -35,8 +39,10 @@ export const catalogueQueryParams = z.strictObject({
     .string()
     .transform((text) => text.split(',').filter(Boolean))
     .optional(),
-  payloadBits: count.optional(),
-  parityBits: count.optional(),
+  /** Hit exactly, by shortening. */
+  shortenTo: positive.optional(),
+  payloadBits: positive.optional(),
+  parityBits: positive.optional(),
   p: z.coerce
     .number()
     .gt(0, 'a probability above 0 and at most 0.5')
@@ -93,6 +99,8 @@ export const catalogueAnswerSchema = z.object({
       entry: candidateSchema,
     }),
   ),
+  /** When nothing matches: theorems that forbid what was asked. */
+  obstacles: z.array(z.object({ rule: z.string(), statement: z.string(), source: z.unknown() })),
 });
 
 export const feasibilityQuerySchema = z.strictObject({

@@ -19,7 +19,7 @@ export type SortColumn = (typeof sortColumns)[number];
 
 /** What is asked of the catalogue. Every part may be left out. */
 export const catalogueQuerySchema = z.strictObject({
-  /** Code length, dimension and rate, each a window whose ends count. */
+  /** Code length, dimension and rate, each a window whose ends count; of the shortened code when one is asked for. */
   n: range.optional(),
   k: range.optional(),
   rate: range.optional(),
@@ -32,11 +32,13 @@ export const catalogueQuerySchema = z.strictObject({
   structure: z.enum(['cyclic', 'quasi-cyclic']).optional(),
   resolvable: z.boolean().optional(),
   families: z.array(z.string()).optional(),
+  /** Length to shorten to; hit exactly. */
+  shortenTo: whole('a whole number of bits').min(1).optional(),
   /** Information bits after shortening; hit exactly. */
   payloadBits: whole('a whole number of bits').min(1).optional(),
   /** Parity bits n − k; hit exactly. */
   parityBits: whole('a whole number of bits').min(1).optional(),
-  /** Raw crossover probability and the frame error rate wanted at it. */
+  /** Raw crossover probability and the frame error rate wanted at it; they say something together. */
   p: z.number().gt(0).max(0.5).optional(),
   targetFer: z.number().gt(0).lt(1).optional(),
   sort: z.enum(sortColumns).optional(),

@@ -1,16 +1,23 @@
 import type { Transform } from '../codes/ldpc.ts';
+import { families } from '../designs/families/index.ts';
+import { ParamError } from '../errors.ts';
+import type { Enclosure } from '../evidence.ts';
+import type { CatalogueColumns, OrderColumn } from './columns.ts';
 import type { Entry } from './entry.ts';
+import { Fit } from './fit.ts';
 import { type CatalogueQuery, parseQuery } from './query.ts';
-import { type CatalogueTable, catalogueTable } from './table.ts';
-import { testsFor, type Verdict } from './verdict.ts';
+import { type Requirement, requirementsOf, type Verdict } from './requirements.ts';
+import { catalogueTable } from './table.ts';
 
-/** A code that could be built, with what closed formulas say of it and of each requirement. */
+/** A code that could be built, with what closed formulas say of it and of each requirement. Where shortening is settled it
+ *  is one of the transforms, and n is the length after it; where the rank is only bounded the code must be built first,
+ *  and `shortenBy` says between what. */
 export interface Candidate extends Entry {
-  /** Names the candidate in links: family, parameters, orientation, classes kept. */
+  /** Names the candidate in links: family, parameters, orientation, classes kept, bits dropped. */
   id: string;
   transforms: Transform[];
-  /** Information positions to drop so that exactly the payload asked for remains; absent when none was asked for. */
-  shortenBy?: { lower: number; upper: number };
+  /** Information positions to drop for the payload or the length asked for; absent when none was asked for. */
+  shortenBy?: Enclosure;
   verdicts: Verdict[];
 }
 
@@ -21,59 +28,108 @@ export interface SearchResult {
   total: number;
 }
 
-/** Candidates that no stated requirement rules out, sorted; nothing is built.
+/** Candidates that no stated requirement rules out, sorted, 200 unless `limit` says otherwise; nothing is built.
  *  @throws ParamError naming the part of the query that is wrong. */
 export const searchCatalogue = (query: CatalogueQuery): Candidate[] => searchTable(catalogueTable(), query).candidates;
 
 /** The same with its counts, over any table. */
-export function searchTable(table: CatalogueTable, raw: CatalogueQuery): SearchResult {
+export function searchTable(table: CatalogueColumns, raw: CatalogueQuery): SearchResult {
   const query = parseQuery(raw);
-  const matching = matchingEntries(table, query);
+  const asked = new Search(table, query);
+  const rows = asked.matching();
   const { offset = 0, limit = 200 } = query;
-  const tests = testsFor(query);
-  const candidates = matching.slice(offset, offset + limit).map((entry) => candidateOf(entry, query, tests));
-  return { candidates, matching: matching.length, total: table.entries.length };
+  const candidates = Array.from(rows.slice(offset, offset + limit), (row) => asked.candidate(row));
+  return { candidates, matching: rows.length, total: table.count };
 }
 
-/** Entries in the order asked for that no requirement rules out. Windows over plain columns go first, since they are
- *  cheap and leave few entries for the rest. */
-export function matchingEntries(table: CatalogueTable, query: CatalogueQuery): Entry[] {
-  const order = table.order(query.sort ?? 'n');
-  const { n, columnWeight, radius } = table.columns;
-  const families = query.families && new Set(query.families);
-  const tests = testsFor(query);
-  const found: Entry[] = [];
-  for (let at = 0; at < order.length; at++) {
-    const i = order[query.descending ? order.length - 1 - at : at]!;
-    if (n[i]! < (query.n?.min ?? 0) || n[i]! > (query.n?.max ?? Infinity)) continue;
-    if (columnWeight[i]! < (query.columnWeight?.min ?? 0) || columnWeight[i]! > (query.columnWeight?.max ?? Infinity))
-      continue;
-    if (radius[i]! < (query.radiusMin ?? 0)) continue;
-    const entry = table.entries[i]!;
-    if (families && !families.has(entry.design.family)) continue;
-    if (tests.every((test) => test(entry).outcome !== 'misses')) found.push(entry);
+/** One query over one table. */
+export class Search {
+  readonly fit: Fit;
+  readonly requirements: Requirement[];
+
+  constructor(
+    private readonly table: CatalogueColumns,
+    private readonly query: CatalogueQuery,
+  ) {
+    this.fit = new Fit(table, query);
+    this.requirements = requirementsOf(query, table, this.fit);
   }
-  return found;
+
+  /** Rows that no requirement rules out, in the order asked for. */
+  matching(): number[] {
+    const { column, isDescending } = this.order();
+    const order = this.table.order(column);
+    const wanted = this.familiesWanted();
+    const outcomes = this.requirements.map(({ outcome }) => outcome);
+    const found: number[] = [];
+    for (let at = 0; at < order.length; at++) {
+      const row = order[isDescending ? order.length - 1 - at : at]!;
+      if (wanted && !wanted.has(this.table.designOf(row).family)) continue;
+      if (outcomes.every((outcome) => outcome(row) !== 'misses')) found.push(row);
+    }
+    return found;
+  }
+
+  /** The column whose order is that of the figure asked for. Once a payload or a length fixes part of a code, the rest of
+   *  its figures follow its rank. */
+  private order(): { column: OrderColumn; isDescending: boolean } {
+    const { sort = 'n', descending: isDescending = false } = this.query;
+    if (this.fit.isAsked && (sort === 'k' || sort === 'rate'))
+      return { column: 'rankUpper', isDescending: !isDescending };
+    if (sort === 'n' && this.fit.isAsked) return { column: 'parity', isDescending };
+    return { column: sort, isDescending };
+  }
+
+  private familiesWanted(): Set<string> | undefined {
+    const { families: wanted } = this.query;
+    const known = families.map(({ id }) => id);
+    const unknown = wanted?.find((id) => !known.includes(id));
+    if (unknown !== undefined) throw new ParamError('families', unknown, `ids of families: ${known.join(', ')}`);
+    return wanted && new Set(wanted);
+  }
+
+  /** A row as a candidate, with its name, its transforms and a verdict on each requirement. */
+  candidate(row: number): Candidate {
+    const entry = this.table.entry(row);
+    const { design, checks, keptClasses } = entry;
+    const shortened = this.fit.isAsked ? this.fit.settledShortening(row) : undefined;
+    const transforms: Transform[] = [
+      ...(keptClasses === undefined ? [] : [{ kind: 'keep-classes', classes: keptClasses }]),
+      ...(shortened ? [{ kind: 'shorten', bits: shortened }] : []),
+    ];
+    const params = Object.entries(design.params).map(
+      ([name, value]) => `${name}=${typeof value === 'object' ? JSON.stringify(value) : value}`,
+    );
+    const choices = [
+      ...(keptClasses === undefined ? [] : [`classes=${keptClasses}`]),
+      ...(shortened ? [`shorten=${shortened}`] : []),
+    ];
+    return {
+      ...entry,
+      ...(shortened && afterShortening(entry, shortened)),
+      id: [design.family, ...params, checks, ...choices].join(';'),
+      transforms,
+      ...(this.fit.isAsked && { shortenBy: this.fit.shortening(row) }),
+      verdicts: this.requirements.map(({ name, outcome, grounds }) => ({
+        requirement: name,
+        outcome: outcome(row),
+        ...grounds(entry),
+      })),
+    };
+  }
 }
 
-/** An entry as a candidate, with its name, its transforms and a verdict from each test. */
-export function candidateOf(
-  entry: Entry,
-  { payloadBits }: CatalogueQuery,
-  tests: readonly ((entry: Entry) => Verdict)[],
-): Candidate {
-  const { design, checks, keptClasses, n, rank } = entry;
-  const params = Object.entries(design.params).map(
-    ([name, value]) => `${name}=${typeof value === 'object' ? JSON.stringify(value) : value}`,
-  );
-  const transforms = keptClasses === undefined ? [] : [{ kind: 'keep-classes', count: keptClasses }];
+/** The distance is kept or raised, cycles only break, and rows lose the bits dropped; the rest stays. */
+function afterShortening({ n, rank, girth, distance }: Entry, bits: number): Pick<Entry, 'n' | 'girth' | 'distance'> {
+  const most = Math.max(distance.lower, Math.min(n - bits, rank.upper + 1));
   return {
-    ...entry,
-    id: [design.family, ...params, checks, ...(keptClasses === undefined ? [] : [`classes=${keptClasses}`])].join(';'),
-    transforms,
-    ...(payloadBits !== undefined && {
-      shortenBy: { lower: Math.max(0, n - rank.upper - payloadBits), upper: n - rank.lower - payloadBits },
-    }),
-    verdicts: tests.map((test) => test(entry)),
+    n: n - bits,
+    girth: { ...girth, method: `${girth.method}, before shortening, which only breaks cycles` },
+    distance: {
+      lower: distance.lower,
+      upper: most,
+      grade: distance.lower === most ? distance.grade : 'bounded',
+      method: `${distance.method}, before shortening, which keeps or raises it`,
+    },
   };
 }

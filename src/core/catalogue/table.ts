@@ -1,72 +1,45 @@
 import type { DesignSpec } from '../designs/block-design.ts';
-import { families } from '../designs/families/index.ts';
-import type { DesignPrediction } from '../designs/family.ts';
+import { families, familyById } from '../designs/families/index.ts';
+import { CatalogueColumns } from './columns.ts';
 import { type Entry, entryOf } from './entry.ts';
-import { keptClassEntries } from './kept-classes.ts';
-import { type SortColumn, sortColumns } from './query.ts';
+import { keptClassEntries, keptClassEntry } from './kept-classes.ts';
 
 /** Longest code in the catalogue. */
 export const MAX_CATALOGUE_LENGTH = 70_000;
 
-/** Every entry with the columns that are filtered and sorted by, laid out for fast scans. */
-export interface CatalogueTable {
-  entries: readonly Entry[];
-  columns: Readonly<Record<SortColumn, Float64Array>>;
-  /** Entries in ascending order of a column, ties by length and then as enumerated; made when first asked for. */
-  order(column: SortColumn): Uint32Array;
-}
+/** Most blocks of a design that is listed for the code on its points. */
+const MAX_CATALOGUE_BLOCKS = 300_000;
 
-let table: CatalogueTable | undefined;
+/** Operations that name codes which are listed already: a dual is the other orientation, kept classes are a choice made
+ *  for every resolvable family, and relabelled points permute the bits. */
+const REPEATING = new Set(['dual', 'classes', 'relabel']);
+
+let table: CatalogueColumns | undefined;
 
 /** The catalogue of everything the families can enumerate, made once. */
-export function catalogueTable(): CatalogueTable {
-  table ??= makeTable([...allEntries()]);
+export function catalogueTable(): CatalogueColumns {
+  table ??= makeTable();
   return table;
 }
 
-function* allEntries(): Iterable<Entry> {
+function makeTable(): CatalogueColumns {
+  const made = new CatalogueColumns(entryAgain);
   for (const family of families) {
-    for (const params of family.enumerate({ maxPoints: MAX_CATALOGUE_LENGTH, maxBlocks: MAX_CATALOGUE_LENGTH })) {
+    if (REPEATING.has(family.id)) continue;
+    for (const params of family.enumerate({ maxPoints: MAX_CATALOGUE_LENGTH, maxBlocks: MAX_CATALOGUE_BLOCKS })) {
+      const design = { family: family.id, params: params as DesignSpec['params'] };
       const prediction = family.predict(params);
-      yield* entriesOf({ family: family.id, params: params as DesignSpec['params'] }, prediction);
+      for (const code of prediction.codes)
+        if (code.n <= MAX_CATALOGUE_LENGTH) made.add(entryOf(design, prediction, code));
+      for (const entry of keptClassEntries(design, prediction, MAX_CATALOGUE_LENGTH)) made.add(entry);
     }
   }
+  return made;
 }
 
-function* entriesOf(design: DesignSpec, prediction: DesignPrediction): Iterable<Entry> {
-  for (const code of prediction.codes) if (code.n <= MAX_CATALOGUE_LENGTH) yield entryOf(design, prediction, code);
-  yield* keptClassEntries(design, prediction, MAX_CATALOGUE_LENGTH);
-}
-
-const columnValue: Record<SortColumn, (entry: Entry) => number> = {
-  n: (e) => e.n,
-  k: (e) => e.n - e.rank.upper,
-  rate: (e) => 1 - e.rank.upper / e.n,
-  girth: (e) => e.girth.lower,
-  distance: (e) => e.distance.lower,
-  radius: (e) => e.radius,
-  columnWeight: (e) => e.columnWeight,
-  rowWeight: (e) => e.rowWeight,
-  parity: (e) => e.rank.lower,
-};
-
-export function makeTable(entries: readonly Entry[]): CatalogueTable {
-  const columns = Object.fromEntries(
-    sortColumns.map((name) => [name, Float64Array.from(entries, columnValue[name])]),
-  ) as Record<SortColumn, Float64Array>;
-  const orders = new Map<SortColumn, Uint32Array>();
-  const makeOrder = (name: SortColumn) => {
-    const values = columns[name];
-    const { n } = columns;
-    return Uint32Array.from(entries, (_, i) => i).sort((a, b) => values[a]! - values[b]! || n[a]! - n[b]! || a - b);
-  };
-  return {
-    entries,
-    columns,
-    order(name) {
-      const order = orders.get(name) ?? makeOrder(name);
-      orders.set(name, order);
-      return order;
-    },
-  };
+/** The entry with its words, from its name: predicted anew, since holding the words of all of them would cost more. */
+function entryAgain(design: DesignSpec, checks: Entry['checks'], keptClasses: number | undefined): Entry {
+  const prediction = familyById(design.family).predict(design.params);
+  if (keptClasses !== undefined) return keptClassEntry(design, prediction, checks, keptClasses);
+  return entryOf(design, prediction, prediction.codes.find((code) => code.checks === checks)!);
 }

@@ -4,6 +4,7 @@ import { ParamError } from '../../errors.ts';
 import { predictTwoDesignCodes } from '../code-prediction.ts';
 import { developCyclically } from '../develop.ts';
 import { defineFamily } from '../family.ts';
+import { exactly } from '../partial-linear-prediction.ts';
 
 const MAX_PRIME = 4000;
 const ACCEPTED = `a prime ≡ 3 (mod 4) from 7 to ${MAX_PRIME}`;
@@ -29,7 +30,19 @@ export const quadraticResidue = defineFamily({
   },
   predict({ q }) {
     const counts = { v: q, b: q, k: (q - 1) / 2, r: (q - 1) / 2, lambda: (q - 3) / 4 };
-    return { t: 2, ...counts, cyclic: true, codes: predictTwoDesignCodes(counts, { structure: 'cyclic' }) };
+    const rank = q % 8 === 7 ? rankOfResidueCode(q) : undefined;
+    return { t: 2, ...counts, cyclic: true, codes: predictTwoDesignCodes(counts, { rank, structure: 'cyclic' }) };
   },
   build: ({ q }) => developCyclically(q, [squaresModulo(q).filter((x) => x !== 0)]),
 });
+
+/** When 2 is a square modulo p, Σ x^r over the squares r is an idempotent of GF(2)[x]/(x^p − 1), and its (p − 1)/2 terms are
+ *  odd in number: it is 1 at half of the p-th roots of unity other than 1, and at 1, and 0 elsewhere. */
+const rankOfResidueCode = (p: number) =>
+  exactly((p + 1) / 2, 'proved', 'the squares are an idempotent, as 2 is one of them', {
+    authors: 'F. J. MacWilliams, N. J. A. Sloane',
+    year: 1977,
+    title: 'The Theory of Error-Correcting Codes',
+    where: 'North-Holland',
+    part: 'Chapter 16, section 3',
+  });

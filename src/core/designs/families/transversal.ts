@@ -53,7 +53,8 @@ export const transversal = defineFamily({
   require: requireSquares,
   *enumerate({ maxPoints, maxBlocks }): Generator<Params> {
     for (let g = 2; g <= MAX_GROUP_SIZE && g * g <= maxBlocks; g++) {
-      for (let k = 3; k <= reach(g) && k * g <= maxPoints; k++) yield { k, g };
+      const most = Math.min(reach(g), Math.floor(maxPoints / g));
+      for (let k = 3; k <= most; k++) yield { k, g };
     }
   },
   predict: predictTransversal,
@@ -91,7 +92,8 @@ const isSquarefree = (g: number) => factor(g).every(({ m }) => m === 1);
 
 function predictTransversal({ k, g }: Params): DesignPrediction {
   const counts = { v: k * g, b: g * g, k, r: g };
-  const circulant = isSquarefree(g) && k < reach(g) ? 'quasi-cyclic' : 'none';
+  const resolvable = k < reach(g);
+  const circulant = resolvable && isSquarefree(g) ? 'quasi-cyclic' : 'none';
   // g odd: N·Nᵀ is the identity on vectors of even weight in every group, and the sum of a group's rows, the all-one
   // word, is outside their image; the sums of all groups agree. g even: two groups' rows have rank 2g − 1.
   const top = k * g - k + 1;
@@ -104,7 +106,7 @@ function predictTransversal({ k, g }: Params): DesignPrediction {
     ...counts,
     lambda: g,
     partialLinear: true,
-    ...(k < reach(g) ? { resolvable: true } : {}),
+    ...(resolvable ? { resolvable } : {}),
     codes: predictPartialLinearCodes(counts, { girth: 6, rank, structure: { blocks: circulant, points: circulant } }),
   };
 }
