@@ -6,8 +6,7 @@ import { type DesignCertificate, verifyDesign } from './verify.ts';
 export const MAX_UPLOADED_BLOCKS = 1_000_000;
 const MAX_UPLOADED_INCIDENCES = 50_000_000;
 
-export interface UploadedDesign {
-  design: BlockDesign;
+export interface UploadCertificate {
   /** Largest t ≤ 5 for which it is a t-design; 0 when not even every point lies on equally many blocks. */
   t: number;
   /** λ for that t; the number of blocks when t = 0. */
@@ -16,6 +15,10 @@ export interface UploadedDesign {
   certificate: DesignCertificate;
   /** Why a larger t was not reached. */
   stoppedBy: string;
+}
+
+export interface UploadedDesign extends UploadCertificate {
+  design: BlockDesign;
 }
 
 /** A design from a list of blocks, points counted from 0, with the largest t that holds.
@@ -27,6 +30,12 @@ export function designFromUpload(blocks: readonly ArrayLike<number>[], v?: numbe
     throw new LimitError('uploaded design', blocks.length, MAX_UPLOADED_BLOCKS, 'blocks');
   const points = v ?? largestPoint(blocks) + 1;
   const design = designFromBlocks(points, blocks);
+  return { design, ...certifyUpload(design) };
+}
+
+/** The largest t ≤ 5 for which blocks are a t-design, with its certificate. @throws LimitError on more blocks than that. */
+export function certifyUpload(design: BlockDesign): UploadCertificate {
+  if (design.b > MAX_UPLOADED_BLOCKS) throw new LimitError('uploaded design', design.b, MAX_UPLOADED_BLOCKS, 'blocks');
   let best: { t: number; lambda: number; certificate: DesignCertificate } | undefined;
   for (let t = 1; t <= 5; t++) {
     const lambda = lambdaFor(design, t);
@@ -37,11 +46,11 @@ export function designFromUpload(blocks: readonly ArrayLike<number>[], v?: numbe
       continue;
     }
     const stoppedBy = typeof attempt === 'string' ? attempt : (attempt.reason ?? `t = ${t} does not hold`);
-    if (best) return { design, ...best, stoppedBy };
+    if (best) return { ...best, stoppedBy };
     const certificate = typeof attempt === 'string' ? verifyDesign(design, { t: 1, lambda: 1 }) : attempt;
-    return { design, t: 0, lambda: design.b, certificate, stoppedBy };
+    return { t: 0, lambda: design.b, certificate, stoppedBy };
   }
-  return { design, ...best!, stoppedBy: 't above 5 is not tried' };
+  return { ...best!, stoppedBy: 't above 5 is not tried' };
 }
 
 function largestPoint(blocks: readonly ArrayLike<number>[]): number {
