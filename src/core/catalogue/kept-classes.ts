@@ -20,6 +20,10 @@ interface Whole {
   isNet: boolean;
   /** A net over the integers modulo an odd squarefree number: an array of circulants. */
   isCirculant: boolean;
+  /** The prime whose power the blocks of a class are; undefined when they are no such number. */
+  prime: number | undefined;
+  /** The code that keeps every class, by orientation. */
+  codes: Record<Entry['checks'], CodePrediction>;
 }
 
 /** The codes that keep some of its parallel classes: 3 … r − 1 of them in both orientations, of nets in the one where
@@ -45,13 +49,25 @@ export const keptClassEntry = (
 function wholeOf(design: DesignSpec, prediction: DesignPrediction): Whole {
   const perClass = prediction.v / prediction.k;
   const isNet = design.family === 'transversal';
-  const isCirculant = isNet && perClass % 2 === 1 && factor(perClass).every(({ m }) => m === 1);
-  return { design, prediction, perClass, isPlane: design.family === 'affine-plane', isNet, isCirculant };
+  const factors = factor(perClass);
+  const isCirculant = isNet && perClass % 2 === 1 && factors.every(({ m }) => m === 1);
+  const codeOf = (checks: Entry['checks']) =>
+    prediction.codes.find((code) => code.checks === checks) ?? prediction.codes[0]!;
+  return {
+    design,
+    prediction,
+    perClass,
+    isPlane: design.family === 'affine-plane',
+    isNet,
+    isCirculant,
+    prime: factors.length === 1 ? factors[0]!.p : undefined,
+    codes: { blocks: codeOf('blocks'), points: codeOf('points') },
+  };
 }
 
 function keptEntry(whole: Whole, checks: Entry['checks'], classes: number): Entry {
   const { v, k } = whole.prediction;
-  const code = whole.prediction.codes.find((each) => each.checks === checks) ?? whole.prediction.codes[0]!;
+  const code = whole.codes[checks];
   const n = checks === 'blocks' ? v : classes * whole.perClass;
   const [columnWeight, rowWeight] = checks === 'blocks' ? [classes, k] : [k, classes];
   const rank = rankOfKept(whole, classes, code);
@@ -79,7 +95,7 @@ function keptEntry(whole: Whole, checks: Entry['checks'], classes: number): Entr
  *  Arrays of circulants: at each g-th root of unity other than 1 they are a Vandermonde matrix on k distinct nodes, of rank
  *  min(k, c), and at 1 of rank 1 (Fan 2000). */
 function rankOfKept(
-  { prediction, perClass, isPlane, isNet, isCirculant }: Whole,
+  { prediction, perClass, isPlane, isNet, isCirculant, prime }: Whole,
   classes: number,
   code: CodePrediction,
 ): Known {
@@ -90,7 +106,7 @@ function rankOfKept(
   const b = classes * perClass;
   const upper = Math.min(b - classes + 1, v, code.rank.value.upper);
   const known = isNet
-    ? rowsOfTwoGroups(perClass, classes)
+    ? rowsOfTwoGroups(perClass, prime, classes)
     : Math.max(packedRank(v, treeBound(classes, 6)), packedRank(b, treeBound(k, 6)));
   const lower = Math.min(upper, Math.max(perClass, known));
   const method = isNet ? netRank : classRank;
@@ -101,6 +117,8 @@ const netRank = 'rows of two groups below; every class sums to the all-one vecto
 const classRank = 'one class, sphere packing below; every class sums to the all-one vector above';
 const exact = (value: number, method: string): Known => ({ lower: value, upper: value, grade: 'proved', method });
 
+const SIX = exact(6, 'a triangle of three classes closes a 6-cycle');
+
 /** Redundancy holds the patterns of half the distance: at least the logarithm of their last shell (Hamming 1950). */
 function packedRank(n: number, distance: number): number {
   const w = Math.min(n, Math.floor((distance - 1) / 2));
@@ -110,18 +128,17 @@ function packedRank(n: number, distance: number): number {
 /** The rows of the first two groups of a net over GF(g) are a graph on 2g vertices, joined through the sums of the first c
  *  elements: g over the order of the subgroup that these span is its number of components. Products of fields number
  *  their elements otherwise; of them only one group is counted. */
-function rowsOfTwoGroups(g: number, classes: number): number {
-  const [{ p }, ...others] = factor(g) as [{ p: number }, ...unknown[]];
-  if (others.length > 0) return g;
+function rowsOfTwoGroups(g: number, prime: number | undefined, classes: number): number {
+  if (prime === undefined) return g;
   let spanned = 1;
-  while (spanned < classes) spanned *= p;
+  while (spanned < classes) spanned *= prime;
   return 2 * g - g / Math.min(g, spanned);
 }
 
 /** Three lines of different directions of a plane that do not all meet close a 6-cycle, and so do the classes 0, 1, 2 of
  *  an array of circulants in its first three rows (1 + 1 = 2). Elsewhere the graph may have room for more. */
 function girthOfKept({ prediction, perClass, isPlane, isCirculant }: Whole, classes: number, lower: number): Known {
-  if (isPlane || isCirculant) return exact(6, 'a triangle of three classes closes a 6-cycle');
+  if (isPlane || isCirculant) return SIX;
   const upper = girthCeiling({ v: prediction.v, b: classes * perClass, k: prediction.k, r: classes });
   const method = 'a part of the whole below; room for a tree (Moore) above';
   return { lower, upper, grade: lower === upper ? 'proved' : 'bounded', method };
