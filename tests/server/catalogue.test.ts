@@ -19,10 +19,56 @@ describe('the catalogue', () => {
     expect(await found('n=1000..1050&structure=cyclic')).toContainEqual(expect.objectContaining({ design: affine }));
   });
 
+  it('answers a link that states everything, and says of each requirement how it stands', async () => {
+    const link =
+      'n=200..300&k=100..&rate=0.5..&columnWeight=..20&rowWeight=..20&girthMin=6&distanceMin=10&radiusMin=8' +
+      '&structure=cyclic&families=projective-plane&payloadBits=128&parityBits=82&shortenTo=210&p=0.001&targetFer=1e-9' +
+      '&sort=distance&descending=true&offset=0&limit=50';
+    const { status, body } = await client.get(`/catalogue?${link}`);
+    expect([status, body.matching, body.nearest, body.obstacles]).toEqual([200, 2, [], []]);
+    for (const candidate of body.candidates) {
+      expect(candidate).toMatchObject({ n: 210, transforms: [{ kind: 'shorten', bits: 63 }] });
+      const { verdicts } = candidate as { verdicts: { requirement: string; outcome: string; grade: string }[] };
+      expect(verdicts.length).toBeGreaterThanOrEqual(13);
+      expect(verdicts.every(({ outcome, grade }) => outcome === 'meets' && grade)).toBe(true);
+    }
+  });
+
+  it('hands out pages that join without a gap, over at least 50,000 candidates', async () => {
+    const first = (await client.get('/catalogue?sort=rate&limit=40')).body;
+    expect(first.total).toBeGreaterThanOrEqual(50_000);
+    expect([first.matching, first.next]).toEqual([first.total, 40]);
+    const second = (await client.get(`/catalogue?sort=rate&limit=40&offset=${first.next}`)).body;
+    const both = (await client.get('/catalogue?sort=rate&limit=80')).body.candidates;
+    expect([...first.candidates, ...second.candidates]).toEqual(both);
+    const last = (await client.get(`/catalogue?offset=${first.total - 1}`)).body;
+    expect([last.candidates.length, last.next]).toEqual([1, undefined]);
+  });
+
+  it('keeps a kept-classes candidate that it offered', async () => {
+    const { body } = await client.get('/catalogue?n=49&families=transversal&limit=200');
+    const offered = body.candidates.find((candidate: { keptClasses?: number }) => candidate.keptClasses);
+    expect(offered.transforms).toEqual([{ kind: 'keep-classes', classes: offered.keptClasses }]);
+    const owner = await demoClient(server.base, 'owner');
+    const { project } = (await owner.post('/projects', { name: 'Kept classes' })).body;
+    const derivation = { kind: 'ldpc', checks: offered.checks, transforms: offered.transforms };
+    const kept = await owner.post(`/projects/${project.id}/codes`, { design: offered.design, derivation });
+    expect([kept.status, kept.body.code?.n]).toEqual([201, 49]);
+  });
+
+  it('names what comes nearest and the theorem in the way when nothing fits', async () => {
+    const { body } = await client.get('/catalogue?n=43&structure=cyclic&radiusMin=3&rate=0.2..');
+    expect(body.matching).toBe(0);
+    expect(body.obstacles.map(({ rule }: { rule: string }) => rule)).toContain('bruck-ryser-chowla');
+    expect(body.nearest.map(({ givenUp }: { givenUp: string }) => givenUp)).toContain('length');
+  });
+
   it.each([
     ['n=abc', 'n', /window such as/],
     ['p=0.6', 'p', /at most 0.5/],
     ['limit=0', 'limit', /1/],
+    ['payloadBits=0', 'payloadBits', /from 1/],
+    ['families=nonesuch', 'families', /projective-plane/],
     ['colour=red', 'colour', /no such field/],
   ])('refuses %s, naming %s', async (query, field, accepted) => {
     const { status, body } = await client.get(`/catalogue?${query}`);
