@@ -2,7 +2,7 @@ import type { CandidateRow } from '@/api/catalogue.ts';
 import type { DesignSpec } from '@/core/designs/block-design.ts';
 import { designTitle } from '@/core/designs/design-title.ts';
 
-/** "Projective plane PG(2,q), q = 16", with the classes kept when not all are. */
+/** "Projective plane PG(2,16)", with the classes kept when not all are. */
 export function titleOf({ design, keptClasses, checks }: CandidateRow): string {
   const kept = keptClasses === undefined ? '' : `, ${keptClasses} classes kept`;
   return `${designTitle(design as DesignSpec)}${kept}${checks === 'points' ? ', points as checks' : ''}`;
