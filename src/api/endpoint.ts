@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { Scope } from './tokens.ts';
 
 /** One route of the HTTP interface, said once: the server parses by it, the client is typed by it, the OpenAPI
  *  description is made from it. Paths are relative to /api/v1 and name their parameters `:like-this`. */
@@ -15,10 +16,14 @@ export interface Endpoint<
   response: R;
   /** Statuses of success, the usual one first. */
   success: readonly number[];
+  /** Any one of these lets a token in; with none, only a session does. */
+  scopes: readonly Scope[];
 }
 
 const nothing = z.object({}).optional();
 
+/** Unless its `scopes` say otherwise, an endpoint that only reads is open to tokens with `read`, and one that changes
+ *  something to none. */
 export function endpoint<
   Q extends z.ZodType = typeof nothing,
   B extends z.ZodType = typeof nothing,
@@ -27,7 +32,7 @@ export function endpoint<
   method: Endpoint['method'],
   path: string,
   summary: string,
-  shapes: { query?: Q; body?: B; response?: R; success?: readonly number[] },
+  shapes: { query?: Q; body?: B; response?: R; success?: readonly number[]; scopes?: readonly Scope[] },
 ): Endpoint<Q, B, R> {
   return {
     method,
@@ -37,6 +42,7 @@ export function endpoint<
     body: shapes.body ?? (nothing as unknown as B),
     response: shapes.response ?? (nothing as unknown as R),
     success: shapes.success ?? [200],
+    scopes: shapes.scopes ?? (method === 'GET' ? ['read'] : []),
   };
 }
 

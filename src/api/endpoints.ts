@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { accountPatchSchema, accountSchema, newPasswordSchema, passwordChangeSchema } from './account.ts';
 import {
   catalogueAnswerSchema,
   catalogueQueryParams,
@@ -18,7 +19,17 @@ import {
   releaseSheetSchema,
   vectorQueryParams,
 } from './releases.ts';
-import { newRunSchema, pointSchema, runPatchSchema, runSchema, shardBatchSchema, shardReceiptSchema } from './runs.ts';
+import {
+  newRunSchema,
+  pointSchema,
+  pointsQueryParams,
+  runPatchSchema,
+  runSchema,
+  shardBatchSchema,
+  shardReceiptSchema,
+  waitQueryParams,
+} from './runs.ts';
+import { newTokenSchema, tokenSchema } from './tokens.ts';
 
 const page = { after: z.string().optional(), limit: z.coerce.number().int().min(1).max(500).optional() };
 const storedRequirements = z.object({ requirements: requirementsSchema.nullable(), updatedAt: z.string().nullable() });
@@ -33,6 +44,7 @@ export const endpoints = {
     body: newProjectSchema,
     response: z.object({ project: projectSchema }),
     success: [201],
+    scopes: ['run'],
   }),
   getProject: endpoint('GET', '/projects/:id', 'One project', { response: z.object({ project: projectSchema }) }),
   getRequirements: endpoint('GET', '/projects/:id/requirements', 'What the project needs', {
@@ -49,6 +61,7 @@ export const endpoints = {
   feasibility: endpoint('POST', '/feasibility', 'Whether a design exists, with the theorem that says so', {
     body: feasibilityQuerySchema,
     response: feasibilityAnswerSchema,
+    scopes: ['read'],
   }),
   listCodes: endpoint('GET', '/projects/:id/codes', 'Codes kept in the project', {
     query: z.object(page),
@@ -58,6 +71,7 @@ export const endpoints = {
     body: newCodeSchema,
     response: z.union([z.object({ code: codeSchema }), z.object({ job: jobSchema })]),
     success: [201, 202],
+    scopes: ['run'],
   }),
   getJob: endpoint('GET', '/jobs/:id', 'How a long piece of work stands', { response: z.object({ job: jobSchema }) }),
   getCode: endpoint('GET', '/codes/:id', 'One code with its properties', { response: z.object({ code: codeSchema }) }),
@@ -95,23 +109,34 @@ export const endpoints = {
     body: newRunSchema,
     response: z.object({ run: runSchema.extend({ points: z.array(pointSchema) }) }),
     success: [201],
+    scopes: ['run'],
   }),
   getRun: endpoint('GET', '/runs/:id', 'A run with the tallies of its points', {
     response: z.object({ run: runSchema, points: z.array(pointSchema) }),
+    scopes: ['read', 'run'],
   }),
-  runEvents: endpoint(
-    'GET',
-    '/runs/:id/events',
-    'Server-sent `run` events: the run, and its points as they change',
-    {},
-  ),
+  runPoints: endpoint('GET', '/runs/:id/points', 'Points of a run in their order, as JSON or CSV', {
+    query: pointsQueryParams,
+    response: z.object({ points: z.array(pointSchema), next: z.string().optional() }),
+    scopes: ['read', 'run'],
+  }),
+  runEnd: endpoint('GET', '/runs/:id/end', 'Answers once the run has ended, or when the seconds are over', {
+    query: waitQueryParams,
+    response: z.object({ run: runSchema, ended: z.boolean() }),
+    scopes: ['read', 'run'],
+  }),
+  runEvents: endpoint('GET', '/runs/:id/events', 'Server-sent `run` events: the run, and its points as they change', {
+    scopes: ['read', 'run'],
+  }),
   patchRun: endpoint('PATCH', '/runs/:id', 'Pause, resume, stop or rename a run', {
     body: runPatchSchema,
     response: z.object({ run: runSchema }),
+    scopes: ['run'],
   }),
   postShards: endpoint('POST', '/runs/:id/shards', 'Hand in computed shards; answered once they are committed', {
     body: shardBatchSchema,
     response: shardReceiptSchema,
+    scopes: ['run'],
   }),
   projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, for charts', {
     query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),
@@ -120,6 +145,7 @@ export const endpoints = {
   listReleases: endpoint('GET', '/projects/:id/releases', 'Releases of the project, newest first', {
     query: z.object(page),
     response: z.object({ releases: z.array(releaseSchema), next: z.string().optional() }),
+    scopes: ['read', 'release:read'],
   }),
   createRelease: endpoint('POST', '/projects/:id/releases', 'Make and freeze a numbered bundle of a code', {
     body: newReleaseSchema,
@@ -128,6 +154,7 @@ export const endpoints = {
   }),
   getRelease: endpoint('GET', '/releases/:id', 'A release, its files and its manifest', {
     response: releaseSheetSchema,
+    scopes: ['read', 'release:read'],
   }),
   endRelease: endpoint('POST', '/releases/:id/endings', 'Supersede or withdraw a release, with a reason', {
     body: newEndingSchema,
@@ -136,11 +163,30 @@ export const endpoints = {
   }),
   rebuildRelease: endpoint('POST', '/releases/:id/rebuild', 'Make the bundle again and compare its digest', {
     response: rebuildSchema,
+    scopes: ['read', 'release:read'],
   }),
-  getReleaseFile: endpoint(
-    'GET',
-    '/releases/:id/files/:name',
-    'A file of a release, or its whole bundle, in ranges',
-    {},
-  ),
+  getReleaseFile: endpoint('GET', '/releases/:id/files/:name', 'A file of a release, or its whole bundle, in ranges', {
+    scopes: ['read', 'release:read'],
+  }),
+  getAccount: endpoint('GET', '/account', 'The account of whoever asks', {
+    response: z.object({ account: accountSchema }),
+  }),
+  patchAccount: endpoint('PATCH', '/account', 'Change the own name', {
+    body: accountPatchSchema,
+    response: z.object({ account: accountSchema }),
+  }),
+  putPassword: endpoint('PUT', '/account/password', 'Change the own password; other sessions end', {
+    body: newPasswordSchema,
+    response: passwordChangeSchema,
+  }),
+  listTokens: endpoint('GET', '/account/tokens', 'The own API tokens, newest first', {
+    response: z.object({ tokens: z.array(tokenSchema) }),
+    scopes: [],
+  }),
+  createToken: endpoint('POST', '/account/tokens', 'Make an API token; its secret is in this answer only', {
+    body: newTokenSchema,
+    response: z.object({ token: tokenSchema, secret: z.string() }),
+    success: [201],
+  }),
+  revokeToken: endpoint('DELETE', '/account/tokens/:id', 'End one of the own API tokens at once', { success: [204] }),
 } as const;

@@ -85,3 +85,14 @@ export const runPatchSchema = z.strictObject({
   state: z.enum(['running', 'paused', 'stopped']).optional(),
   name: z.string().trim().min(1).max(120).optional(),
 });
+
+export const pointsQueryParams = z.object({
+  after: z.string().optional(),
+  limit: z.coerce.number().int().min(1).max(500).optional(),
+  /** JSON comes in pages; CSV is the whole list. Without it the Accept header chooses. */
+  format: z.enum(['json', 'csv']).optional(),
+});
+const secondsAccepted = 'a whole number of seconds from 0 to 60';
+export const waitQueryParams = z.object({
+  seconds: z.coerce.number(secondsAccepted).int(secondsAccepted).min(0, secondsAccepted).max(60, secondsAccepted),
+});

@@ -1,3 +1,4 @@
+import { csvLine } from '@/api/csv-line.ts';
 import type { RunState } from '@/api/runs.ts';
 import { type Curve, type CurvePoint, type Estimate, isThin } from './curve.ts';
 import { decoderText } from './decoder-text.ts';
@@ -72,14 +73,8 @@ const digits = (x: number): string => String(Number(x.toPrecision(8)));
 const markOf = (point: CurvePoint): string =>
   point.frameErrors === 0 ? 'no error seen, upper limit only' : isThin(point) ? 'thin' : '';
 
-/** RFC 4180 text, lines ended by CR LF. A cell that a spreadsheet would run as a formula is led by an apostrophe. */
-export const csvText = (rows: readonly (readonly string[])[]): string =>
-  rows.map((row) => `${row.map(csvCell).join(',')}\r\n`).join('');
-
-function csvCell(text: string): string {
-  const safe = /^[=+\-@\t\r]/.test(text) && Number.isNaN(Number(text)) ? `'${text}` : text;
-  return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
-}
+/** A whole CSV file. */
+export const csvText = (rows: readonly (readonly string[])[]): string => rows.map(csvLine).join('');
 
 /** For the clipboard: cells parted by tabs, as spreadsheets paste them. */
 export const tabbedText = (rows: readonly (readonly string[])[]): string =>

@@ -5,6 +5,7 @@ import { defineConfig } from 'auth-astro';
 import { authSecret, isProduction } from '../config.ts';
 import { nowText } from '../context.ts';
 import { database } from '../db/database.ts';
+import { clientAddressOf } from '../http/client-address.ts';
 import { deleteExpiredSessions, deleteSession, insertSession } from '../repositories/sessions.ts';
 import { userOfSession } from '../repositories/users.ts';
 import { sessionSeconds } from './session-lifetime.ts';
@@ -29,7 +30,7 @@ export default defineConfig({
     Credentials({
       credentials: { email: {}, password: { type: 'password' } },
       async authorize(input, request) {
-        const address = request.headers.get('x-client-address') ?? 'unknown';
+        const address = clientAddressOf(request);
         const answer = await signIn(database(), input, address);
         if ('user' in answer) return answer.user;
         if (answer.refused === 'slow-down') throw new SlowDown(answer.waitMs);

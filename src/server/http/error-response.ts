@@ -16,6 +16,7 @@ export function errorResponse(error: unknown, where: string): Response {
   const body: { error: ApiError } = { error: { code, message, ...detail } };
   const headers: Record<string, string> = { 'Cache-Control': 'no-store' };
   if (status === 503 || status === 429) headers['Retry-After'] = retryAfterSeconds;
+  if (status === 401) headers['WWW-Authenticate'] = 'Bearer realm="Blockwright"';
   return Response.json(body, { status, headers });
 }
 

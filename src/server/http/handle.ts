@@ -1,6 +1,7 @@
 import type { APIContext, APIRoute } from 'astro';
 import type { z } from 'zod';
 import type { Endpoint } from '@/api/endpoint.ts';
+import { type Admission, demandScope } from '../auth/identity.ts';
 import type { Context } from '../context.ts';
 import { database } from '../db/database.ts';
 import { Refusal } from '../refusal.ts';
@@ -13,6 +14,7 @@ export interface Call<E extends Endpoint> extends Context {
   query: z.output<E['query']>;
   body: z.output<E['body']>;
   request: Request;
+  by: Admission;
 }
 
 type Answer<E extends Endpoint> = z.input<E['response']> | Response | Reply<E>;
@@ -27,7 +29,8 @@ export class Reply<E extends Endpoint> {
 
 const usualBodyLimitBytes = 1024 * 1024;
 
-/** A route: parses by the endpoint's schemas, demands a signed-in caller, lets `work` call its use case, and answers
+/** A route: parses by the endpoint's schemas, demands a signed-in caller or a token of the right
+ *  scope, lets `work` call its use case, and answers
  *  in the interface's shapes only. Rights to the object are the use case's to check. */
 export function handle<E extends Endpoint>(
   endpoint: E,
@@ -49,7 +52,8 @@ async function parse<E extends Endpoint>(
   { request, url, params, locals }: APIContext,
   bodyLimitBytes: number,
 ): Promise<Call<E>> {
-  if (!locals.user) throw new Refusal('unauthenticated', 'Sign in first.');
+  if (!locals.user || !locals.by) throw new Refusal('unauthenticated', 'Sign in first, or send a token.');
+  demandScope(endpoint, locals.by);
   const query = endpoint.query.parse(Object.fromEntries(url.searchParams));
   const takesBody = endpoint.method !== 'GET' && endpoint.method !== 'DELETE';
   const body = takesBody ? endpoint.body.parse(await readJson(request, bodyLimitBytes)) : undefined;
@@ -60,6 +64,7 @@ async function parse<E extends Endpoint>(
     query: query as z.output<E['query']>,
     body: body as z.output<E['body']>,
     request,
+    by: locals.by,
   };
 }
 

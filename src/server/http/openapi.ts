@@ -25,17 +25,26 @@ export function openApiDocument(): Json {
       schemas: { Error: jsonSchema(errorSchema, 'output') },
       securitySchemes: {
         session: { type: 'apiKey', in: 'cookie', name: 'authjs.session-token', description: "A browser's session." },
+        token: { type: 'http', scheme: 'bearer', description: tokenDescription },
       },
     },
     security: [{ session: [] }],
   };
 }
 
+const tokenDescription =
+  'An API token of an account page, sent as `Authorization: Bearer <token>`. Beside each operation stand the scopes of ' +
+  'which a token needs one; an operation that names none takes a session only.';
+
+/** A session always opens it; a token with any one of the endpoint's scopes does too. */
+const security = ({ scopes }: Endpoint): Json[] => [{ session: [] }, ...scopes.map((scope) => ({ token: [scope] }))];
+
 function operation(operationId: string, endpoint: Endpoint): Json {
   const body = jsonSchema(endpoint.body, 'input');
   return {
     operationId,
     summary: endpoint.summary,
+    security: security(endpoint),
     parameters: [...pathParameters(endpoint.path), ...queryParameters(endpoint.query)],
     ...(hasContent(body) && { requestBody: { required: true, content: { 'application/json': { schema: body } } } }),
     responses: { ...successes(endpoint), default: refused },
@@ -49,7 +58,8 @@ const refused = {
 
 function successes(endpoint: Endpoint): Json {
   const schema = jsonSchema(endpoint.response, 'output');
-  const content = fileTypes[endpoint.path] ?? (hasContent(schema) ? { 'application/json': { schema } } : undefined);
+  const json = hasContent(schema) ? { 'application/json': { schema } } : undefined;
+  const content = json || fileTypes[endpoint.path] ? { ...json, ...fileTypes[endpoint.path] } : undefined;
   return Object.fromEntries(
     endpoint.success.map((status) => [status, { description: endpoint.summary, ...(content && { content }) }]),
   );
@@ -64,6 +74,7 @@ const fileTypes: Record<string, Json> = {
       { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } },
     ]),
   ),
+  '/runs/:id/points': { 'text/csv': { schema: { type: 'string' } } },
   '/codes/:id/matrix': { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } },
 };
 

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { pointSchema, runSchema } from '@/api/runs.ts';
+import { identify } from '../auth/identity.ts';
 import type { Context } from '../context.ts';
 import { runEvents } from '../events/run-events.ts';
 import { getRun } from '../use-cases/runs/get-run.ts';
@@ -13,7 +14,8 @@ const heartbeatMs = 15_000;
 /** Server-sent events of one run: its state at once, then after each commit that changes it, at most four a second.
  *  An event is the state, not a step, so `Last-Event-ID` needs no replay: whoever reconnects gets the present state.
  *  Rights are checked afresh for every event. */
-export function runEventStream(context: Context, runId: string, signal: AbortSignal): ReadableStream<Uint8Array> {
+export function runEventStream(context: Context, runId: string, request: Request): ReadableStream<Uint8Array> {
+  const { signal } = request;
   const encoder = new TextEncoder();
   const told = new Map<string, string>();
   let end = () => {};
@@ -24,6 +26,8 @@ export function runEventStream(context: Context, runId: string, signal: AbortSig
       const tell = async () => {
         settling = undefined;
         try {
+          // The session may have ended and the token been revoked since.
+          if (!(await identify(context.db, request))) return end();
           const { run, points } = await getRun(context, runId);
           const changed = points.filter((point) => told.get(point.id) !== progressOf(point));
           for (const point of changed) told.set(point.id, progressOf(point));

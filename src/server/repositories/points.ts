@@ -2,6 +2,7 @@ import type { Channel } from '@/core/channels/channel.ts';
 import type { DecoderSpec } from '@/core/decoders/decoder-spec.ts';
 import type { Tally } from '@/core/simulation/tally.ts';
 import type { Database } from '../db/database.ts';
+import type { PageRequest } from './paging.ts';
 import type { Row } from './row.ts';
 import { type TallyColumns, tallyFromColumns, tallyToColumns } from './tally-columns.ts';
 
@@ -47,6 +48,16 @@ const shown = (db: Database) =>
 
 export async function pointsOfRun(db: Database, runId: string): Promise<StoredPoint[]> {
   return (await shown(db).where('points.run_id', runId).orderBy('points.position')).map(toPoint);
+}
+
+/** Points of a run in their order, from the one after `after` on. */
+export async function pointsOfRunPage(db: Database, runId: string, page: PageRequest): Promise<StoredPoint[]> {
+  const query = shown(db).where('points.run_id', runId).orderBy('points.position').limit(page.limit);
+  if (page.after) {
+    const before = db('points').where({ run_id: runId, id: page.after }).select('position');
+    query.where('points.position', '>', before);
+  }
+  return (await query).map(toPoint);
 }
 
 /** Those of the ids that are points of the run. */

@@ -16,6 +16,10 @@ export async function deleteSession(db: Database, id: string): Promise<void> {
   await db('sessions').where({ id }).delete();
 }
 
+/** Ends a person's sessions but one. @returns how many there were. */
+export const deleteOtherSessions = (db: Database, userId: string, keptId: string): Promise<number> =>
+  db('sessions').where({ user_id: userId }).whereNot({ id: keptId }).delete();
+
 export async function deleteExpiredSessions(db: Database, now: string): Promise<void> {
   await db('sessions').where('expires_at', '<=', now).delete();
 }

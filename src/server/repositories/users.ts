@@ -45,6 +45,14 @@ export async function userOfSession(db: Database, sessionId: string, now: string
     .first<Caller>(callerColumns);
 }
 
+export async function renameUser(db: Database, id: string, name: string): Promise<void> {
+  await db('users').where({ id }).update({ name });
+}
+
+export async function setPasswordHash(db: Database, id: string, passwordHash: string): Promise<void> {
+  await db('users').where({ id }).update({ password_hash: passwordHash });
+}
+
 export async function anyUser(db: Database): Promise<boolean> {
   return (await db('users').first('id')) !== undefined;
 }
