@@ -103,11 +103,13 @@ export const catalogueAnswerSchema = z.object({
   obstacles: z.array(z.object({ rule: z.string(), statement: z.string(), source: z.unknown() })),
 });
 
+const within = (min: number, max: number, words: string) => z.int(words).min(min, words).max(max, words);
+
 export const feasibilityQuerySchema = z.strictObject({
-  t: z.int('a whole number from 1 to 8'),
-  v: z.int('a whole number from 2 to 1 000 000'),
-  k: z.int('a whole number from t to v'),
-  lambda: z.int('a whole number from 1'),
+  t: within(1, 8, 'a whole number from 1 to 8'),
+  v: within(2, 1_000_000, 'a whole number from 2 to 1 000 000'),
+  k: within(1, 1_000_000, 'a whole number from t to v'),
+  lambda: within(1, 1e9, 'a whole number from 1 to 10^9'),
   resolvable: z.boolean().optional(),
 });
 
