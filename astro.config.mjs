@@ -32,7 +32,11 @@ const nodeWorkers = {
           target: 'node20',
           outDir: here('./dist/server/workers'),
           rollupOptions: {
-            input: { build: here('./workers/build/node.ts'), files: here('./workers/files/node.ts') },
+            input: {
+              build: here('./workers/build/node.ts'),
+              files: here('./workers/files/node.ts'),
+              upload: here('./workers/upload/node.ts'),
+            },
             output: { entryFileNames: '[name].mjs' },
           },
         },

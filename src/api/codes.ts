@@ -18,6 +18,12 @@ export const derivationSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('constant-weight'), complement: z.boolean().optional() }),
 ]);
 
+/** How a kept code's matrix came from its design or, of an uploaded one, from the file. */
+const keptDerivationSchema = z.discriminatedUnion('kind', [
+  ...derivationSchema.options,
+  z.strictObject({ kind: z.literal('matrix'), checksAre: z.enum(['rows', 'columns']) }),
+]);
+
 export const newCodeSchema = z.strictObject({
   name: z.string().trim().min(1).max(120).optional(),
   design: designSpecSchema,
@@ -73,9 +79,9 @@ export const codeSchema = z.object({
   projectId: z.string(),
   name: z.string(),
   design: designSpecSchema,
-  /** The design in words: "projective plane, q = 16". */
+  /** The design in words: "Projective plane PG(2,16)". */
   designTitle: z.string(),
-  derivation: derivationSchema,
+  derivation: keptDerivationSchema,
   n: z.number(),
   k: z.number(),
   rows: z.number(),

@@ -16,6 +16,8 @@ export interface Endpoint<
   response: R;
   /** Statuses of success, the usual one first. */
   success: readonly number[];
+  /** What the body is: JSON by the schema, or a file as it is. */
+  takes: 'json' | 'file';
   /** Any one of these lets a token in; with none, only a session does. */
   scopes: readonly Scope[];
 }
@@ -32,7 +34,14 @@ export function endpoint<
   method: Endpoint['method'],
   path: string,
   summary: string,
-  shapes: { query?: Q; body?: B; response?: R; success?: readonly number[]; scopes?: readonly Scope[] },
+  shapes: {
+    query?: Q;
+    body?: B;
+    response?: R;
+    success?: readonly number[];
+    takes?: 'json' | 'file';
+    scopes?: readonly Scope[];
+  },
 ): Endpoint<Q, B, R> {
   return {
     method,
@@ -42,6 +51,7 @@ export function endpoint<
     body: shapes.body ?? (nothing as unknown as B),
     response: shapes.response ?? (nothing as unknown as R),
     success: shapes.success ?? [200],
+    takes: shapes.takes ?? 'json',
     scopes: shapes.scopes ?? (method === 'GET' ? ['read'] : []),
   };
 }

@@ -11,6 +11,7 @@ import { endpoint } from './endpoint.ts';
 import { newProjectSchema, projectSchema, requirementsSchema } from './projects.ts';
 import {
   blockFormSchema,
+  codeFormsSchema,
   generatorFormSchema,
   newEndingSchema,
   newReleaseSchema,
@@ -30,6 +31,7 @@ import {
   waitQueryParams,
 } from './runs.ts';
 import { newTokenSchema, tokenSchema } from './tokens.ts';
+import { uploadQueryParams } from './uploads.ts';
 
 const page = { after: z.string().optional(), limit: z.coerce.number().int().min(1).max(500).optional() };
 const storedRequirements = z.object({ requirements: requirementsSchema.nullable(), updatedAt: z.string().nullable() });
@@ -73,6 +75,12 @@ export const endpoints = {
     success: [201, 202],
     scopes: ['run'],
   }),
+  uploadCode: endpoint('POST', '/projects/:id/uploads', 'Keep the code that a matrix or block-list file holds', {
+    takes: 'file',
+    query: uploadQueryParams,
+    response: z.object({ code: codeSchema }),
+    success: [201],
+  }),
   getJob: endpoint('GET', '/jobs/:id', 'How a long piece of work stands', { response: z.object({ job: jobSchema }) }),
   getCode: endpoint('GET', '/codes/:id', 'One code with its properties', { response: z.object({ code: codeSchema }) }),
   deleteCode: endpoint('DELETE', '/codes/:id', 'Remove a code that no run uses', { success: [204] }),
@@ -87,6 +95,9 @@ export const endpoints = {
       response: z.looseObject({ fingerprint: z.string() }),
     },
   ),
+  getForms: endpoint('GET', '/codes/:id/forms', 'The files that the code can be given as', {
+    response: codeFormsSchema,
+  }),
   getBlocks: endpoint('GET', '/codes/:id/blocks', 'The block list of the design as a file', {
     query: z.strictObject({ form: blockFormSchema }),
   }),

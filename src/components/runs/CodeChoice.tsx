@@ -20,7 +20,7 @@ const FILTER_FROM = 12;
 /** The kept codes, any number of which are measured. */
 export function CodeChoice({ projectId, codes, chosen, error, onChange }: Props) {
   const [filter, setFilter] = useState('');
-  const measurable = codes.filter((code) => code.derivation.kind === 'ldpc');
+  const measurable = codes.filter((code) => code.derivation.kind !== 'constant-weight');
   const shown = measurable.filter((code) =>
     `${code.name} ${code.designTitle} ${code.n} ${code.k}`.toLowerCase().includes(filter.toLowerCase()),
   );

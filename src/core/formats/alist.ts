@@ -116,8 +116,9 @@ function readLists(scan: TextScanner, weights: Uint32Array, width: number, limit
     if (weights[i]! > 0) scan.atEnd();
     else scan.nextLineIfAtEnd();
     const entries = colIndex.subarray(rowStart[i], rowStart[i + 1]);
+    const anEntry = `one of ${entries.length} entries of ${what} ${i + 1}, from 1 to ${limit}`;
     for (let j = 0; j < entries.length; j++) {
-      const entry = scan.number(`entry ${j + 1} of ${entries.length} of ${what} ${i + 1}, from 1 to ${limit}`, false);
+      const entry = scan.number(anEntry, false);
       if (entry < 1 || entry > limit)
         throw scan.error(`an index from 1 to ${limit} in ${what} ${i + 1}; indices count from 1`, String(entry));
       entries[j] = entry - 1;

@@ -46,10 +46,13 @@ export function readMatrixMarket(file: FileBytes): SparseMatrix {
   if (rows === 0 || cols === 0) throw scan.error('at least one row and one column', `${rows} × ${cols}`);
   if (4 * ones > sizeOf(file)) throw scan.error('as many entries as the file has room for', String(ones));
   const entries = new EntryList();
+  // Said once: a sentence an entry would take longer than the entries.
+  const aRow = `one of ${ones} entries: a row from 1 to ${rows}`;
+  const aColumn = `a column from 1 to ${cols}`;
   for (let e = 0; e < ones; e++) {
     while (!scan.atEnd() && scan.peek() === 37) scan.restOfLine();
-    const row = inRange(scan, scan.number(`entry ${e + 1} of ${ones}: a row from 1 to ${rows}`), rows, 'row');
-    const col = inRange(scan, scan.number(`a column from 1 to ${cols}`, false), cols, 'column');
+    const row = inRange(scan, scan.number(aRow), rows, 'row');
+    const col = inRange(scan, scan.number(aColumn, false), cols, 'column');
     const value = hasValues ? scan.number('a value 0 or 1', false) : 1;
     if (value > 1) throw scan.error('a value 0 or 1', String(value));
     if (!scan.atLineEnd()) throw scan.error('the end of the line', scan.tokenAt());

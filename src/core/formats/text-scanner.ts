@@ -13,6 +13,7 @@ export class TextScanner {
   /** The part of the file in hand, and where in the file it begins. */
   private bytes: Uint8Array;
   private base = 0;
+  private buffer: Uint8Array | undefined;
   /** Place in `bytes`. */
   private at: number;
   /** Place in the file. */
@@ -145,16 +146,15 @@ export class TextScanner {
   private moveOn(): boolean {
     if (this.file instanceof Uint8Array) return false;
     const next = this.base + this.bytes.length;
-    const fresh = bytesFrom(this.file, next, WINDOW);
-    if (fresh.length === 0) return false;
     const kept = this.bytes.subarray(Math.max(0, this.bytes.length - KEPT));
-    const moved = new Uint8Array(kept.length + fresh.length);
-    moved.set(kept);
-    moved.set(fresh, kept.length);
-    this.bytes = moved;
+    // One buffer for the whole file: memory that is let go of a megabyte at a time piles up before it is reclaimed.
+    this.buffer ??= new Uint8Array(KEPT + WINDOW);
+    this.buffer.set(kept);
+    const got = this.file.read(next, this.buffer.subarray(kept.length));
+    this.bytes = this.buffer.subarray(0, kept.length + got);
     this.base = next - kept.length;
     this.at = kept.length;
-    return true;
+    return got > 0;
   }
 }
 

@@ -24,8 +24,8 @@ export type Seeder = (db: Database) => Promise<boolean>;
 
 let readiness: Promise<void> | undefined;
 
-/** Resolves when the database is migrated, the demo seeded (local mode, empty database) and interrupted jobs are
- *  taken up. After a failure the next request tries again. */
+/** Resolves when the database is migrated, the demo seeded (local mode, empty database) interrupted jobs are taken
+ *  up and half received files removed. After a failure the next request tries again. */
 export function ready(seedDemo: Seeder): Promise<void> {
   readiness ??= prepare(seedDemo).catch((error) => {
     readiness = undefined;
@@ -43,4 +43,6 @@ async function prepare(seedDemo: Seeder): Promise<void> {
   if (!isProduction() && (await seedDemo(db))) console.log('Seeded the demo projects.');
   const { redoInterruptedJobs } = await import('../use-cases/jobs/redo-interrupted-jobs.ts');
   await redoInterruptedJobs(db);
+  const { removeLeftovers } = await import('../files/receive-file.ts');
+  await removeLeftovers();
 }

@@ -55,7 +55,7 @@ async function parse<E extends Endpoint>(
   if (!locals.user || !locals.by) throw new Refusal('unauthenticated', 'Sign in first, or send a token.');
   demandScope(endpoint, locals.by);
   const query = endpoint.query.parse(Object.fromEntries(url.searchParams));
-  const takesBody = endpoint.method !== 'GET' && endpoint.method !== 'DELETE';
+  const takesBody = endpoint.takes === 'json' && endpoint.method !== 'GET' && endpoint.method !== 'DELETE';
   const body = takesBody ? endpoint.body.parse(await readJson(request, bodyLimitBytes)) : undefined;
   return {
     db: database(),

@@ -47,9 +47,12 @@ function operation(operationId: string, endpoint: Endpoint): Json {
     security: security(endpoint),
     parameters: [...pathParameters(endpoint.path), ...queryParameters(endpoint.query)],
     ...(hasContent(body) && { requestBody: { required: true, content: { 'application/json': { schema: body } } } }),
+    ...(endpoint.takes === 'file' && { requestBody: { required: true, content: aFile } }),
     responses: { ...successes(endpoint), default: refused },
   };
 }
+
+const aFile = { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } };
 
 const refused = {
   description: 'Refused; `fields` names each bad field and what is accepted.',
@@ -71,11 +74,11 @@ const fileTypes: Record<string, Json> = {
   ...Object.fromEntries(
     ['/codes/:id/blocks', '/codes/:id/generator', '/codes/:id/vectors', '/releases/:id/files/:name'].map((path) => [
       path,
-      { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } },
+      aFile,
     ]),
   ),
   '/runs/:id/points': { 'text/csv': { schema: { type: 'string' } } },
-  '/codes/:id/matrix': { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } },
+  '/codes/:id/matrix': aFile,
 };
 
 const pathParameters = (path: string): Json[] =>

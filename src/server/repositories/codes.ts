@@ -14,7 +14,7 @@ export interface NewCodeRow extends Analysis {
   name: string;
   design: NewCode['design'];
   designTitle: string;
-  derivation: NewCode['derivation'];
+  derivation: Code['derivation'];
   n: number;
   k: number;
   H: SparseMatrix;

@@ -17,6 +17,10 @@ function derivationRows(derivation: Code['derivation']): TitleRow[] {
   if (derivation.kind === 'constant-weight') {
     return [{ label: 'Words', value: derivation.complement ? 'complements of the blocks' : 'the blocks' }];
   }
+  if (derivation.kind === 'matrix') {
+    const note = derivation.checksAre === 'rows' ? undefined : 'turned over when it was read';
+    return [{ label: 'Matrix', value: `as uploaded, its ${derivation.checksAre} are the checks`, note }];
+  }
   const steps = derivation.transforms ?? [];
   return [
     {
