@@ -27,7 +27,13 @@ export const projectSchema = z.object({
   role: projectRoleSchema,
   createdAt: z.string(),
   /** State of the seven steps, for the ruler. */
-  counts: z.object({ requirements: z.number(), codes: z.number(), runs: z.number(), runsUnderWay: z.number() }),
+  counts: z.object({
+    requirements: z.number(),
+    codes: z.number(),
+    runs: z.number(),
+    runsUnderWay: z.number(),
+    releases: z.number(),
+  }),
 });
 export type Project = z.infer<typeof projectSchema>;
 

@@ -33,6 +33,16 @@ export const vectorQueryParams = z.strictObject({
   decoders: jsonText(decodersSchema),
 });
 
+const formSchema = z.object({ id: z.string(), title: z.string() });
+
+/** The files that a code can be given as: a shift table needs circulants, a block list a design, and so on. */
+export const codeFormsSchema = z.object({
+  formats: z.array(formSchema.extend({ id: matrixFormatSchema })),
+  generators: z.array(formSchema.extend({ id: generatorFormSchema })),
+  blocks: z.array(formSchema.extend({ id: blockFormSchema })),
+});
+export type CodeForms = z.infer<typeof codeFormsSchema>;
+
 /** What a release gives of its code. */
 export const releaseContentsSchema = z.strictObject({
   formats: z.array(matrixFormatSchema).min(1, 'at least one matrix format').max(9),

@@ -68,7 +68,7 @@ async function send<E extends Endpoint>(endpoint: E, input: CallInput<E>): Promi
   }
 }
 
-async function failureFrom(response: Response): Promise<ApiFailure> {
+export async function failureFrom(response: Response): Promise<ApiFailure> {
   const parsed = errorSchema.safeParse(await response.json().catch(() => null));
   if (!parsed.success) return new ApiFailure(response.status, 'unexpected', `The server answered ${response.status}.`);
   const { code, message, fields, reason } = parsed.data.error;

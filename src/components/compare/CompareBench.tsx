@@ -9,6 +9,7 @@ import { ErrorRateChart } from '../charts/error-rate-chart/ErrorRateChart.tsx';
 import { INTERVAL_METHOD } from '../charts/interval-method.ts';
 import { RequirementTable } from '../charts/RequirementTable.tsx';
 import { requirementOf } from '../charts/requirement.ts';
+import { runsText } from '../charts/runs-text.ts';
 import { useUrlParam } from '../charts/url-state.ts';
 import { useChartAddress } from '../charts/use-chart-address.ts';
 import { Caution } from '../runs/Caution.tsx';
@@ -51,6 +52,7 @@ export function CompareBench({ runs, curves, requirements }: Props) {
           curves={chosen}
           requirement={requirement}
           intervalMethod={INTERVAL_METHOD[kind]}
+          provenance={runsText(runs.filter(({ id }) => plain.some(({ runId }) => runId === id)))}
         />
       </div>
       <div className="grid min-w-0 content-start gap-5 ">

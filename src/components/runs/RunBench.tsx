@@ -14,6 +14,7 @@ import { INTERVAL_METHOD } from '../charts/interval-method.ts';
 import { RequirementTable } from '../charts/RequirementTable.tsx';
 import { levelText } from '../charts/rate-text.ts';
 import { requirementOf } from '../charts/requirement.ts';
+import { runsText } from '../charts/runs-text.ts';
 import { useUrlParam } from '../charts/url-state.ts';
 import { useChartAddress } from '../charts/use-chart-address.ts';
 import { Caution } from './Caution.tsx';
@@ -70,6 +71,7 @@ export function RunBench({ projectId, run, points, panel }: Props) {
           planned={planned}
           requirement={requirement}
           intervalMethod={INTERVAL_METHOD[address.kind]}
+          provenance={runsText([run])}
           onChoose={setSelectedId}
         />
       </div>

@@ -40,7 +40,12 @@ export function stationsOf(project: Pick<Project, 'id' | 'counts'>): Station[] {
       href: paths.compare(id),
     },
     { step: 'sign-off', label: 'Sign-off', state: 'to come' },
-    { step: 'release', label: 'Release', state: 'to come' },
+    {
+      step: 'release',
+      label: 'Release',
+      state: counts.releases === 0 ? 'none yet' : `${counts.releases} frozen`,
+      href: paths.releases(id),
+    },
   ];
 }
 

@@ -1,5 +1,5 @@
-import { cyclicGenerator } from '../codes/encode/generator-polynomial.ts';
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import { cyclicGenerators } from '../gf2/cyclic.ts';
 import { writeGeneratorCirculants } from './generator-circulants.ts';
 import { writeGeneratorPolynomial } from './generator-polynomial.ts';
 import { writeGeneratorSystematic } from './generator-systematic.ts';
@@ -20,7 +20,7 @@ export const generatorForms: readonly GeneratorForm[] = [
     id: 'polynomial',
     title: 'generator polynomial',
     extension: 'polynomial.txt',
-    writes: (H) => cyclicGenerator(H) !== null,
+    writes: (H) => cyclicGenerators(H) !== null,
     write: writeGeneratorPolynomial,
   },
   {

@@ -6,7 +6,7 @@ import { readCsv, writeCsv } from './csv.ts';
 import { readJson, writeJson } from './json.ts';
 import { readMat, writeMat } from './mat.ts';
 import { readMatrixMarket, writeMatrixMarket } from './matrix-market.ts';
-import { readNpy, writeNpy } from './npy.ts';
+import { maxDenseCells, readNpy, writeNpy } from './npy.ts';
 import { readNpz, writeNpz } from './npz.ts';
 import { circulantBlockSize, readQuasiCyclic, writeQuasiCyclic } from './quasi-cyclic.ts';
 
@@ -62,6 +62,7 @@ export const matrixFormats: readonly MatrixFormatCodec[] = [
     title: 'NumPy dense .npy',
     extension: 'npy',
     mediaType: 'application/octet-stream',
+    writes: (H) => H.rows * H.cols <= maxDenseCells,
     write: writeNpy,
     read: readNpy,
   },

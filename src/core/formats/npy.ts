@@ -3,7 +3,7 @@ import { FormatError, LimitError } from '../errors.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 
 /** Cells that a dense file may have: 2^28, one byte each. */
-const maxDenseCells = 2 ** 28;
+export const maxDenseCells = 2 ** 28;
 
 /** An array as NumPy's .npy holds it (format 1.0): shape, element type, and the bytes of its elements. */
 export interface NpyArray {

@@ -46,7 +46,8 @@ function sharedWith(db: Database, userId: string) {
     .where('memberships.user_id', userId)
     .select('projects.*', 'memberships.role as member_role')
     .select(countOf('requirements', 'requirement_count'), countOf('codes', 'code_count'), countOf('runs', 'run_count'))
-    .select(countOf('runs', 'open_run_count').where('runs.state', 'running'));
+    .select(countOf('runs', 'open_run_count').where('runs.state', 'running'))
+    .select(countOf('releases', 'release_count'));
 }
 
 function toProject(row: Row): Project {
@@ -62,6 +63,7 @@ function toProject(row: Row): Project {
       codes: row.code_count!,
       runs: row.run_count!,
       runsUnderWay: row.open_run_count!,
+      releases: row.release_count!,
     },
   };
 }

@@ -19,6 +19,7 @@ function show(points: Point[], more: Partial<ErrorRateChartProps> = {}) {
     zoom: null,
     onZoom: vi.fn(),
     intervalMethod: 'Clopper–Pearson',
+    provenance: 'Computed by Blockwright.',
     ...more,
   };
   const { container } = render(<ErrorRateChart {...props} />);

@@ -1,6 +1,8 @@
 import { useMemo, useRef } from 'react';
 import type { RateKind } from '@/client/curves/curve.ts';
+import { uncodedFormula } from '@/client/curves/uncoded.ts';
 import type { ChartCurve } from '../chart-curve.ts';
+import { type ChartFile, keepChart } from '../export/keep-chart.ts';
 import { levelText } from '../rate-text.ts';
 import { ChartTools } from './ChartTools.tsx';
 import { useChartModel } from './chart-model.ts';
@@ -28,6 +30,8 @@ export interface ErrorRateChartProps {
   planned?: readonly number[];
   /** How the intervals of this rate were computed. */
   intervalMethod: string;
+  /** Runs and seeds the points are from; stands under the chart in files. */
+  provenance: string;
   /** A point was picked by click, tap or key. */
   onChoose?: (pointId: string) => void;
 }
@@ -41,10 +45,16 @@ export function ErrorRateChart(props: ErrorRateChartProps) {
   const reading = useChartReading(svg, model, props);
   const { active } = reading;
   const description = useMemo(() => describeChart(model), [model]);
+  const caption = intervalCaption(curves, props.intervalMethod);
+  const keep = (file: ChartFile) => {
+    const shown = curves.filter(({ curve }) => !props.hidden.has(curve.key));
+    const key = `${markWords(caption)}; ${uncodedFormula(kind)}.`;
+    return keepChart(svg.current!, { title, curves: shown, key, provenance: props.provenance }, file);
+  };
 
   return (
     <figure className="min-w-0 border border-rule bg-sheet px-2 pt-2 pb-3 sm:px-4" data-chart="error-rate">
-      <ChartTools {...props} onMagnify={reading.onMagnify} />
+      <ChartTools {...props} onMagnify={reading.onMagnify} onKeep={keep} />
       {/* biome-ignore lint/a11y/useSemanticElements: a fieldset groups form controls, this groups a drawing's points */}
       <div
         ref={box}
@@ -73,11 +83,15 @@ export function ErrorRateChart(props: ErrorRateChartProps) {
       </div>
       <figcaption className="mt-2 grid gap-1.5 px-1">
         <Legend curves={curves} hidden={props.hidden} onToggle={props.onToggle} />
-        <MarkKey interval={intervalCaption(curves, props.intervalMethod)} kind={kind} />
+        <MarkKey interval={caption} kind={kind} />
       </figcaption>
     </figure>
   );
 }
+
+/** The key of marks in words, for a file, where they are drawn in the chart alone. */
+const markWords = (interval: string) =>
+  `Bars: interval, ${interval}; open circles: fewer than 100 frame errors; open arrows: no error seen, the rate is below the bar; thin lines`;
 
 function intervalCaption(curves: readonly ChartCurve[], method: string): string {
   const level = curves.flatMap(({ curve }) => curve.points.slice(0, 1)).at(0)?.level;
