@@ -1,9 +1,8 @@
-import type { BlockDesign, DesignSpec } from '../designs/block-design.ts';
+import type { DesignSpec } from '../designs/block-design.ts';
+import { certify, type TimedCertificate } from '../designs/certify.ts';
 import { buildDesign, predictDesign } from '../designs/design.ts';
 import { designTitle } from '../designs/design-title.ts';
 import type { DesignPrediction } from '../designs/family.ts';
-import { type DesignCertificate, verifyDesign } from '../designs/verify.ts';
-import { verifyPartialLinear } from '../designs/verify-partial-linear.ts';
 import { ParamError } from '../errors.ts';
 import { analyseLdpc } from './analyse-ldpc.ts';
 import { deriveLdpc, type LdpcCode, type Transform } from './ldpc.ts';
@@ -17,9 +16,6 @@ export interface SheetRequest {
 }
 
 export type SheetStep = 'build' | 'verify' | 'derive' | 'analyse';
-
-/** A certificate with the time it took. */
-export type TimedCertificate = DesignCertificate & { elapsedMs: number };
 
 /** A code with all that is known of it, ready to be kept and shown. */
 export interface CodeSheet {
@@ -55,15 +51,6 @@ export function codeSheet(
   const code = deriveLdpc(design, request.derivation);
   onStep?.('analyse');
   return { ...describeCode(code, prediction, clock), designTitle: designTitle(request.design), certificate };
-}
-
-function certify(design: BlockDesign, prediction: DesignPrediction, clock: () => number): TimedCertificate {
-  const from = clock();
-  const { t, lambda } = prediction;
-  const certificate = prediction.partialLinear
-    ? verifyPartialLinear(design, lambda)
-    : verifyDesign(design, { t, lambda });
-  return { ...certificate, elapsedMs: clock() - from };
 }
 
 function describeCode(code: LdpcCode, prediction: DesignPrediction, clock: () => number) {

@@ -1,4 +1,5 @@
 import type { BlockDesign } from '../designs/block-design.ts';
+import type { TimedCertificate } from '../designs/certify.ts';
 import type { DesignPrediction } from '../designs/family.ts';
 import { certifyUpload } from '../designs/upload.ts';
 import { ParamError } from '../errors.ts';
@@ -7,7 +8,7 @@ import type { UploadFormat } from '../formats/recognise.ts';
 import { analyseLdpc } from './analyse-ldpc.ts';
 import { deriveLdpc, type LdpcCode } from './ldpc.ts';
 import { propertiesOf } from './properties.ts';
-import type { CodeSheet, SheetStep, TimedCertificate } from './sheet.ts';
+import type { CodeSheet, SheetStep } from './sheet.ts';
 import { type SparseMatrix, transpose } from './sparse-matrix.ts';
 
 /** How a file is meant, as far as it cannot tell itself. */

@@ -27,12 +27,15 @@ export function completionTable(design: BlockDesign): Uint16Array {
 /** Number of Pasch configurations: four triples {a,b,c}, {a,y,z}, {x,b,z}, {x,y,c} on six points. They are the
  *  words of weight 4 of the code whose bits are the triples. Works on partial systems too.
  *  For every pair of triples {a,b,c}, {a,y,z} on a point a, the Pasches holding both are those with the third points
- *  of b,y and c,z, or of b,z and c,y, equal; each Pasch has six such pairs. */
-export function countPasches(design: BlockDesign): number {
+ *  of b,y and c,z, or of b,z and c,y, equal; each Pasch has six such pairs. `onProgress` is told the share done, a
+ *  hundred times at most. */
+export function countPasches(design: BlockDesign, onProgress?: (share: number) => void): number {
   const { v } = design;
   const third = completionTable(design);
   let found = 0;
+  const stride = Math.ceil(v / 100);
   for (let a = 0; a < v; a++) {
+    if (a % stride === 0) onProgress?.(a / v);
     const row = a * v;
     for (let b = 0; b < v; b++) {
       const c = third[row + b]!;

@@ -47,18 +47,17 @@ export function searchResolution(design: BlockDesign, options: ResolutionOptions
 
 /** Whether classes partition the blocks so that each partitions the points. */
 export function isResolution(design: BlockDesign, classes: ArrayLike<number>): boolean {
-  if (classes.length !== design.b) return false;
-  const met = new Set<number>();
-  let incidences = 0;
-  const ids = new Set<number>();
-  for (let i = 0; i < design.b; i++) {
-    ids.add(classes[i]!);
-    for (const p of blockOf(design, i)) {
-      met.add(classes[i]! * design.v + p);
-      incidences++;
-    }
+  const { v, b, blockPoints } = design;
+  if (classes.length !== b) return false;
+  const placeOf = new Map<number, number>();
+  for (let i = 0; i < b; i++) if (!placeOf.has(classes[i]!)) placeOf.set(classes[i]!, placeOf.size);
+  if (blockPoints.length !== placeOf.size * v) return false;
+  const met = new Uint8Array(blockPoints.length);
+  for (let i = 0; i < b; i++) {
+    const place = placeOf.get(classes[i]!)! * v;
+    for (const p of blockOf(design, i)) if (met[place + p]!++ > 0) return false;
   }
-  return met.size === incidences && incidences === ids.size * design.v;
+  return true;
 }
 
 function whyNone(design: BlockDesign): string | undefined {

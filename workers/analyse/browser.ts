@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { createAnalyseApi } from './analyse.ts';
+
+expose(createAnalyseApi());
