@@ -113,7 +113,7 @@ describe('a release', () => {
       ['greatest length', 'missed', 'computed'],
       ['least rate', 'met', 'computed'],
       ['structure', 'met', 'computed'],
-      ['target FER', 'undecided', 'sampled'],
+      ['target FER', 'undecided', 'bounded'],
     ]);
     expect(manifest.cautions[0]).toMatch(/Nobody has signed off/);
     expect((await getRelease(at.context, id)).manifest).toEqual(manifest);

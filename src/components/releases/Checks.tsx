@@ -22,7 +22,7 @@ export function Checks<Id extends string>({ legend, choices, chosen, error, onCh
               checked={chosen.includes(id)}
               onChange={(event) => toggle(id, event.target.checked)}
             />
-            <span className="inline-block first-letter:uppercase">{title}</span>
+            <span>{title}</span>
           </label>
         ))}
       </div>

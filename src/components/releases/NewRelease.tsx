@@ -66,7 +66,7 @@ export default function NewRelease({ projectId, codes, chosen }: Props) {
     >
       <Part title="Code">
         <SelectField
-          label="code"
+          label="kept in this project"
           value={codeId}
           onChange={(event) => setCodeId(event.target.value)}
           choices={codes.map(({ id, name }) => ({ value: id, label: name }))}
