@@ -2,6 +2,11 @@
 export const paths = {
   home: '/',
   signIn: '/sign-in',
+  account: '/account',
+  notices: '/account/notices',
+  mailOff: '/account/mail-off',
+  mailbox: '/mailbox',
+  letter: (id: string) => `/mailbox/${id}`,
   project: (id: string) => `/projects/${id}`,
   requirements: (id: string) => `/projects/${id}/requirements`,
   candidates: (id: string) => `/projects/${id}/candidates`,

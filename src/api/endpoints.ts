@@ -8,6 +8,14 @@ import {
 } from './catalogue.ts';
 import { codeSchema, jobSchema, matrixFormatSchema, newCodeSchema } from './codes.ts';
 import { endpoint } from './endpoint.ts';
+import {
+  deadLetterSchema,
+  noticeChoicesPatchSchema,
+  noticeChoicesSchema,
+  noticePatchSchema,
+  noticeSchema,
+  unreadSchema,
+} from './notices.ts';
 import { newProjectSchema, projectSchema, requirementsSchema } from './projects.ts';
 import {
   blockFormSchema,
@@ -24,6 +32,7 @@ import {
   newRunSchema,
   pointSchema,
   pointsQueryParams,
+  runEventsQueryParams,
   runPatchSchema,
   runSchema,
   shardBatchSchema,
@@ -137,6 +146,7 @@ export const endpoints = {
     scopes: ['read', 'run'],
   }),
   runEvents: endpoint('GET', '/runs/:id/events', 'Server-sent `run` events: the run, and its points as they change', {
+    query: runEventsQueryParams,
     scopes: ['read', 'run'],
   }),
   patchRun: endpoint('PATCH', '/runs/:id', 'Pause, resume, stop or rename a run', {
@@ -200,4 +210,34 @@ export const endpoints = {
     success: [201],
   }),
   revokeToken: endpoint('DELETE', '/account/tokens/:id', 'End one of the own API tokens at once', { success: [204] }),
+  listNotices: endpoint('GET', '/notices', 'What the caller was told, newest first', {
+    query: z.object(page),
+    response: unreadSchema.extend({ notices: z.array(noticeSchema), next: z.string().optional() }),
+  }),
+  patchNotice: endpoint('PATCH', '/notices/:id', 'Mark a notice as read or unread', {
+    body: noticePatchSchema,
+    response: unreadSchema,
+  }),
+  readAllNotices: endpoint('POST', '/notices/read', 'Mark every notice as read', {
+    body: z.strictObject({}),
+    response: unreadSchema,
+  }),
+  noticeEvents: endpoint('GET', '/notices/events', 'Server-sent `unread` events: how many notices are unread', {}),
+  getNoticeChoices: endpoint('GET', '/account/notices', 'Which notices the caller gets by e-mail', {
+    response: noticeChoicesSchema,
+  }),
+  putNoticeChoices: endpoint('PUT', '/account/notices', 'Choose which notices come by e-mail', {
+    body: noticeChoicesPatchSchema,
+    response: noticeChoicesSchema,
+  }),
+  listDeadLetters: endpoint('GET', '/mail/dead', 'Mail that could not be delivered; for administrators', {
+    query: z.object(page),
+    response: z.object({ letters: z.array(deadLetterSchema), next: z.string().optional() }),
+    scopes: [],
+  }),
+  retryDeadLetter: endpoint('POST', '/mail/dead/:id/retry', 'Try undeliverable mail anew', {
+    body: z.strictObject({}),
+    success: [204],
+  }),
+  discardDeadLetter: endpoint('DELETE', '/mail/dead/:id', 'Drop undeliverable mail', { success: [204] }),
 } as const;

@@ -46,6 +46,8 @@ export const runSchema = z.object({
   pointsDone: z.number(),
   frames: z.number(),
   frameErrors: z.number(),
+  /** Grows with every change of the run or of one of its points. */
+  revision: z.number(),
 });
 export type Run = z.infer<typeof runSchema>;
 
@@ -91,6 +93,13 @@ export const pointsQueryParams = z.object({
   limit: z.coerce.number().int().min(1).max(500).optional(),
   /** JSON comes in pages; CSV is the whole list. Without it the Accept header chooses. */
   format: z.enum(['json', 'csv']).optional(),
+});
+/** Data of a `run` event: the run, and those of its points that have changed since the revision that the watcher has
+ *  seen. The event's id is the run's revision. */
+export const runEventSchema = z.object({ run: runSchema, points: z.array(pointSchema) });
+export const runEventsQueryParams = z.object({
+  /** The revision seen; the header Last-Event-ID, which a browser sends when it reconnects, goes before. */
+  since: z.coerce.number('a revision: a whole number from 0').int().min(0).optional(),
 });
 const secondsAccepted = 'a whole number of seconds from 0 to 60';
 export const waitQueryParams = z.object({

@@ -51,13 +51,15 @@ server.on('error', (error) => {
 server.listen(port, host, async () => {
   const address = server.address();
   const shown = host.includes(':') ? `[${host}]` : host;
+  const local = `http://${shown}:${address.port}`;
+  // For the links of letters, which are sent from the first request on.
+  process.env.LOCAL_URL = local;
   // The first request loads the middleware, which migrates the database and seeds the demo.
   const status = await healthStatus(address.address, address.port);
   if (status !== 200) {
     console.error(`Not healthy: /api/health answered ${status}.`);
     process.exit(1);
   }
-  const local = `http://${shown}:${address.port}`;
   console.log(`Blockwright listens on ${local}${publicUrl ? ` for ${publicUrl.origin}` : ''}`);
 });
 

@@ -36,6 +36,7 @@ function aRun(over: Partial<Run> = {}): Run {
     pointsDone: 0,
     frames: 0,
     frameErrors: 0,
+    revision: 0,
     ...over,
   };
 }

@@ -16,5 +16,6 @@ export const exampleRun = (change: Partial<Run> = {}): Run => ({
   pointsDone: 1,
   frames: 12_000,
   frameErrors: 503,
+  revision: 7,
   ...change,
 });

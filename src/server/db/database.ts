@@ -43,6 +43,8 @@ async function prepare(seedDemo: Seeder): Promise<void> {
   if (!isProduction() && (await seedDemo(db))) console.log('Seeded the demo projects.');
   const { redoInterruptedJobs } = await import('../use-cases/jobs/redo-interrupted-jobs.ts');
   await redoInterruptedJobs(db);
+  const { startSendingMail } = await import('../mail/outgoing.ts');
+  await startSendingMail(db);
   const { removeLeftovers } = await import('../files/receive-file.ts');
   await removeLeftovers();
 }

@@ -71,6 +71,7 @@ function successes(endpoint: Endpoint): Json {
 /** Addresses that answer with something else than JSON. */
 const fileTypes: Record<string, Json> = {
   '/runs/:id/events': { 'text/event-stream': { schema: { type: 'string' } } },
+  '/notices/events': { 'text/event-stream': { schema: { type: 'string' } } },
   ...Object.fromEntries(
     ['/codes/:id/blocks', '/codes/:id/generator', '/codes/:id/vectors', '/releases/:id/files/:name'].map((path) => [
       path,

@@ -1,67 +1,68 @@
-import { z } from 'zod';
-import { pointSchema, runSchema } from '@/api/runs.ts';
+import { runEventSchema } from '@/api/runs.ts';
 import { identify } from '../auth/identity.ts';
 import type { Context } from '../context.ts';
+import type { Database } from '../db/database.ts';
 import { runEvents } from '../events/run-events.ts';
-import { getRun } from '../use-cases/runs/get-run.ts';
-
-/** Data of a `run` event: the run, and those of its points that have changed since the stream's last event. */
-export const runEventSchema = z.object({ run: runSchema, points: z.array(pointSchema) });
+import { notFound } from '../refusal.ts';
+import { roleIn } from '../repositories/memberships.ts';
+import { revisionOfRun } from '../repositories/runs.ts';
+import { runNews } from '../use-cases/runs/run-news.ts';
+import { eventStream, eventText } from './event-stream.ts';
 
 const settleMs = 250;
-const heartbeatMs = 15_000;
 
 /** Server-sent events of one run: its state at once, then after each commit that changes it, at most four a second.
- *  An event is the state, not a step, so `Last-Event-ID` needs no replay: whoever reconnects gets the present state.
- *  Rights are checked afresh for every event. */
-export function runEventStream(context: Context, runId: string, request: Request): ReadableStream<Uint8Array> {
-  const { signal } = request;
-  const encoder = new TextEncoder();
-  const told = new Map<string, string>();
-  let end = () => {};
-  return new ReadableStream<Uint8Array>({
-    start(controller) {
-      let settling: NodeJS.Timeout | undefined;
-      const send = (text: string) => controller.enqueue(encoder.encode(text));
-      const tell = async () => {
-        settling = undefined;
-        try {
-          // The session may have ended and the token been revoked since.
-          if (!(await identify(context.db, request))) return end();
-          const { run, points } = await getRun(context, runId);
-          const changed = points.filter((point) => told.get(point.id) !== progressOf(point));
-          for (const point of changed) told.set(point.id, progressOf(point));
-          const data = JSON.stringify(runEventSchema.parse({ run, points: changed }));
-          if (!ended) send(`id: ${run.frames}\nevent: run\ndata: ${data}\n\n`);
-        } catch {
-          // No longer shared with the caller, or the database is away: the browser reconnects and is told why.
-          end();
-        }
-      };
-      let ended = false;
-      const unwatch = runEvents.watch(runId, () => {
-        settling ??= setTimeout(tell, settleMs);
-      });
-      const heart = setInterval(() => send(': still here\n\n'), heartbeatMs);
-      end = () => {
-        if (ended) return;
-        ended = true;
-        unwatch();
-        clearInterval(heart);
-        clearTimeout(settling);
-        signal.removeEventListener('abort', end);
-        // Cancelled streams are closed already.
-        try {
-          controller.close();
-        } catch {}
-      };
-      signal.addEventListener('abort', end);
-      send('retry: 2000\n\n');
-      void tell();
-    },
-    cancel: () => end(),
-  });
+ *  The id of an event is the run's revision, so whoever reconnects with Last-Event-ID gets the points that changed
+ *  meanwhile and no others. Rights are checked afresh for every event.
+ *  @param since the revision that the watcher has seen already. */
+export function runEventStream(
+  { db, caller }: Context,
+  runId: string,
+  since: number | undefined,
+  request: Request,
+): ReadableStream<Uint8Array> {
+  let seen = lastEventId(request) ?? since;
+  let told = false;
+  const tell = async () => {
+    const now = await revisionOfRun(db, runId);
+    // The session may have ended, the token been revoked and the project no longer be shared since.
+    const stands = now && (await identify(db, request)) && (await roleIn(db, now.projectId, caller.id));
+    if (!stands) throw notFound('run');
+    if (told && now.revision === seen) return null;
+    const news = await sharedNews(db, runId, seen, now.revision);
+    seen = news.revision;
+    told = true;
+    return news.text;
+  };
+  return eventStream({ watch: (changed) => runEvents.watch(runId, changed), tell, settleMs }, request.signal);
 }
 
-const progressOf = ({ tally, done }: z.infer<typeof pointSchema>): string =>
-  `${tally.frames} ${tally.frameErrors} ${done}`;
+function lastEventId(request: Request): number | undefined {
+  const text = request.headers.get('last-event-id') ?? '';
+  return /^\d{1,15}$/.test(text) ? Number(text) : undefined;
+}
+
+interface News {
+  revision: number;
+  text: string;
+}
+
+/** Events of this moment: those who watch together have seen the same and are told the same, and it is read and
+ *  written out once for all of them. */
+const atHand = new Map<string, Promise<News>>();
+const keptMs = 1000;
+
+function sharedNews(db: Database, runId: string, since: number | undefined, revision: number): Promise<News> {
+  const key = `${runId} ${since} ${revision}`;
+  const known = atHand.get(key);
+  if (known) return known;
+  const news = readNews(db, runId, since);
+  atHand.set(key, news);
+  setTimeout(() => atHand.delete(key), keptMs).unref();
+  return news;
+}
+
+async function readNews(db: Database, runId: string, since: number | undefined): Promise<News> {
+  const news = runEventSchema.parse(await runNews(db, runId, since));
+  return { revision: news.run.revision, text: eventText('run', news, String(news.run.revision)) };
+}

@@ -50,6 +50,12 @@ export async function pointsOfRun(db: Database, runId: string): Promise<StoredPo
   return (await shown(db).where('points.run_id', runId).orderBy('points.position')).map(toPoint);
 }
 
+/** Points of a run that have changed after that revision of it. */
+export async function pointsChangedSince(db: Database, runId: string, revision: number): Promise<StoredPoint[]> {
+  const query = shown(db).where('points.run_id', runId).where('points.revision', '>', revision);
+  return (await query.orderBy('points.position')).map(toPoint);
+}
+
 /** Points of a run in their order, from the one after `after` on. */
 export async function pointsOfRunPage(db: Database, runId: string, page: PageRequest): Promise<StoredPoint[]> {
   const query = shown(db).where('points.run_id', runId).orderBy('points.position').limit(page.limit);

@@ -43,6 +43,14 @@ export async function runById(db: Database, id: string): Promise<Run | undefined
   return row && toRun(row);
 }
 
+/** How often a run has changed, and whose it is; undefined when there is none. */
+export async function revisionOfRun(
+  db: Database,
+  id: string,
+): Promise<{ revision: number; projectId: string } | undefined> {
+  return db('runs').where({ id }).first('revision', 'project_id as projectId');
+}
+
 /** Runs of a project, newest first. */
 export async function runsOf(db: Database, projectId: string, page: PageRequest): Promise<Run[]> {
   const query = shown(db).where('runs.project_id', projectId).orderBy('runs.id', 'desc').limit(page.limit);
@@ -71,5 +79,6 @@ function toRun(row: Row): Run {
     pointsDone: row.points_done ?? 0,
     frames: row.frame_sum ?? 0,
     frameErrors: row.frame_error_sum ?? 0,
+    revision: row.revision!,
   };
 }

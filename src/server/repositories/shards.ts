@@ -65,3 +65,16 @@ export async function extraIndicesOfRun(db: Database, runId: string): Promise<Ma
   }
   return extra;
 }
+
+/** The same for some points of it. */
+export async function extraIndicesOf(
+  db: Database,
+  points: readonly { id: string; nextIndex: number }[],
+): Promise<Map<string, number[]>> {
+  const extra = new Map<string, number[]>();
+  for (const { id, nextIndex } of points) {
+    const indices = await shardIndicesFrom(db, id, nextIndex);
+    if (indices.length > 0) extra.set(id, indices);
+  }
+  return extra;
+}

@@ -8,9 +8,11 @@ import { recordEvent } from '../../repositories/audit-events.ts';
 import { openPointCount, pointsByIds, type StoredPoint } from '../../repositories/points.ts';
 import { runById, updateRun } from '../../repositories/runs.ts';
 import { insertShards } from '../../repositories/shards.ts';
+import { tellRunOwner } from '../notices/tell-run-owner.ts';
 import { advancePoint } from './advance-point.ts';
 import { refuseBadShards } from './refuse-bad-shards.ts';
 import { runToWrite } from './run-access.ts';
+import { runSums } from './run-sums.ts';
 import { type Shard, type SortedShards, sortShards } from './sort-shards.ts';
 
 type Receipt = z.output<typeof shardReceiptSchema>;
@@ -71,6 +73,12 @@ async function advance(
     const tallies = fresh.filter((shard) => shard.pointId === pointId).map((shard) => shard.tally);
     await advancePoint(db, points.get(pointId)!, tallies, run.stopping);
   }
-  if ((await openPointCount(db, run.id)) === 0) await updateRun(db, run.id, { state: 'finished' });
+  if ((await openPointCount(db, run.id)) === 0) await finish(db, run.id);
   else if (run.state === 'ready') await updateRun(db, run.id, { state: 'running' });
+}
+
+async function finish(db: Database, runId: string): Promise<void> {
+  await updateRun(db, runId, { state: 'finished' });
+  const run = (await runById(db, runId))!;
+  await tellRunOwner(db, run, 'run-finished', runSums(run));
 }

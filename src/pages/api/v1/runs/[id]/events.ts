@@ -6,7 +6,7 @@ import { runToRead } from '@/server/use-cases/runs/run-access.ts';
 
 export const GET = handle(endpoints.runEvents, async (call) => {
   await runToRead(call, call.params.id);
-  return eventStreamResponse(runEventStream(call, call.params.id, call.request));
+  return eventStreamResponse(runEventStream(call, call.params.id, call.query.since, call.request));
 });
 
 export const ALL = methodNotAllowed('GET');
