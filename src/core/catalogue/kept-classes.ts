@@ -30,8 +30,8 @@ interface Whole {
  *  classes are runs of bits (the shortened array codes). */
 export function* keptClassEntries(design: DesignSpec, p: DesignPrediction, maxLength: number): Iterable<Entry> {
   if (!p.resolvable || !(p.partialLinear || (p.t === 2 && p.lambda === 1)) || p.codes.length === 0) return;
+  if (design.family === 'transversal' && p.k > MAX_NET_WEIGHT) return;
   const whole = wholeOf(design, p);
-  if (whole.isNet && p.k > MAX_NET_WEIGHT) return;
   for (let classes = whole.isNet ? p.k + 1 : 3; classes < p.r; classes++) {
     if (!whole.isNet) yield keptEntry(whole, 'blocks', classes);
     if (classes * whole.perClass <= maxLength) yield keptEntry(whole, 'points', classes);

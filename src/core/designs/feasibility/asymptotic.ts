@@ -1,13 +1,13 @@
-import type { FeasibilityRule } from './rule.ts';
+import type { DesignQuery, FeasibilityRule } from './rule.ts';
 
 /** Theorems that grant every sufficiently large v without saying how large: a reason to hope, never a verdict. */
 export const asymptoticNotes: readonly (Pick<FeasibilityRule, 'id' | 'source'> & {
-  appliesTo(t: number): boolean;
+  appliesTo(query: DesignQuery): boolean;
   statement: string;
 })[] = [
   {
     id: 'wilson',
-    appliesTo: (t) => t === 2,
+    appliesTo: ({ t, resolvable }) => t === 2 && !resolvable,
     statement:
       'For fixed k and λ every sufficiently large admissible v has a 2-(v,k,λ) design; no bound on "sufficiently large" is used here, so this decides nothing for the v asked.',
     source: {
@@ -18,8 +18,20 @@ export const asymptoticNotes: readonly (Pick<FeasibilityRule, 'id' | 'source'> &
     },
   },
   {
+    id: 'ray-chaudhuri-wilson-resolvable',
+    appliesTo: ({ t, lambda, resolvable }) => t === 2 && lambda === 1 && resolvable === true,
+    statement:
+      'For fixed k every sufficiently large v ≡ k (mod k(k − 1)) has a resolvable 2-(v,k,1) design; no bound on "sufficiently large" is used here, so this decides nothing for the v asked.',
+    source: {
+      authors: 'D. K. Ray-Chaudhuri, R. M. Wilson',
+      year: 1973,
+      title: 'The existence of resolvable block designs',
+      where: 'A Survey of Combinatorial Theory, North-Holland, 361–375',
+    },
+  },
+  {
     id: 'keevash',
-    appliesTo: (t) => t >= 3,
+    appliesTo: ({ t, resolvable }) => t >= 3 && !resolvable,
     statement:
       'For fixed t, k and λ every sufficiently large admissible v has a t-(v,k,λ) design; no bound on "sufficiently large" is known to reach the v asked, so this decides nothing for it.',
     source: {

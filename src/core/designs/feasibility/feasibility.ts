@@ -4,9 +4,11 @@ import { asymptoticNotes } from './asymptotic.ts';
 import { boseResolvable } from './bose-resolvable.ts';
 import { bruckRyserChowla } from './bruck-ryser-chowla.ts';
 import { constructionFor } from './constructions.ts';
+import { copies } from './copies.ts';
 import { consequencesOf } from './derived-chain.ts';
 import { divisibility } from './divisibility.ts';
 import { fisher } from './fisher.ts';
+import { knownDesigns, sourceOfKnown } from './known-designs.ts';
 import { knownExceptions, sourceOfException } from './known-exceptions.ts';
 import { rayChaudhuriWilson } from './ray-chaudhuri-wilson.ts';
 import { residualEmbedding } from './residual-embedding.ts';
@@ -40,6 +42,9 @@ const forbidding: readonly FeasibilityRule[] = [
   knownExceptions,
 ];
 
+/** Rules that grant a design without building it. */
+const granting: readonly FeasibilityRule[] = [...spectrumRules, knownDesigns, copies];
+
 /** Whether a t-(v,k,λ) design exists, with the theorem that says so. "exists" always names a construction or a citation.
  *  @throws ParamError unless 1 ≤ t ≤ k ≤ v ≤ 10^6, t ≤ 8 and λ ≥ 1 are whole numbers. */
 export function feasibility(query: DesignQuery): Feasibility {
@@ -48,7 +53,7 @@ export function feasibility(query: DesignQuery): Feasibility {
   const against = granted ? null : obstacleTo(query);
   if (against) return { verdict: 'impossible', words: 'impossible', reasons: [against], construction: null };
   const construction = constructionFor(query);
-  const reasons = [granted ?? grantOf(spectrumRules, query)].filter((reason) => reason !== null);
+  const reasons = [granted ?? grantOf(granting, query)].filter((reason) => reason !== null);
   if (construction)
     return {
       verdict: 'exists',
@@ -57,7 +62,7 @@ export function feasibility(query: DesignQuery): Feasibility {
       construction,
     };
   if (reasons.length > 0) return { verdict: 'exists', words: 'exists, not built here', reasons, construction: null };
-  const notes = asymptoticNotes.filter((note) => note.appliesTo(query.t) && !query.resolvable);
+  const notes = asymptoticNotes.filter((note) => note.appliesTo(query));
   return {
     verdict: 'open',
     words: 'open',
@@ -84,12 +89,14 @@ export function obstacleTo(query: DesignQuery): FeasibilityReason | null {
 }
 
 const sourceFor = (rule: FeasibilityRule, query: DesignQuery) =>
-  (rule === knownExceptions ? sourceOfException(nameOf(query)) : undefined) ?? rule.source;
+  (rule === knownExceptions ? sourceOfException(nameOf(query)) : undefined) ??
+  (rule === knownDesigns ? sourceOfKnown(nameOf(query)) : undefined) ??
+  rule.source;
 
 function grantOf(rules: readonly FeasibilityRule[], query: DesignQuery): FeasibilityReason | null {
   for (const rule of rules) {
     const statement = rule.grants?.(query);
-    if (statement) return { rule: rule.id, statement, source: rule.source };
+    if (statement) return { rule: rule.id, statement, source: sourceFor(rule, query) };
   }
   return null;
 }

@@ -65,17 +65,30 @@ const exceptions: readonly Exception[] = [
   },
 ];
 
+/** Resolvable designs that are impossible although the bare design exists. */
+const unresolvable: readonly Exception[] = [
+  {
+    key: '2-(6,3,2)',
+    source: {
+      authors: 'H. Hanani',
+      year: 1974,
+      title: 'On resolvable balanced incomplete block designs',
+      where: 'J. Combin. Theory A 17, 275–289',
+    },
+  },
+];
+
 export const knownExceptions: FeasibilityRule = {
   id: 'known-exception',
   source: exceptions[0]!.source,
   forbids(query) {
     const found = exceptions.find(({ key }) => key === nameOf(query));
-    return found
-      ? `No ${found.key} design exists, by the search of ${found.source.authors} (${found.source.year}).`
-      : null;
+    if (found) return `No ${found.key} design exists, by the search of ${found.source.authors} (${found.source.year}).`;
+    const bare = query.resolvable && unresolvable.find(({ key }) => key === nameOf(query));
+    return bare ? `No ${bare.key} design is resolvable, by ${bare.source.authors} (${bare.source.year}).` : null;
   },
 };
 
 /** The paper that shows this one impossible, in place of the list's own source. */
 export const sourceOfException = (name: string): Citation | undefined =>
-  exceptions.find(({ key }) => key === name)?.source;
+  [...exceptions, ...unresolvable].find(({ key }) => key === name)?.source;

@@ -83,6 +83,56 @@ const spectra: readonly Spectrum[] = [
     },
   },
   {
+    id: 'resolvable-triples-twice',
+    covers: ({ t, v, k, lambda, resolvable }) =>
+      t === 2 && k === 3 && lambda === 2 && resolvable === true && v % 3 === 0,
+    exceptions: [6],
+    statement: 'A resolvable 2-(v,3,2) design exists exactly when v ≡ 0 (mod 3) and v is not 6.',
+    source: hanani(1974, 'On resolvable balanced incomplete block designs', 'J. Combin. Theory A 17, 275–289'),
+  },
+  {
+    id: 'resolvable-quadruples-thrice',
+    covers: ({ t, v, k, lambda, resolvable }) =>
+      t === 2 && k === 4 && lambda === 3 && resolvable === true && v % 4 === 0,
+    exceptions: [],
+    statement: 'A resolvable 2-(v,4,3) design exists exactly when v ≡ 0 (mod 4).',
+    source: {
+      authors: 'R. D. Baker',
+      year: 1983,
+      title: 'Resolvable BIBD and SOLS',
+      where: 'Discrete Math. 44, 13–29',
+    },
+  },
+  {
+    id: 'resolvable-quintuples',
+    covers: ({ t, k, lambda, resolvable }) => t === 2 && k === 5 && lambda === 1 && resolvable === true,
+    // Orders that the Handbook leaves undecided, from memory.
+    exceptions: [45, 345, 465, 645],
+    statement:
+      'A resolvable 2-(v,5,1) design exists for every v ≡ 5 (mod 20) outside a list of four undecided orders up to 645.',
+    source: {
+      authors: 'R. J. R. Abel, G. Ge, M. Greig, L. Zhu',
+      year: 2001,
+      title: 'Resolvable BIBDs with a block size of 5',
+      where: 'J. Statist. Plann. Inference 95, 49–65',
+      part: 'quoted from memory',
+    },
+  },
+  {
+    id: 'resolvable-quadruple-systems',
+    covers: ({ t, v, k, lambda, resolvable }) =>
+      t === 3 && k === 4 && lambda === 1 && resolvable === true && v % 4 === 0,
+    exceptions: [],
+    statement: 'A resolvable Steiner quadruple system exists exactly when v ≡ 4, 8 (mod 12).',
+    source: {
+      authors: 'L. Ji, L. Zhu',
+      year: 2005,
+      title: 'Resolvable Steiner quadruple systems for the last 23 orders',
+      where: 'SIAM J. Discrete Math. 19, 420–430',
+      part: 'after Hartman 1987',
+    },
+  },
+  {
     id: 'one-factorisations',
     covers: ({ t, k, lambda, resolvable }) => t === 2 && k === 2 && lambda === 1 && resolvable === true,
     exceptions: [],
