@@ -48,7 +48,7 @@ export function ErrorRateChart(props: ErrorRateChartProps) {
   const caption = intervalCaption(curves, props.intervalMethod);
   const keep = (file: ChartFile) => {
     const shown = curves.filter(({ curve }) => !props.hidden.has(curve.key));
-    const key = `${markWords(caption)}; ${uncodedFormula(kind)}.`;
+    const key = `${markWords(caption)}, ${uncodedFormula(kind)}.`;
     return keepChart(svg.current!, { title, curves: shown, key, provenance: props.provenance }, file);
   };
 

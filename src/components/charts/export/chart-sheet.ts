@@ -23,7 +23,8 @@ const ADVANCE = 6.1;
 /** The drawing with its title above, its legend, key and provenance below, as one SVG that stands alone.
  *  @param fontFaces `@font-face` rules with the faces in them. */
 export function chartSheet(drawing: SVGSVGElement, words: SheetWords, fontFaces = ''): string {
-  const { width, height } = drawing.viewBox.baseVal;
+  const { width } = drawing.viewBox.baseVal;
+  const height = Math.ceil(drawing.viewBox.baseVal.height);
   const ground = getComputedStyle(drawing);
   const token = (name: string) => plainColour(ground.getPropertyValue(name).trim() || '#000000');
   const ink = token('--ink');
@@ -55,7 +56,7 @@ export function chartSheet(drawing: SVGSVGElement, words: SheetWords, fontFaces 
     copy,
     ...words.curves.flatMap(({ label, style }, i) => {
       const y = legendTop + i * LINE;
-      const colour = plainColour(getComputedStyleColour(drawing, style));
+      const colour = plainColour(curveColourNow(drawing, style));
       return [
         make('line', {
           ...{ x1: MARGIN, x2: MARGIN + 34, y1: y, y2: y, stroke: colour, 'stroke-width': 2 },
@@ -73,7 +74,7 @@ export function chartSheet(drawing: SVGSVGElement, words: SheetWords, fontFaces 
 }
 
 /** The curve's colour on the ground that the page has now. */
-function getComputedStyleColour(drawing: SVGSVGElement, style: ChartCurve['style']): string {
+function curveColourNow(drawing: SVGSVGElement, style: ChartCurve['style']): string {
   const scheme = getComputedStyle(drawing).colorScheme;
   const dark = scheme === 'dark' || (scheme !== 'light' && matchMedia('(prefers-color-scheme: dark)').matches);
   return dark ? style.blueprint : style.paper;

@@ -28,7 +28,9 @@ export function styledCopy(drawing: SVGSVGElement): SVGSVGElement {
       if (value !== '' && worthSaying(target, name, value)) target.setAttribute(name, plainValue(name, value));
     }
     for (const name of [...target.getAttributeNames()]) {
-      if (name === 'class' || name === 'style' || name.startsWith('data-') || name.startsWith('aria-'))
+      // What still speaks of our style sheet stands on a group whose members say their own looks.
+      const ofOurs = /var\(|light-dark\(|color-mix\(/.test(target.getAttribute(name)!);
+      if (ofOurs || name === 'class' || name === 'style' || name.startsWith('data-') || name.startsWith('aria-'))
         target.removeAttribute(name);
     }
   });
