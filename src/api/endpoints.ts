@@ -8,6 +8,7 @@ import {
 } from './catalogue.ts';
 import { codeSchema, jobSchema, matrixFormatSchema, newCodeSchema } from './codes.ts';
 import { endpoint } from './endpoint.ts';
+import { measurementSchema, newMeasurementSchema } from './measurements.ts';
 import {
   deadLetterSchema,
   noticeChoicesPatchSchema,
@@ -90,6 +91,15 @@ export const endpoints = {
     response: z.object({ code: codeSchema }),
     success: [201],
   }),
+  listMeasurements: endpoint('GET', '/projects/:id/measurements', 'Error rates measured elsewhere', {
+    response: z.object({ measurements: z.array(measurementSchema) }),
+  }),
+  createMeasurement: endpoint('POST', '/projects/:id/measurements', 'Keep error rates measured elsewhere', {
+    body: newMeasurementSchema,
+    response: z.object({ measurement: measurementSchema }),
+    success: [201],
+  }),
+  deleteMeasurement: endpoint('DELETE', '/measurements/:id', 'Remove measured data', { success: [204] }),
   getJob: endpoint('GET', '/jobs/:id', 'How a long piece of work stands', { response: z.object({ job: jobSchema }) }),
   getCode: endpoint('GET', '/codes/:id', 'One code with its properties', { response: z.object({ code: codeSchema }) }),
   deleteCode: endpoint('DELETE', '/codes/:id', 'Remove a code that no run uses', { success: [204] }),

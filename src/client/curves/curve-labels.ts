@@ -1,5 +1,6 @@
 import type { Curve } from './curve.ts';
-import { decoderDetail, decoderShortName } from './decoder-text.ts';
+import { curveShortName } from './curve-source.ts';
+import { decoderDetail } from './decoder-text.ts';
 
 /** End labels, as short as tells the curves apart: "(273,191) Gallager B", and only where two would read the same,
  *  the decoder's parameters, then the design, then the run. */
@@ -7,13 +8,13 @@ export function curveLabels(
   curves: readonly Curve[],
   runName: (runId: string) => string | undefined = () => undefined,
 ): string[] {
-  const detailers: ((curve: Curve) => string | undefined)[] = [
-    (curve) => decoderDetail(curve.decoder),
+  const detailers: ((curve: Curve) => string | null | undefined)[] = [
+    (curve) => curve.decoder && decoderDetail(curve.decoder),
     (curve) => designOf(curve),
     (curve) => runName(curve.runId),
     (curve) => curve.runId.slice(0, 8),
   ];
-  let labels = curves.map((curve) => `(${curve.n},${curve.k}) ${decoderShortName(curve.decoder)}`);
+  let labels = curves.map((curve) => `(${curve.n},${curve.k}) ${curveShortName(curve)}`);
   for (const detail of detailers) {
     const groups = indicesByLabel(labels);
     const next = [...labels];

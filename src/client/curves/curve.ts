@@ -30,15 +30,18 @@ export interface CurvePoint {
   level: number;
 }
 
-/** The points of one code under one decoder in one run, from the worst channel to the best. */
+/** The points of one code under one decoder in one run, or of one set of measured data, from the worst channel to the
+ *  best. */
 export interface Curve {
   key: string;
+  /** Of measured data the data set's. */
   runId: string;
   codeId: string;
   codeLabel: string;
   n: number;
   k: number;
-  decoder: DecoderSpec;
+  /** null of data measured elsewhere, whose decoder is not ours to state. */
+  decoder: DecoderSpec | null;
   points: CurvePoint[];
 }
 

@@ -1,7 +1,7 @@
 import { csvLine } from '@/api/csv-line.ts';
 import type { RunState } from '@/api/runs.ts';
 import { type Curve, type CurvePoint, type Estimate, isThin } from './curve.ts';
-import { decoderText } from './decoder-text.ts';
+import { curveDecoderText } from './curve-source.ts';
 
 /** What the file says of a run beside its points. */
 export interface RunNote {
@@ -49,7 +49,7 @@ function pointRow(curve: Curve, point: CurvePoint, note: RunNote | undefined): s
     curve.codeLabel,
     String(curve.n),
     String(curve.k),
-    decoderText(curve.decoder),
+    curveDecoderText(curve),
     'binary symmetric',
     String(point.p),
     String(point.frames),

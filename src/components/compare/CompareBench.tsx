@@ -1,4 +1,5 @@
 import { useMemo } from 'react';
+import type { Measurement } from '@/api/measurements.ts';
 import type { Requirements } from '@/api/projects.ts';
 import type { Run } from '@/api/runs.ts';
 import type { Curve } from '@/client/curves/curve.ts';
@@ -22,19 +23,23 @@ import { selectedCurves, selectionText } from './selection.ts';
 
 interface Props {
   runs: readonly Run[];
+  /** Error rates measured elsewhere. */
+  measurements: readonly Measurement[];
   curves: readonly Curve[];
   requirements: Requirements | null;
+  addAddress: string | null;
+  onRemove: ((measured: Measurement) => void) | null;
 }
 
 /** Chart, table and chooser of the comparison; what is chosen lives in the address. */
-export function CompareBench({ runs, curves, requirements }: Props) {
+export function CompareBench({ runs, measurements, curves, requirements, addAddress, onRemove }: Props) {
   const [named, setNamed] = useUrlParam('curves');
   const [runId] = useUrlParam('run');
   const runById = useMemo(() => new Map(runs.map((run) => [run.id, run])), [runs]);
-  const chosen = useMemo(
-    () => chartCurves(selectedCurves(curves, runs, { curves: named, run: runId }), (id) => runById.get(id)?.name),
-    [curves, runs, named, runId, runById],
-  );
+  const chosen = useMemo(() => {
+    const nameOf = (id: string) => runById.get(id)?.name ?? measurements.find((measured) => measured.id === id)?.name;
+    return chartCurves(selectedCurves(curves, runs, { curves: named, run: runId }), nameOf);
+  }, [curves, runs, measurements, named, runId, runById]);
   const address = useChartAddress(chosen);
   const { kind } = address;
   const plain = useMemo(() => chosen.map(({ curve }) => curve), [chosen]);
@@ -58,6 +63,9 @@ export function CompareBench({ runs, curves, requirements }: Props) {
       <div className="grid min-w-0 content-start gap-5 ">
         <CurvePicker
           runs={runs}
+          measurements={measurements}
+          addAddress={addAddress}
+          onRemove={onRemove}
           curves={curves}
           chosen={chosen}
           onChange={(keys) => setNamed(keys.length > 0 ? selectionText(keys) : 'none')}
