@@ -4,6 +4,7 @@ import type { BlockDesign, DesignSpec } from './block-design.ts';
 import { certify, type TimedCertificate } from './certify.ts';
 import { buildDesign, predictDesign } from './design.ts';
 import type { DesignPrediction } from './family.ts';
+import { isResolution } from './resolve.ts';
 import { certifyUpload } from './upload.ts';
 
 /** Where a design's blocks come from: built anew from a spec, or read off a matrix that a file held. */
@@ -19,6 +20,8 @@ export interface OpenedDesign {
   /** Every t-subset lies in lambda blocks; t = 0 when not even the points lie on equally many. */
   claim: { t: number; lambda: number; partialLinear: boolean };
   certificate: TimedCertificate;
+  /** The construction's own classes were checked: they partition the blocks, and each the points. */
+  isResolved: boolean;
   /** 2-rank by the family's formulas, where they say something. */
   predictedRank?: Graded<Enclosure>;
 }
@@ -39,6 +42,7 @@ export function openDesign(
       design,
       claim: { t, lambda, partialLinear: false },
       certificate: { ...certificate, elapsedMs: clock() - from },
+      isResolved: false,
     };
   }
   const prediction = predictDesign(source.spec);
@@ -50,6 +54,7 @@ export function openDesign(
     design,
     claim: { t: prediction.t, lambda: prediction.lambda, partialLinear: prediction.partialLinear ?? false },
     certificate,
+    isResolved: design.classes !== undefined && isResolution(design, design.classes),
     ...(predictedRank && { predictedRank }),
   };
 }

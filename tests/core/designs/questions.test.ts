@@ -127,6 +127,11 @@ describe('a design is opened', () => {
     }
   });
 
+  test('with its own parallel classes checked, where the construction gives them', () => {
+    expect(open('affine-plane', { q: 4 }).isResolved).toBe(true);
+    expect(open('projective-plane', { q: 4 }).isResolved).toBe(false);
+  });
+
   test('from a matrix by rows or by columns, for the largest t that holds', () => {
     const { design } = open('witt', { v: 12 });
     const H = incidenceMatrix(design);

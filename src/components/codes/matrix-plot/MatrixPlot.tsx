@@ -9,14 +9,16 @@ import { useGroundChange } from './use-ground-change.ts';
 
 interface Props {
   H: SparseMatrix;
+  /** What is drawn, for those who cannot see it. */
+  name?: string;
   /** Where to begin, as an earlier view's text. */
   start?: string | null;
   /** Told the view as text after each change; null for the whole matrix. */
   onView?: (text: string | null) => void;
 }
 
-/** A parity-check matrix from the whole down to single cells. */
-export function MatrixPlot({ H, start, onView }: Props) {
+/** A matrix of ones and zeros from the whole down to single cells. */
+export function MatrixPlot({ H, name = 'Parity-check matrix', start, onView }: Props) {
   const surface = useRef<HTMLDivElement>(null);
   const canvas = useRef<HTMLCanvasElement>(null);
   const plot = useRef<Plot | null>(null);
@@ -55,7 +57,7 @@ export function MatrixPlot({ H, start, onView }: Props) {
         ref={surface}
         role="application"
         aria-roledescription="zoomable plot"
-        aria-label={`Parity-check matrix, ${wholeNumber(H.rows)} rows by ${wholeNumber(H.cols)} columns. Arrow keys move, plus and minus zoom, 0 shows the whole.`}
+        aria-label={`${name}, ${wholeNumber(H.rows)} rows by ${wholeNumber(H.cols)} columns. Arrow keys move, plus and minus zoom, 0 shows the whole.`}
         // biome-ignore lint/a11y/noNoninteractiveTabindex: the plot is moved and zoomed by keyboard
         tabIndex={0}
         className="relative w-full cursor-crosshair overflow-hidden border border-rule bg-sheet"
