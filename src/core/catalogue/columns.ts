@@ -75,6 +75,13 @@ export class CatalogueColumns {
     c.design[i] = this.designs.length - 1;
   }
 
+  /** For each row whether its design is of one of the families. */
+  ofFamilies(ids: ReadonlySet<string>): (row: number) => boolean {
+    const wanted = Uint8Array.from(this.designs, ({ family }) => (ids.has(family) ? 1 : 0));
+    const design = this.columns.design;
+    return (row) => wanted[design[row]!] === 1;
+  }
+
   designOf(row: number): DesignSpec {
     return this.designs[this.columns.design[row]!]!;
   }

@@ -119,7 +119,7 @@ export function nearestAlternatives(table: CatalogueColumns, query: CatalogueQue
 
 /** The row that comes nearest to the window from one side; the first of equals in the order asked for. */
 function nearestRow(
-  rows: readonly number[],
+  rows: Uint32Array,
   figure: (row: number) => number,
   { min = Number.NEGATIVE_INFINITY, max = Number.POSITIVE_INFINITY }: { min?: number; max?: number },
   direction: 'below' | 'above',

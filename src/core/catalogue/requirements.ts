@@ -194,15 +194,22 @@ function frameErrorRequirement(p: number, target: number, columns: CatalogueColu
     n.reduce((most, each) => Math.max(most, each), 1),
   );
   const [radius, rankUpper] = [columns.column('radius'), columns.column('rankUpper')];
+  const logPatterns = new Float64Array(radii.length).fill(Number.NaN);
+  const patterns = (length: number) => {
+    if (Number.isNaN(logPatterns[length]!)) logPatterns[length] = logLastShell(length, radii[length]! - 1);
+    return logPatterns[length]!;
+  };
   const outcome = (row: number): Verdict['outcome'] => {
     if (fit.longestLength(row) < radii.length && radius[row]! >= radii[fit.longestLength(row)]!) return 'meets';
     const shortest = Math.min(fit.shortestLength(row), radii.length - 1);
-    const within = radii[shortest]! - 1;
-    if (within < 0 || 2 * within > shortest) return 'unknown';
-    const logPatterns = shortest + logBinomialTerm(shortest, within, 0.5) * Math.LOG2E;
-    return logPatterns > rankUpper[row]! + 1e-6 ? 'misses' : 'unknown';
+    return patterns(shortest) > rankUpper[row]! + 1e-6 ? 'misses' : 'unknown';
   };
   const method =
     'met where the chance of more errors than one step of majority logic always corrects is small enough; missed where the likely patterns outnumber the syndromes; else a run must tell';
   return { name: 'frame error rate', outcome, grounds: () => ({ grade: 'proved', method }) };
+}
+
+/** log2 of the number of patterns of w errors; below everything where w is none or more than half. */
+function logLastShell(n: number, w: number): number {
+  return w < 0 || 2 * w > n ? Number.NEGATIVE_INFINITY : n + logBinomialTerm(n, w, 0.5) * Math.LOG2E;
 }

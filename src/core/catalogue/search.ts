@@ -38,7 +38,7 @@ export function searchTable(table: CatalogueColumns, raw: CatalogueQuery): Searc
   const asked = new Search(table, query);
   const rows = asked.matching();
   const { offset = 0, limit = 200 } = query;
-  const candidates = Array.from(rows.slice(offset, offset + limit), (row) => asked.candidate(row));
+  const candidates = Array.from(rows.subarray(offset, offset + limit), (row) => asked.candidate(row));
   return { candidates, matching: rows.length, total: table.count };
 }
 
@@ -56,18 +56,21 @@ export class Search {
   }
 
   /** Rows that no requirement rules out, in the order asked for. */
-  matching(): number[] {
+  matching(): Uint32Array {
     const { column, isDescending } = this.order();
     const order = this.table.order(column);
-    const wanted = this.familiesWanted();
+    const isWanted = this.familiesWanted();
     const outcomes = this.requirements.map(({ outcome }) => outcome);
-    const found: number[] = [];
+    const found = new Uint32Array(order.length);
+    let size = 0;
     for (let at = 0; at < order.length; at++) {
       const row = order[isDescending ? order.length - 1 - at : at]!;
-      if (wanted && !wanted.has(this.table.designOf(row).family)) continue;
-      if (outcomes.every((outcome) => outcome(row) !== 'misses')) found.push(row);
+      if (isWanted && !isWanted(row)) continue;
+      let isLeft = true;
+      for (let i = 0; isLeft && i < outcomes.length; i++) isLeft = outcomes[i]!(row) !== 'misses';
+      if (isLeft) found[size++] = row;
     }
-    return found;
+    return found.subarray(0, size);
   }
 
   /** The column whose order is that of the figure asked for. Once a payload or a length fixes part of a code, the rest of
@@ -80,12 +83,12 @@ export class Search {
     return { column: sort, isDescending };
   }
 
-  private familiesWanted(): Set<string> | undefined {
+  private familiesWanted(): ((row: number) => boolean) | undefined {
     const { families: wanted } = this.query;
     const known = families.map(({ id }) => id);
     const unknown = wanted?.find((id) => !known.includes(id));
     if (unknown !== undefined) throw new ParamError('families', unknown, `ids of families: ${known.join(', ')}`);
-    return wanted && new Set(wanted);
+    return wanted && this.table.ofFamilies(new Set(wanted));
   }
 
   /** A row as a candidate, with its name, its transforms and a verdict on each requirement. */

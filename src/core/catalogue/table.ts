@@ -1,5 +1,6 @@
 import type { DesignSpec } from '../designs/block-design.ts';
 import { families, familyById } from '../designs/families/index.ts';
+import type { DesignPrediction } from '../designs/family.ts';
 import { CatalogueColumns } from './columns.ts';
 import { type Entry, entryOf } from './entry.ts';
 import { keptClassEntries, keptClassEntry } from './kept-classes.ts';
@@ -37,9 +38,22 @@ function makeTable(): CatalogueColumns {
   return made;
 }
 
+/** Predictions of designs lately shown; one design has up to hundreds of entries, and some ranks take long. */
+const lately = new Map<DesignSpec, DesignPrediction>();
+const MOST_HELD = 2000;
+
+function predictAgain(design: DesignSpec): DesignPrediction {
+  const held = lately.get(design);
+  if (held) return held;
+  const prediction = familyById(design.family).predict(design.params);
+  if (lately.size >= MOST_HELD) lately.delete(lately.keys().next().value!);
+  lately.set(design, prediction);
+  return prediction;
+}
+
 /** The entry with its words, from its name: predicted anew, since holding the words of all of them would cost more. */
 function entryAgain(design: DesignSpec, checks: Entry['checks'], keptClasses: number | undefined): Entry {
-  const prediction = familyById(design.family).predict(design.params);
+  const prediction = predictAgain(design);
   if (keptClasses !== undefined) return keptClassEntry(design, prediction, checks, keptClasses);
   return entryOf(design, prediction, prediction.codes.find((code) => code.checks === checks)!);
 }

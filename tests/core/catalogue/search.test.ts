@@ -97,7 +97,7 @@ describe('a plain scan over all entries finds the same as the search', () => {
     const plain = Array.from({ length: table.count }, (_, row) => row).filter(
       (row) => table.column('n')[row]! <= 12_000,
     );
-    const found = new Search(table, query).matching().filter((row) => table.column('n')[row]! <= 12_000);
+    const found = [...new Search(table, query).matching()].filter((row) => table.column('n')[row]! <= 12_000);
     expect(found.length).toBeGreaterThan(0);
     const kept = plain.filter((row) => keeps(entryOf(row)));
     expect(found.sort((a, b) => a - b)).toEqual(kept);
@@ -220,7 +220,7 @@ describe('when nothing fits', () => {
   test('the nearest on each side of each window is named', () => {
     expect(searchTable(table, query).matching).toBe(0);
     const nearest = nearestAlternatives(table, query);
-    const lengths = new Search(table, { ...query, n: undefined }).matching().map((row) => table.column('n')[row]!);
+    const lengths = [...new Search(table, { ...query, n: undefined }).matching()].map((row) => table.column('n')[row]!);
     const found = (direction: string) =>
       nearest.find((each) => each.givenUp === 'length' && each.direction === direction)!.entry.n;
     expect([found('below'), found('above')]).toEqual([
