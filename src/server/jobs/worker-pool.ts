@@ -44,7 +44,8 @@ export function createWorkerPool<Request, Answer, Part = never>(
 ): WorkerPool<Request, Answer, Part> {
   type OwnTask = Task<Request, Answer, Part>;
   const queue: OwnTask[] = [];
-  const idle = new Set<Worker>();
+  /** Resting workers, each with the timer that ends it. */
+  const idle = new Map<Worker, NodeJS.Timeout>();
   const alive = new Set<Worker>();
   let nextId = 1;
 
@@ -62,7 +63,8 @@ export function createWorkerPool<Request, Answer, Part = never>(
 
   function work(): void {
     while (queue.length > 0 && (idle.size > 0 || alive.size < workers)) {
-      const worker = idle.values().next().value ?? start();
+      const worker = idle.keys().next().value ?? start();
+      clearTimeout(idle.get(worker));
       idle.delete(worker);
       give(worker, queue.shift()!);
     }
@@ -102,8 +104,12 @@ export function createWorkerPool<Request, Answer, Part = never>(
   }
 
   function rest(worker: Worker): void {
-    idle.add(worker);
-    setTimeout(() => idle.has(worker) && void worker.terminate(), idleMs).unref();
+    const end = () => {
+      // Out of the resting ones first, or a task could still be given to a worker on its way out.
+      idle.delete(worker);
+      void worker.terminate();
+    };
+    idle.set(worker, setTimeout(end, idleMs).unref());
     work();
   }
 
