@@ -28,14 +28,7 @@ export function systematicGenerator(H: SparseMatrix): SystematicGenerator {
   const isInfo = new Uint8Array(n);
   for (const c of infoPositions) isInfo[c] = 1;
   const parityPositions = Uint32Array.from({ length: n }, (_, c) => c).filter((c) => !isInfo[c]);
-  const info = new Uint8Array(k);
-  const parity = Array.from({ length: k }, (_, i) => {
-    info[i] = 1;
-    const word = encoder.encode(info);
-    info[i] = 0;
-    return Uint8Array.from(parityPositions, (c) => word[c]!);
-  });
-  return { n, infoPositions, parityPositions, parity };
+  return { n, infoPositions, parityPositions, parity: [...encoder.parityRows()] };
 }
 
 /** The systematic generator as text: positions, then one row of parity bits a line in hexadecimal. */

@@ -13,6 +13,9 @@ export interface SystematicEncoder {
   /** The codeword of k information bits, one byte 0 or 1 a bit.
    *  @throws ParamError when the word's length is not k. */
   encode(info: Uint8Array): Uint8Array;
+  /** For each information bit in turn, the other positions' bits, in ascending order of position, of the word in which
+   *  it alone is one: the rows of P where G = [I P]. Much quicker than encoding them one by one. */
+  parityRows(): Generator<Uint8Array>;
 }
 
 /** An encoder for {c : H·c = 0} that shows the information bits in the clear. Cyclic codes divide by the generator
@@ -40,24 +43,36 @@ export function cyclicEncoder(n: number, g: Gf2Polynomial): SystematicEncoder {
       word.set(info, parity);
       return word;
     },
+    *parityRows() {
+      // Row i is x^(n−k+i) mod g: one step of the shift register with nothing coming in.
+      const register = remainder(Uint8Array.of(1), g, parity);
+      for (let i = 0; i < k; i++) {
+        const row = new Uint8Array(parity);
+        for (let j = 0; j < parity; j++) row[j] = (register[j >>> 5]! >>> (j & 31)) & 1;
+        yield row;
+        clock(register, 0, g, parity);
+      }
+    },
   };
 }
 
 /** x^parity · m(x) mod g(x): the shift register, highest coefficient first. */
 function remainder(info: Uint8Array, g: Gf2Polynomial, parity: number): Uint32Array {
-  const words = Math.max(1, (parity + 31) >>> 5);
-  const register = new Uint32Array(words);
-  if (parity === 0) return register;
-  const top = parity - 1;
-  const lastMask = parity & 31 ? 2 ** (parity & 31) - 1 : 0xffffffff;
-  for (let i = info.length - 1; i >= 0; i--) {
-    const feedback = ((register[top >>> 5]! >>> (top & 31)) & 1) ^ info[i]!;
-    for (let w = words - 1; w > 0; w--) register[w] = (register[w]! << 1) | (register[w - 1]! >>> 31);
-    register[0]! <<= 1;
-    if (feedback) for (let w = 0; w < words; w++) register[w]! ^= g[w]!;
-    register[words - 1]! &= lastMask;
-  }
+  const register = new Uint32Array(Math.max(1, (parity + 31) >>> 5));
+  if (parity > 0) for (let i = info.length - 1; i >= 0; i--) clock(register, info[i]!, g, parity);
   return register;
+}
+
+/** One step of the register: times x, plus the coming bit times x^parity, modulo g. */
+function clock(register: Uint32Array, bit: number, g: Gf2Polynomial, parity: number): void {
+  if (parity === 0) return;
+  const words = register.length;
+  const top = parity - 1;
+  const feedback = ((register[top >>> 5]! >>> (top & 31)) & 1) ^ bit;
+  for (let w = words - 1; w > 0; w--) register[w] = (register[w]! << 1) | (register[w - 1]! >>> 31);
+  register[0]! <<= 1;
+  if (feedback) for (let w = 0; w < words; w++) register[w]! ^= g[w]!;
+  register[words - 1]! &= parity & 31 ? 2 ** (parity & 31) - 1 : 0xffffffff;
 }
 
 /** Any code: parity bit i is the sum of the information bits in row i of the reduced echelon form. */
@@ -82,6 +97,14 @@ export function denseEncoder(H: SparseMatrix): SystematicEncoder {
       });
       for (let r = 0; r < rank; r++) word[pivots[r]!] = parityOfAnd(matrix.row(r), packed);
       return word;
+    },
+    *parityRows() {
+      const ascending = Uint32Array.from(pivots.keys()).sort((a, b) => pivots[a]! - pivots[b]!);
+      for (const c of infoPositions) {
+        const row = new Uint8Array(rank);
+        for (let j = 0; j < rank; j++) row[j] = matrix.get(ascending[j]!, c);
+        yield row;
+      }
     },
   };
 }
