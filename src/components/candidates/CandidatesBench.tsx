@@ -39,7 +39,7 @@ export function CandidatesBench({ projectId, mayKeep }: { projectId: string; may
           </Notice>
         )}
         {matching === 0 ? (
-          <NearestList nearest={nearest} />
+          <NearestList nearest={nearest} obstacles={candidates.obstacles} />
         ) : (
           <>
             <RateScatter rows={rows} state={state} />

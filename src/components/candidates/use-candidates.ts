@@ -13,6 +13,8 @@ export interface Candidates {
   matching: number | null;
   total: number | null;
   nearest: Answer['nearest'];
+  /** Theorems that forbid what was asked, where nothing fits. */
+  obstacles: Answer['obstacles'];
   failure: ApiFailure | undefined;
   isLoading: boolean;
   /** Asks for the next page, when there is one. */
@@ -37,6 +39,7 @@ export function useCandidates(query: CatalogueParams): Candidates {
     matching: first?.matching ?? null,
     total: first?.total ?? null,
     nearest: first?.nearest ?? [],
+    obstacles: first?.obstacles ?? [],
     failure: error,
     isLoading,
     more: () => {
