@@ -38,3 +38,15 @@ function parity(word: number): number {
   for (let w = word; w !== 0; w &= w - 1) sum ^= 1;
   return sum;
 }
+
+/** A matrix of circulants of one size: base[r][b] lists the offsets of the first row of block (r, b). */
+export function quasiCyclicMatrix(size: number, base: readonly (readonly (readonly number[])[])[]): SparseMatrix {
+  return matrixFromRows(
+    base[0]!.length * size,
+    base.flatMap((row) =>
+      Array.from({ length: size }, (_, x) =>
+        row.flatMap((offsets, b) => offsets.map((offset) => b * size + ((offset + x) % size))),
+      ),
+    ),
+  );
+}
