@@ -1,19 +1,20 @@
 import type { Gf2Polynomial } from '../algebra/gf2-polynomial.ts';
 
-const digits = '0123456789abcdef';
+const digits = new TextEncoder().encode('0123456789abcdef');
+const ascii = new TextDecoder();
 
 /** The order of bits in every word written in hexadecimal, as files state it. */
 export const wordBitOrder =
   'bit 0 first: it is the most significant bit of the first hexadecimal digit; the last digit is filled up with zeros';
 
 /** A word, one byte 0 or 1 a bit, four bits to a digit: bit 0 is the most significant bit of the first digit. */
-export function wordToHex(word: ArrayLike<number>): string {
-  let text = '';
-  for (let i = 0; i < word.length; i += 4) {
-    const digit = (word[i]! << 3) | ((word[i + 1] ?? 0) << 2) | ((word[i + 2] ?? 0) << 1) | (word[i + 3] ?? 0);
-    text += digits[digit & 15];
+export function wordToHex(word: Uint8Array): string {
+  const codes = new Uint8Array((word.length + 3) >>> 2);
+  for (let d = 0, i = 0; d < codes.length; d++, i += 4) {
+    // Past the end an element is undefined, which the operators read as 0.
+    codes[d] = digits[((word[i]! << 3) | (word[i + 1]! << 2) | (word[i + 2]! << 1) | word[i + 3]!) & 15]!;
   }
-  return text;
+  return ascii.decode(codes);
 }
 
 /** The word of so many bits; null when the text has another length, other signs, or ones after the last bit. */

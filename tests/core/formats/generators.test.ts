@@ -130,7 +130,7 @@ describe.each([
 });
 
 test('words and polynomials come back from hexadecimal', () => {
-  expect(wordToHex([1, 0, 0, 0, 1, 1])).toBe('8c');
+  expect(wordToHex(Uint8Array.of(1, 0, 0, 0, 1, 1))).toBe('8c');
   expect(wordFromHex('8c', 6)).toEqual(Uint8Array.of(1, 0, 0, 0, 1, 1));
   expect(wordFromHex('8d', 6)).toBeNull();
   expect(polynomialToHex(Uint32Array.of(0b1011))).toBe('b');
