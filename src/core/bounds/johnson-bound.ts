@@ -6,21 +6,7 @@ import { ParamError } from '../errors.ts';
  *  @throws ParamError unless 0 ≤ w ≤ n and d ≥ 1 are whole. */
 export function johnsonBound(n: number, d: number, w: number): number {
   requireWhole(n, d, w);
-  const table = new Map<string, number>();
-  const bound = (n: number, d: number, w: number): number => {
-    const weight = Math.min(w, n - w);
-    if (2 * weight < d) return 1;
-    if (2 * weight === d) return Math.floor(n / weight);
-    const key = `${n},${weight}`;
-    const known = table.get(key);
-    if (known !== undefined) return known;
-    const byPoint = Math.floor((n * bound(n - 1, d, weight - 1)) / weight);
-    const byHole = Math.floor((n * bound(n - 1, d, weight)) / (n - weight));
-    const value = Math.min(byPoint, byHole);
-    table.set(key, value);
-    return value;
-  };
-  return bound(n, evenDistance(d), w);
+  return byLength(n, evenDistance(d), w, (_length, _weight, recursive) => recursive);
 }
 
 /** Johnson's first recursion alone, ⌊n/w ⌊(n−1)/(w−1) ⌊…⌋⌋⌋: the bound that counts a packing's density. */
@@ -37,23 +23,34 @@ export function johnsonPackingBound(n: number, d: number, w: number): number {
 export function refinedJohnsonBound(n: number, d: number, w: number): number {
   requireWhole(n, d, w);
   const even = evenDistance(d);
-  const table = new Map<string, number>();
-  const bound = (n: number, w: number): number => {
-    const weight = Math.min(w, n - w);
-    if (2 * weight < even) return 1;
-    if (2 * weight === even) return Math.floor(n / weight);
-    const key = `${n},${weight}`;
-    const known = table.get(key);
-    if (known !== undefined) return known;
-    const recursive = Math.min(
-      Math.floor((n * bound(n - 1, weight - 1)) / weight),
-      Math.floor((n * bound(n - 1, weight)) / (n - weight)),
-    );
-    const value = Math.min(recursive, byPairs(n, even, weight, recursive));
-    table.set(key, value);
-    return value;
-  };
-  return bound(n, w);
+  return byLength(n, even, w, (length, weight, recursive) => byPairs(length, even, weight, recursive));
+}
+
+/** Both recursions from the shortest length up, each value sharpened by `refine`: a length looks only at the one before,
+ *  so codes of any length take no depth of calls and two rows of memory. Past 2^53 values are rounded. */
+function byLength(
+  n: number,
+  d: number,
+  w: number,
+  refine: (length: number, weight: number, recursive: number) => number,
+): number {
+  const half = d / 2;
+  if (w < half || n - w < half) return 1;
+  let shorter = new Float64Array(w + 1).fill(1);
+  let bounds = new Float64Array(w + 1).fill(1);
+  for (let length = 1; length <= n; length++) {
+    for (let weight = half; weight <= Math.min(w, length); weight++) {
+      if (2 * weight > length) bounds[weight] = bounds[length - weight]!;
+      else if (weight === half) bounds[weight] = Math.floor(length / weight);
+      else {
+        const byPoint = Math.floor((length * shorter[weight - 1]!) / weight);
+        const byHole = Math.floor((length * shorter[weight]!) / (length - weight));
+        bounds[weight] = refine(length, weight, Math.min(byPoint, byHole));
+      }
+    }
+    [shorter, bounds] = [bounds, shorter];
+  }
+  return shorter[w]!;
 }
 
 /** Largest M up to `most` for which the count of pairs allows every number of words up to M. */
