@@ -44,8 +44,7 @@ export function BlockDetail({
         meetings
           ? {
               label: 'Meets',
-              value:
-                meetings.map(([size, count]) => `${counted(count, 'block')} in ${size}`).join(', ') || 'no other block',
+              value: meetings.map(meetingText).join(', ') || 'no other block',
               grade: 'computed' as const,
             }
           : { label: 'Meets', value: 'not counted for one block of a design of this size' },
@@ -53,3 +52,6 @@ export function BlockDetail({
     />
   );
 }
+
+const meetingText = ([size, count]: [number, number]) =>
+  size === 0 ? `${counted(count, 'block')} not at all` : `${counted(count, 'block')} in ${counted(size, 'point')}`;

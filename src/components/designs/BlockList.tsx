@@ -147,7 +147,7 @@ function Listing({ design, groups, listed, chosen, onChoose, children }: Listing
         aria-activedescendant={place >= 0 ? optionId(chosen!) : undefined}
         tabIndex={0}
         onKeyDown={onKeyDown}
-        className="h-105 overflow-y-auto border-ink border-t border-b"
+        className="max-h-105 overflow-y-auto border-ink border-t border-b"
       >
         <div role="presentation" className="relative" style={{ height: virtual.getTotalSize() }}>
           {items.map(({ index, start }) => {

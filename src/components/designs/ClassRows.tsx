@@ -89,10 +89,12 @@ function Blocks({ design, blocks, chosen }: { design: BlockDesign; blocks: reado
   if (shown.length === 0) return <>{counted(blocks.length, 'block')}</>;
   return (
     <>
-      {shown.map((block) => (
-        <span key={block} className={classes('mr-2.5', block === chosen && 'bg-act text-act-ink')}>
-          {blockOf(design, block).join(' ')}
-          <span className="text-quiet"> ·</span>
+      {shown.map((block, at) => (
+        <span key={block} className="mr-2.5">
+          <span className={classes(block === chosen && 'bg-act px-1 text-act-ink')}>
+            {blockOf(design, block).join(' ')}
+          </span>
+          {at + 1 < blocks.length && <span className="text-quiet"> ·</span>}
         </span>
       ))}
       {shown.length < blocks.length && (

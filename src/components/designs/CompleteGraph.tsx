@@ -1,5 +1,6 @@
 import { useMemo } from 'react';
 import { curveColour } from '@/components/charts/palette.ts';
+import { classes } from '@/components/ui/classes.ts';
 import { counted } from '@/components/ui/numbers.ts';
 import { type BlockDesign, blockOf } from '@/core/designs/block-design.ts';
 import { type BlockGroups, groupName } from './block-groups.ts';
@@ -75,7 +76,7 @@ function Point({ point, v, marked }: { point: number; v: number; marked: boolean
         y={y}
         dy="0.35em"
         textAnchor="middle"
-        className={marked ? 'fill-act font-semibold font-mono text-[15px]' : 'fill-ink font-mono text-[13px]'}
+        className={classes('font-mono text-[22px] sm:text-[14px]', marked ? 'fill-act font-semibold' : 'fill-ink')}
       >
         {point}
       </text>

@@ -38,7 +38,7 @@ export function DesignDrawing({ design, outline, groups, shown, chosen, address,
   const kind = address.drawing && fitting.includes(address.drawing) ? address.drawing : fitting[0]!;
   const H = useMemo(() => incidenceMatrix(design), [design]);
   return (
-    <section aria-labelledby="drawing" className="grid min-w-0 gap-3">
+    <section aria-labelledby="drawing" className="grid min-w-0 grid-cols-[minmax(0,1fr)] gap-3">
       <h2 id="drawing">{titles[kind]}</h2>
       {fitting.length > 1 && (
         <ChoiceGroup

@@ -12,6 +12,7 @@ import { type BlockGroups, disjointGroups, groupsFromClasses } from './block-gro
 import { blockFrom } from './block-search.ts';
 import { ClassRows } from './ClassRows.tsx';
 import { DesignDrawing } from './DesignDrawing.tsx';
+import { fittingDrawings } from './fitting-drawings.ts';
 import { QuestionList } from './QuestionList.tsx';
 import { useDesignAddress } from './use-design-address.ts';
 
@@ -22,9 +23,6 @@ interface Props {
   kept: Code['certificate'];
 }
 
-/** Without a resolution, blocks of smaller designs are told apart in drawings by groups that share no point. */
-const MOST_BLOCKS_GROUPED = 2000;
-
 /** A built design: its drawing, classes, blocks, certificate, and what can be asked of it. */
 export function DesignSheet({ opened, desk, elapsedMs, kept }: Props) {
   const { design } = opened;
@@ -34,8 +32,9 @@ export function DesignSheet({ opened, desk, elapsedMs, kept }: Props) {
   const classes = found ?? (opened.isResolved ? design.classes! : null);
   const groups = useMemo<BlockGroups | null>(() => {
     if (classes) return groupsFromClasses(classes);
-    return design.b <= MOST_BLOCKS_GROUPED ? disjointGroups(design) : null;
-  }, [classes, design]);
+    // Without a resolution, drawings tell blocks apart by groups that share no point.
+    return fittingDrawings(outline, true).length > 1 ? disjointGroups(design) : null;
+  }, [classes, design, outline]);
   const asked = blockFrom(address.block ?? '', design.b);
   const chosen = asked.ok ? asked.value : null;
   const shown = groups ? groupAsked(address.class, groups.count) : null;

@@ -16,8 +16,8 @@ export const questionLabels: Record<QuestionId, string> = {
   intersections: 'Block intersections',
   resolution: 'Resolution',
   twoRank: 'Rank over GF(2)',
-  pasches: 'Pasch configurations',
-  automorphisms: 'Automorphism group',
+  pasches: 'Pasch count',
+  automorphisms: 'Auto\u00admorphism group',
   designCount: 'Designs like it',
 };
 
@@ -54,7 +54,10 @@ export function answerText<Q extends QuestionId>(
 }
 
 function graded({ grade, method, source }: Graded<unknown>): { grade: Graded<unknown>['grade']; note: string } {
-  return { grade, note: `${method}${source ? `; ${citationText(source)}` : ''}.` };
+  return {
+    grade,
+    note: `${method.replace(/\d{5,}/g, (digits) => wholeNumber(Number(digits)))}${source ? `; ${citationText(source)}` : ''}.`,
+  };
 }
 
 function intersectionsText(counts: Graded<IntersectionCounts>): Shown {
@@ -64,7 +67,7 @@ function intersectionsText(counts: Graded<IntersectionCounts>): Shown {
       <span className="grid">
         {counts.value.map(([size, pairs]) => (
           <span key={size}>
-            {wholeNumber(size)}: {counted(pairs, 'pair')}
+            {counted(pairs, 'pair')} {size === 0 ? 'apart' : `in ${counted(size, 'point')}`}
           </span>
         ))}
         {counts.value.length === 0 && 'no two blocks'}

@@ -37,7 +37,7 @@ interface Props {
 
 /** A question without its answer yet; `children` are what can be set before asking. */
 export function Unanswered({ label, answer, onAsk, onCancel, children }: Props) {
-  const name = label.toLowerCase().replace('gf', 'GF');
+  const name = label.replace('\u00ad', '').replace(/^[A-Z]/, (first) => first.toLowerCase());
   if (answer.state === 'working') {
     return (
       <span className="grid w-60 max-w-full gap-1.5 font-normal">
