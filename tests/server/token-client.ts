@@ -23,6 +23,11 @@ export async function callByToken(
     },
     ...(body !== undefined && { body: JSON.stringify(body) }),
   });
+  // A stream of events has no end to wait for.
+  if (response.headers.get('content-type')?.startsWith('text/event-stream')) {
+    await response.body?.cancel();
+    return { status: response.status, body: undefined, headers: response.headers };
+  }
   const text = await response.text();
   const isJson = response.headers.get('content-type')?.startsWith('application/json');
   return { status: response.status, body: isJson ? JSON.parse(text) : text, headers: response.headers };
