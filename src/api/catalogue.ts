@@ -105,6 +105,25 @@ export const catalogueAnswerSchema = z.object({
 
 const within = (min: number, max: number, words: string) => z.int(words).min(min, words).max(max, words);
 
+/** Where all that matches lies, for a drawing: cells of neighbours, each with the length and least rate of one of them. */
+export const catalogueMapSchema = z.object({
+  cells: z.array(
+    z.object({
+      n: z.number(),
+      rate: z.number(),
+      structure: z.enum(['cyclic', 'quasi-cyclic', 'none']),
+      count: z.number(),
+    }),
+  ),
+  matching: z.number(),
+});
+
+/** A candidate by its id, judged by the rest of the query. */
+export const candidateQueryParams = catalogueQueryParams.extend({
+  id: z.string('the id of a candidate').min(1).max(400),
+});
+export const candidateAnswerSchema = z.object({ candidate: candidateSchema.nullable() });
+
 export const feasibilityQuerySchema = z.strictObject({
   t: within(1, 8, 'a whole number from 1 to 8'),
   v: within(2, 1_000_000, 'a whole number from 2 to 1 000 000'),

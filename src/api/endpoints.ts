@@ -1,7 +1,10 @@
 import { z } from 'zod';
 import { accountPatchSchema, accountSchema, newPasswordSchema, passwordChangeSchema } from './account.ts';
 import {
+  candidateAnswerSchema,
+  candidateQueryParams,
   catalogueAnswerSchema,
+  catalogueMapSchema,
   catalogueQueryParams,
   feasibilityAnswerSchema,
   feasibilityQuerySchema,
@@ -69,6 +72,14 @@ export const endpoints = {
   searchCatalogue: endpoint('GET', '/catalogue', 'Constructions that could meet requirements, from closed formulas', {
     query: catalogueQueryParams,
     response: catalogueAnswerSchema,
+  }),
+  mapCatalogue: endpoint('GET', '/catalogue/map', 'Where everything that matches lies, by length and rate', {
+    query: catalogueQueryParams,
+    response: catalogueMapSchema,
+  }),
+  findCandidate: endpoint('GET', '/catalogue/candidate', 'One candidate by its id, with its verdicts', {
+    query: candidateQueryParams,
+    response: candidateAnswerSchema,
   }),
   feasibility: endpoint('POST', '/feasibility', 'Whether a design exists, with the theorem that says so', {
     body: feasibilityQuerySchema,

@@ -86,6 +86,10 @@ export class CatalogueColumns {
     return this.designs[this.columns.design[row]!]!;
   }
 
+  structureOf(row: number): Entry['structure'] {
+    return structures[this.columns.structure[row]!]!;
+  }
+
   entry(row: number): Entry {
     const { checks, keptClasses } = this.columns;
     const kept = keptClasses[row]! > 0 ? keptClasses[row]! : undefined;
