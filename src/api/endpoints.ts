@@ -43,6 +43,7 @@ import {
   shardReceiptSchema,
   waitQueryParams,
 } from './runs.ts';
+import { newDecisionSchema, newSignOffSchema, signOffSchema, signOffSheetSchema } from './sign-offs.ts';
 import { newTokenSchema, tokenSchema } from './tokens.ts';
 import { uploadQueryParams } from './uploads.ts';
 
@@ -261,4 +262,21 @@ export const endpoints = {
     success: [204],
   }),
   discardDeadLetter: endpoint('DELETE', '/mail/dead/:id', 'Drop undeliverable mail', { success: [204] }),
+  listSignOffs: endpoint('GET', '/projects/:id/sign-offs', 'Sign-offs asked for in the project, newest first', {
+    query: z.object(page),
+    response: z.object({ signOffs: z.array(signOffSchema), next: z.string().optional() }),
+  }),
+  askSignOff: endpoint('POST', '/projects/:id/sign-offs', 'Ask for a sign-off on a code, as it stands now', {
+    body: newSignOffSchema,
+    response: z.object({ signOff: signOffSchema }),
+    success: [201],
+  }),
+  getSignOff: endpoint('GET', '/sign-offs/:id', 'A sign-off with its snapshot and checks', {
+    response: signOffSheetSchema,
+  }),
+  decideSignOff: endpoint('POST', '/sign-offs/:id/decision', 'Approve or return, with a reason', {
+    body: newDecisionSchema,
+    response: z.object({ signOff: signOffSchema }),
+    success: [201],
+  }),
 } as const;

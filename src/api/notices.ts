@@ -6,6 +6,8 @@ export const noticeKinds = {
   'run-failed': 'A run of mine has failed',
   'verdict-reached': 'A run of mine has reached its verdict',
   quarantine: 'Results of a run of mine were set aside',
+  'sign-off-asked': 'A sign-off is asked for that I may decide on',
+  'sign-off-decided': 'A sign-off that I asked for is decided',
 } as const;
 export type NoticeKind = keyof typeof noticeKinds;
 

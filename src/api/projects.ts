@@ -32,6 +32,8 @@ export const projectSchema = z.object({
     codes: z.number(),
     runs: z.number(),
     runsUnderWay: z.number(),
+    signOffs: z.number(),
+    signOffsOpen: z.number(),
     releases: z.number(),
   }),
 });

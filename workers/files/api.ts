@@ -3,6 +3,8 @@ import type { DesignSpec } from '@/core/designs/block-design.ts';
 import type { GeneratorForm } from '@/core/formats/generator-forms.ts';
 import type { Bundle, ReleaseFacts } from '@/core/release/bundle.ts';
 import type { ReleaseContents, ReleasedCode } from '@/core/release/release-files.ts';
+import type { RunSpec } from '@/core/simulation/run-spec.ts';
+import type { Tally } from '@/core/simulation/tally.ts';
 import type { VectorRequest } from '@/core/test-vectors/test-vectors.ts';
 import type { VectorForm, VectorHead } from '@/core/test-vectors/vector-files.ts';
 import type { WorkerFailure } from '../failure.ts';
@@ -12,7 +14,8 @@ export type FilesRequest =
   | { kind: 'blocks'; design: DesignSpec; form: 'text' | 'json'; provenance: Record<string, unknown> }
   | { kind: 'generator'; H: SparseMatrix; form: GeneratorForm['id'] }
   | { kind: 'vectors'; H: SparseMatrix; request: VectorRequest; form: VectorForm; head: VectorHead }
+  | { kind: 'shards'; H: SparseMatrix; shards: (Omit<RunSpec, 'H'> & { index: number })[] }
   | { kind: 'bundle'; code: ReleasedCode; contents: ReleaseContents; facts: ReleaseFacts; folder: string };
 
-/** A file's bytes come in parts before the answer; a bundle comes with it. */
-export type FilesAnswer = { ok: true; bundle?: Bundle } | { ok: false; failure: WorkerFailure };
+/** A file's bytes come in parts before the answer; a bundle, or the tallies of shards computed again, come with it. */
+export type FilesAnswer = { ok: true; bundle?: Bundle; tallies?: Tally[] } | { ok: false; failure: WorkerFailure };

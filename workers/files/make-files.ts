@@ -1,6 +1,8 @@
 import { generatorForms } from '@/core/formats/generator-forms.ts';
 import { bundleRelease } from '@/core/release/bundle.ts';
 import { releaseFiles, writeBlocks } from '@/core/release/release-files.ts';
+import { runShard } from '@/core/simulation/shard.ts';
+import type { Tally } from '@/core/simulation/tally.ts';
 import { vectorFile } from '@/core/test-vectors/vector-files.ts';
 import { failureOf } from '../failure.ts';
 import type { FilesAnswer, FilesRequest } from './api.ts';
@@ -20,6 +22,11 @@ export async function makeFiles(request: FilesRequest, onPart: (part: Uint8Array
       case 'vectors':
         await inParts(vectorFile(request.H, request.request, request.form, request.head), onPart);
         return { ok: true };
+      case 'shards': {
+        const tallies: Tally[] = [];
+        for (const { index, ...spec } of request.shards) tallies.push(await runShard({ ...spec, H: request.H }, index));
+        return { ok: true, tallies };
+      }
       case 'bundle': {
         const files = await releaseFiles(request.code, request.contents);
         return { ok: true, bundle: await bundleRelease(request.facts, files, request.folder) };

@@ -39,7 +39,7 @@ export function stationsOf(project: Pick<Project, 'id' | 'counts'>): Station[] {
       state: counts.runs === 0 ? 'no points yet' : `points of ${counted(counts.runs, 'run')}`,
       href: paths.compare(id),
     },
-    { step: 'sign-off', label: 'Sign-off', state: 'to come' },
+    { step: 'sign-off', label: 'Sign-off', state: signOffState(counts), href: paths.signOffs(id) },
     {
       step: 'release',
       label: 'Release',
@@ -47,6 +47,11 @@ export function stationsOf(project: Pick<Project, 'id' | 'counts'>): Station[] {
       href: paths.releases(id),
     },
   ];
+}
+
+function signOffState({ signOffs, signOffsOpen }: Project['counts']): string {
+  if (signOffs === 0) return 'none asked for';
+  return signOffsOpen > 0 ? `${signOffsOpen} open` : `${signOffs} decided`;
 }
 
 function runState({ runs, runsUnderWay }: Project['counts']): string {

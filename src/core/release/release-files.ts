@@ -29,6 +29,8 @@ export interface ReleasedCode {
   design?: DesignSpec;
   /** Written into the JSON matrix and the JSON block list. */
   provenance: Record<string, unknown>;
+  /** The snapshot that was signed off, to the byte: its SHA-256 is the digest in the manifest. */
+  signOff?: string;
 }
 
 export interface PlainFile {
@@ -65,6 +67,10 @@ export async function releaseFiles(code: ReleasedCode, contents: ReleaseContents
   }
   files.push(...blockFiles(code, contents.blocks));
   if (contents.vectors) files.push(...(await vectorFiles(code, contents.vectors)));
+  if (code.signOff !== undefined) {
+    const bytes = new TextEncoder().encode(code.signOff);
+    files.push({ name: 'sign-off.json', mediaType: 'application/json', title: 'what was signed off', bytes });
+  }
   return files;
 }
 

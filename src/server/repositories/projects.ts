@@ -47,7 +47,12 @@ function sharedWith(db: Database, userId: string) {
     .select('projects.*', 'memberships.role as member_role')
     .select(countOf('requirements', 'requirement_count'), countOf('codes', 'code_count'), countOf('runs', 'run_count'))
     .select(countOf('runs', 'open_run_count').where('runs.state', 'running'))
-    .select(countOf('releases', 'release_count'));
+    .select(countOf('releases', 'release_count'), countOf('sign_offs', 'sign_off_count'))
+    .select(
+      countOf('sign_offs', 'open_sign_off_count').whereNotExists(
+        db('sign_off_decisions').whereRaw('sign_off_decisions.sign_off_id = sign_offs.id'),
+      ),
+    );
 }
 
 function toProject(row: Row): Project {
@@ -63,6 +68,8 @@ function toProject(row: Row): Project {
       codes: row.code_count!,
       runs: row.run_count!,
       runsUnderWay: row.open_run_count!,
+      signOffs: row.sign_off_count!,
+      signOffsOpen: row.open_sign_off_count!,
       releases: row.release_count!,
     },
   };

@@ -11,6 +11,7 @@ export interface CodeFacts extends ReleaseFacts {
   code: Pick<Code, 'id' | 'name' | 'n' | 'k' | 'rows' | 'ones'>;
   lineage: Pick<Code, 'design' | 'designTitle' | 'derivation' | 'certificate'> & Record<string, unknown>;
   properties: Omit<Code['properties'][number], 'elapsedMs'>[];
+  signOff: { digest: string } | null;
 }
 
 export interface NewReleaseRow {

@@ -5,8 +5,11 @@ import { type Lattice, planeOfOrder2, planeOfOrder3 } from '@/components/shell/l
 import { Ruler } from '@/components/shell/Ruler.tsx';
 import { entryPath, stationsOf } from '@/components/shell/stations.ts';
 
-const project = { id: 'p1', counts: { requirements: 1, codes: 4, runs: 7, runsUnderWay: 1, releases: 2 } };
-const none = { requirements: 0, codes: 0, runs: 0, runsUnderWay: 0, releases: 0 };
+const project = {
+  id: 'p1',
+  counts: { requirements: 1, codes: 4, runs: 7, runsUnderWay: 1, signOffs: 3, signOffsOpen: 1, releases: 2 },
+};
+const none = { requirements: 0, codes: 0, runs: 0, runsUnderWay: 0, signOffs: 0, signOffsOpen: 0, releases: 0 };
 
 describe('the ruler', () => {
   test('has the seven steps in order, the present one marked', () => {
@@ -24,12 +27,11 @@ describe('the ruler', () => {
     expect(screen.getByRole('link', { current: 'page' }).textContent).toBe('Runs1 of 7 under way');
   });
 
-  test('a step without a page is no link', () => {
-    expect(
-      stationsOf(project)
-        .filter((station) => !station.href)
-        .map((station) => station.state),
-    ).toEqual(['to come']);
+  test('every step has a page, and says how it stands', () => {
+    expect(stationsOf(project).filter((station) => !station.href)).toEqual([]);
+    const states = (of: typeof project) => stationsOf(of).map((station) => station.state);
+    expect(states(project).slice(5)).toEqual(['1 open', '2 frozen']);
+    expect(states({ id: 'p1', counts: none }).slice(5)).toEqual(['none asked for', 'none yet']);
   });
 
   test('a project is entered at the first step not yet done', () => {

@@ -4,6 +4,7 @@ import { Refusal } from '../../refusal.ts';
 import { recordEvent } from '../../repositories/audit-events.ts';
 import { deleteCode as deleteRow, runsUsingCode } from '../../repositories/codes.ts';
 import { releasesOfCode } from '../../repositories/releases.ts';
+import { signOffsOfCode } from '../../repositories/sign-offs.ts';
 import { codeToWrite } from './get-code.ts';
 
 /** Removes a code; one that a run measures or a release holds stays, since they would lose their subject. */
@@ -21,6 +22,9 @@ export async function deleteCode(context: Context, codeId: string): Promise<void
     if (releases > 0) {
       const holding = releases === 1 ? 'One release holds' : `${releases} releases hold`;
       throw new Refusal('in-use', `${holding} this code, so it stays.`);
+    }
+    if ((await signOffsOfCode(trx, codeId)) > 0) {
+      throw new Refusal('in-use', 'A sign-off was asked for on this code, so it stays.');
     }
     await deleteRow(trx, codeId);
     const content = { name, fingerprint };

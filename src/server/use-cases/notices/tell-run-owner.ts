@@ -5,7 +5,9 @@ import type { Database } from '../../db/database.ts';
 import { ownerOfRun } from '../../repositories/notices.ts';
 import { tell } from './tell.ts';
 
-const what: Record<NoticeKind, string> = {
+type RunNotice = Exclude<NoticeKind, 'sign-off-asked' | 'sign-off-decided'>;
+
+const what: Record<RunNotice, string> = {
   'run-finished': 'is finished',
   'run-failed': 'has failed',
   'verdict-reached': 'has reached its verdict',
@@ -17,7 +19,7 @@ const what: Record<NoticeKind, string> = {
 export async function tellRunOwner(
   trx: Database,
   run: Pick<Run, 'id' | 'projectId' | 'name'>,
-  kind: NoticeKind,
+  kind: RunNotice,
   text: string,
 ): Promise<void> {
   const owner = await ownerOfRun(trx, run.id);

@@ -12,6 +12,7 @@ import { insertRelease, lastReleaseNumber, releaseById } from '../../repositorie
 import { projectToWrite } from '../rights.ts';
 import { makeBundle } from './make-bundle.ts';
 import { releaseFacts } from './release-facts.ts';
+import { signOffFacts } from './sign-off-facts.ts';
 
 export interface Making {
   pool: FilesPool;
@@ -34,7 +35,8 @@ export async function createRelease(
   if (code?.projectId !== projectId) throw badFields({ codeId: 'the id of a code of this project' });
   const number = (await lastReleaseNumber(db, projectId)) + 1;
   const createdAt = nowText();
-  const facts = await releaseFacts(context, project, code, { number, note, createdAt, signOff: null });
+  const signOff = await signOffFacts(db, codeId);
+  const facts = await releaseFacts(context, project, code, { number, note, createdAt, signOff });
   const folder = `${stemOf(project.name)}-release-${number}`;
   const bundle = await makeBundle(db, pool, { codeId, contents, facts, folder }, signal);
   for (const file of bundle.files) await storage.put(file.sha256, file.bytes);
@@ -51,7 +53,7 @@ export async function createRelease(
       trx,
       {
         ...{ id, projectId, number, title, note, codeId, fingerprint, contents, facts, createdAt },
-        signOff: null,
+        signOff: signOff?.digest ?? null,
         createdBy: caller.id,
       },
       bundle.files.map(listed),

@@ -10,6 +10,7 @@ import type { FilesPool } from '../../jobs/files-pool.ts';
 import { refusalOfFailure } from '../../jobs/worker-refusal.ts';
 import { matrixOf } from '../../repositories/codes.ts';
 import type { CodeFacts } from '../../repositories/releases.ts';
+import { snapshotByDigest } from '../../repositories/sign-offs.ts';
 
 interface Made {
   codeId: string;
@@ -27,7 +28,8 @@ export async function makeBundle(
   { codeId, contents, facts, folder }: Made,
   signal: AbortSignal,
 ): Promise<Bundle> {
-  const { code, lineage, fingerprint, properties, program } = facts;
+  const { code, lineage, fingerprint, properties, program, signOff } = facts;
+  const snapshot = signOff && (await snapshotByDigest(db, signOff.digest));
   const { design, designTitle, derivation, certificate } = lineage;
   const { name, n, k } = code;
   const released = {
@@ -35,6 +37,7 @@ export async function makeBundle(
     fingerprint,
     title: `(${n},${k}) ${designTitle}`,
     ...(design.family !== 'uploaded' && { design: design as DesignSpec }),
+    ...(snapshot && { signOff: snapshot }),
     provenance: {
       program,
       code: { name, n, k },

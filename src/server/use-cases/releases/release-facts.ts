@@ -1,13 +1,9 @@
 import type { Code } from '@/api/codes.ts';
 import type { Project } from '@/api/projects.ts';
 import type { Context } from '../../context.ts';
-import { measuredPointsOf } from '../../repositories/points.ts';
 import type { CodeFacts } from '../../repositories/releases.ts';
-import { requirementsOf } from '../../repositories/requirements.ts';
-import { runById } from '../../repositories/runs.ts';
 import { programVersion } from '../../version.ts';
-import { shownPoint } from '../runs/shown-point.ts';
-import { requirementVerdicts } from './requirement-verdicts.ts';
+import { codeEvidence } from '../sign-offs/code-evidence.ts';
 
 const cautions = [
   'Measured error rates hold for the channel model and decoder stated, not for a device.',
@@ -19,7 +15,14 @@ export interface ReleaseHead {
   number: number;
   note: string;
   createdAt: string;
-  signOff: { digest: string; by: string; at: string } | null;
+  signOff: {
+    digest: string;
+    by: string;
+    at: string;
+    reason: string;
+    /** When the requirements in its snapshot were stated. */
+    requirementsAt: string | null;
+  } | null;
 }
 
 /** All that the manifest says besides the files: where the code comes from, what is known of it and how, what it was
@@ -30,53 +33,24 @@ export async function releaseFacts(
   code: Code,
   { number, note, createdAt, signOff }: ReleaseHead,
 ): Promise<CodeFacts> {
-  const { requirements, updatedAt } = await requirementsOf(db, project.id);
-  const points = (await measuredPointsOf(db, project.id, { codeId: code.id })).map((point) => shownPoint(point, []));
-  const runs = new Map<string, Awaited<ReturnType<typeof runById>>>();
-  for (const { runId } of points) if (!runs.has(runId)) runs.set(runId, await runById(db, runId));
+  const evidence = await codeEvidence(db, project.id, code);
+  const standing = signOff && {
+    ...signOff,
+    restated: signOff.requirementsAt !== (evidence.requirements?.statedAt ?? null),
+  };
   return {
     manifest: 'blockwright-release-1',
     title: `${project.name}, release ${number}`,
     program: { name: 'Blockwright', version: programVersion },
     project: { id: project.id, name: project.name },
     release: { number, note, releasedBy: caller.name, releasedAt: createdAt },
-    code: { id: code.id, name: code.name, n: code.n, k: code.k, rows: code.rows, ones: code.ones },
-    fingerprint: code.fingerprint,
-    fingerprintDefinition:
-      'SHA-256 over little-endian 32-bit words: rows, cols, then for each row its weight and its columns ascending.',
-    lineage: {
-      design: code.design,
-      designTitle: code.designTitle,
-      derivation: code.derivation,
-      certificate: code.certificate,
-      keptBy: code.createdBy,
-      keptAt: code.createdAt,
-    },
-    properties: code.properties.map(({ elapsedMs: _time, ...known }) => known),
-    weights: { rows: code.rowWeights, columns: code.columnWeights },
-    requirements: requirements && {
-      stated: requirements,
-      statedAt: updatedAt,
-      verdicts: requirementVerdicts(requirements, code, points),
-    },
-    measurements: points.map((point) => {
-      const { runId, channel, decoder, tally, fer, ber, interval, berInterval, level, nextIndex } = point;
-      const { iterationHistogram: _histogram, ...sums } = tally;
-      const run = runs.get(runId);
-      return {
-        run: run && {
-          id: runId,
-          name: run.name,
-          seed: run.seed,
-          framesPerShard: run.framesPerShard,
-          shards: nextIndex,
-        },
-        ...{ grade: 'sampled', channel, decoder, tally: sums, level },
-        fer: { value: tally.frameErrors > 0 ? fer : null, ...interval },
-        ber: { value: tally.frameErrors > 0 ? ber : null, ...berInterval },
-      };
-    }),
-    signOff,
-    cautions: signOff ? cautions : ['Nobody has signed off on this code.', ...cautions],
+    ...evidence,
+    signOff: standing,
+    cautions: [...signOffCautions(standing), ...cautions],
   };
+}
+
+function signOffCautions(standing: { restated: boolean } | null): string[] {
+  if (!standing) return ['Nobody has signed off on this code.'];
+  return standing.restated ? ['The requirements were stated anew after this code was signed off.'] : [];
 }

@@ -1,17 +1,7 @@
 import type { Code } from '@/api/codes.ts';
 import type { Requirements } from '@/api/projects.ts';
 import type { Point } from '@/api/runs.ts';
-import type { Grade } from '@/core/evidence.ts';
-
-/** How a code stands to one requirement, and how that is known. */
-export interface RequirementVerdict {
-  requirement: string;
-  /** What was asked for, as a number or a word. */
-  asked: number | string;
-  outcome: 'met' | 'missed' | 'undecided';
-  grade: Grade;
-  method: string;
-}
+import type { RequirementVerdict } from '@/api/sign-offs.ts';
 
 /** Every stated requirement, held against the code and its measured points. A rate is met only when the upper limit of
  *  a point at the stated channel (any channel, where none is stated) is within the target; what nobody measured is
