@@ -48,7 +48,14 @@ export const measurementSchema = z.object({
   fileName: z.string(),
   n: z.number(),
   k: z.number(),
-  points: z.array(measuredPointSchema),
+  points: z.array(
+    z.object({
+      ...measuredPointSchema.shape,
+      /** Clopper–Pearson on the frame error rate at `level`; with no error seen, lower is 0 and upper the one-sided limit. */
+      interval: z.object({ lower: z.number(), upper: z.number() }),
+    }),
+  ),
+  level: z.number(),
   createdAt: z.string(),
   createdBy: z.string(),
 });

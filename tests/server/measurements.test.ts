@@ -24,6 +24,9 @@ describe('measured data', () => {
     const viewer = await demoClient(server.base, 'viewer');
     const listed = await viewer.get(`/projects/${projectId}/measurements`);
     expect(listed.body.measurements[0]).toMatchObject({ ...measured, id, createdBy: 'Demo engineer' });
+    // 3 of 1000 at 95 %: 0.000619 to 0.008742 (Clopper and Pearson 1934, by the beta quantiles of SciPy 1.10).
+    const { lower, upper } = listed.body.measurements[0].points[0].interval;
+    expect([lower, upper]).toEqual([expect.closeTo(0.000619, 6), expect.closeTo(0.008742, 6)]);
     expect((await viewer.call('DELETE', `/measurements/${id}`)).status).toBe(403);
     expect((await client.call('DELETE', `/measurements/${id}`)).status).toBe(204);
     expect((await client.call('DELETE', `/measurements/${id}`)).status).toBe(404);

@@ -1,8 +1,5 @@
-import type { MeasuredPoint, Measurement } from '@/api/measurements.ts';
-import { binomialInterval, zeroErrorUpperLimit } from '@/core/statistics/binomial-interval.ts';
+import type { Measurement } from '@/api/measurements.ts';
 import type { Curve, CurvePoint, Estimate } from './curve.ts';
-
-const level = 0.95;
 
 /** Measured data as curves, with intervals of their own. */
 export const measuredCurves = (measurements: readonly Measurement[]): Curve[] =>
@@ -17,17 +14,16 @@ export const measuredCurves = (measurements: readonly Measurement[]): Curve[] =>
     points: measured.points.map((point) => measuredPoint(measured, point)).sort((a, b) => b.p - a.p),
   }));
 
-function measuredPoint({ id, n }: Measurement, { p, frames, frameErrors, bitErrors }: MeasuredPoint): CurvePoint {
-  const limits =
-    frameErrors === 0
-      ? { lower: 0, upper: zeroErrorUpperLimit(frames, level) }
-      : binomialInterval(frameErrors, frames, level);
-  const fer: Estimate = { value: frameErrors === 0 ? null : frameErrors / frames, ...limits };
+function measuredPoint(
+  { id, n, level }: Measurement,
+  { p, frames, frameErrors, bitErrors, interval }: Measurement['points'][number],
+): CurvePoint {
+  const fer: Estimate = { value: frameErrors === 0 ? null : frameErrors / frames, ...interval };
   // The spread of bit errors over frames is not known: a failed frame has at least one wrong bit, and at most n.
   const ber: Estimate = {
     value: !bitErrors ? null : bitErrors / (frames * n),
-    lower: limits.lower / n,
-    upper: limits.upper,
+    lower: interval.lower / n,
+    upper: interval.upper,
   };
   return {
     pointId: `${id}~${p}`,

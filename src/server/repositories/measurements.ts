@@ -2,6 +2,9 @@ import type { Measurement, NewMeasurement } from '@/api/measurements.ts';
 import type { Database } from '../db/database.ts';
 import type { Row } from './row.ts';
 
+/** A data set as it lies in the database, without what is computed of it. */
+export type StoredMeasurement = Omit<Measurement, 'points' | 'level'> & Pick<NewMeasurement, 'points'>;
+
 export interface NewMeasurementRow extends NewMeasurement {
   id: string;
   projectId: string;
@@ -29,7 +32,7 @@ const shown = (db: Database) =>
     .select('measurements.*', 'users.name as author');
 
 /** Data sets of a project, newest first; at most as many as one chart could ever show. */
-export async function measurementsOf(db: Database, projectId: string): Promise<Measurement[]> {
+export async function measurementsOf(db: Database, projectId: string): Promise<StoredMeasurement[]> {
   const rows = await shown(db)
     .where('measurements.project_id', projectId)
     .orderBy('measurements.id', 'desc')
@@ -37,7 +40,7 @@ export async function measurementsOf(db: Database, projectId: string): Promise<M
   return rows.map(toMeasurement);
 }
 
-export async function measurementById(db: Database, id: string): Promise<Measurement | undefined> {
+export async function measurementById(db: Database, id: string): Promise<StoredMeasurement | undefined> {
   const row = await shown(db).where('measurements.id', id).first();
   return row && toMeasurement(row);
 }
@@ -46,7 +49,7 @@ export async function deleteMeasurement(db: Database, id: string): Promise<void>
   await db('measurements').where({ id }).delete();
 }
 
-function toMeasurement(row: Row): Measurement {
+function toMeasurement(row: Row): StoredMeasurement {
   return {
     id: row.id!,
     projectId: row.project_id!,

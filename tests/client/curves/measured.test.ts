@@ -64,7 +64,7 @@ describe('a file of measured rates', () => {
   });
 });
 
-test('measured data are a curve with Clopper–Pearson intervals of their own', () => {
+test('measured data are a curve with intervals of their own; bits of a failed frame are from one to all', () => {
   const measured: Measurement = {
     id: 'm1',
     projectId: 'p',
@@ -72,19 +72,18 @@ test('measured data are a curve with Clopper–Pearson intervals of their own', 
     fileName: 'b.csv',
     n: 100,
     k: 50,
+    level: 0.95,
     points: [
-      { p: 0.01, frames: 10, frameErrors: 1, bitErrors: 5 },
-      { p: 0.02, frames: 100, frameErrors: 0, bitErrors: null },
+      { p: 0.01, frames: 10, frameErrors: 1, bitErrors: 5, interval: { lower: 0.0025, upper: 0.445 } },
+      { p: 0.02, frames: 100, frameErrors: 0, bitErrors: null, interval: { lower: 0, upper: 0.0296 } },
     ],
     createdAt: '',
     createdBy: '',
   };
   const curves = measuredCurves([measured]);
   const [zero, one] = curves[0]!.points;
-  expect([zero!.p, zero!.fer.value, zero!.fer.lower]).toEqual([0.02, null, 0]);
-  // 1 of 10 at 95 %: 0.0025286 to 0.4450161 (Clopper and Pearson 1934; the usual worked example).
-  expect(one!.fer.lower).toBeCloseTo(0.0025286, 6);
-  expect(one!.fer.upper).toBeCloseTo(0.4450161, 6);
-  expect(one!.ber).toEqual({ value: 0.005, lower: one!.fer.lower / 100, upper: one!.fer.upper });
+  expect([zero!.p, zero!.fer]).toEqual([0.02, { value: null, lower: 0, upper: 0.0296 }]);
+  expect(one!.fer).toEqual({ value: 0.1, lower: 0.0025, upper: 0.445 });
+  expect(one!.ber).toEqual({ value: 0.005, lower: 0.000025, upper: 0.445 });
   expect(curveLabels(curves)).toEqual(['(100,50) measured']);
 });

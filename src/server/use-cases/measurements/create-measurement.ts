@@ -5,6 +5,7 @@ import { newId } from '../../ids.ts';
 import { recordEvent } from '../../repositories/audit-events.ts';
 import { insertMeasurement, measurementById } from '../../repositories/measurements.ts';
 import { projectToWrite } from '../rights.ts';
+import { shownMeasurement } from './shown-measurement.ts';
 
 /** Keeps error rates that were measured elsewhere, to be laid over this project's own. */
 export async function createMeasurement(
@@ -20,5 +21,5 @@ export async function createMeasurement(
     const content = { name: measured.name, fileName: measured.fileName, points: measured.points.length };
     await recordEvent(trx, caller, { projectId, kind: 'measurement.created', subject: id, content });
   });
-  return (await measurementById(db, id))!;
+  return shownMeasurement((await measurementById(db, id))!);
 }
