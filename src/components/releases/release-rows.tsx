@@ -1,9 +1,10 @@
 import type { z } from 'zod';
 import type { Release, releaseSheetSchema } from '@/api/releases.ts';
+import type { RequirementVerdict } from '@/api/sign-offs.ts';
 import type { TitleRow } from '@/components/ui/TitleBlock.tsx';
-import type { Grade } from '@/core/evidence.ts';
 import { paths } from '@/paths.ts';
 import { dateText } from '../runs/RunTitleBlock.tsx';
+import { verdictRows } from '../sign-offs/sign-off-rows.tsx';
 import { ReleaseState } from './ReleaseState.tsx';
 
 /** What a release is: of which code, by whom, for what, and whether it holds. */
@@ -30,24 +31,8 @@ export function releaseRows(release: Release): TitleRow[] {
   ];
 }
 
-interface Verdict {
-  requirement: string;
-  asked: number | string;
-  outcome: 'met' | 'missed' | 'undecided';
-  grade: Grade;
-  method: string;
-}
-
 /** How the code stood to the requirements when it was released; null when none were stated. */
-export function verdictRows(manifest: z.infer<typeof releaseSheetSchema>['manifest']): TitleRow[] | null {
-  const stated = manifest.requirements as { verdicts: Verdict[] } | null;
-  if (!stated) return null;
-  return stated.verdicts.map(({ requirement, asked, outcome, grade, method }) => ({
-    label: `${requirement}, ${asked}`,
-    value: <span className={LOOK[outcome]}>{outcome}</span>,
-    grade,
-    note: method,
-  }));
+export function requirementRows(manifest: z.infer<typeof releaseSheetSchema>['manifest']): TitleRow[] | null {
+  const stated = manifest.requirements as { verdicts: RequirementVerdict[] } | null;
+  return stated && verdictRows(stated.verdicts);
 }
-
-const LOOK = { met: 'text-pass', missed: 'text-fail', undecided: 'text-thin' } as const;
