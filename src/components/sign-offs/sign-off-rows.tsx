@@ -1,4 +1,5 @@
 import type { EvidenceCheck, RequirementVerdict, SignOff } from '@/api/sign-offs.ts';
+import { scientific } from '@/components/ui/numbers.ts';
 import type { TitleRow } from '@/components/ui/TitleBlock.tsx';
 import { paths } from '@/paths.ts';
 import { dateText } from '../runs/RunTitleBlock.tsx';
@@ -50,7 +51,7 @@ const VERDICT_LOOK = { met: 'text-pass', missed: 'text-fail', undecided: 'text-t
 
 export const verdictRows = (verdicts: readonly RequirementVerdict[]): TitleRow[] =>
   verdicts.map(({ requirement, asked, outcome, grade, method }) => ({
-    label: `${requirement}, ${asked}`,
+    label: `${requirement}, ${typeof asked === 'number' ? scientific(asked) : asked}`,
     value: <span className={VERDICT_LOOK[outcome]}>{outcome}</span>,
     grade,
     note: method,

@@ -26,7 +26,7 @@ export function evidenceChecks({ lineage, requirements, measurements }: CodeEvid
           ? 'none is stated'
           : open.length === 0
             ? `all ${verdicts.length}`
-            : `not ${open.join(', ')}`,
+            : `missed or undecided: ${open.join(', ')}`,
     },
     {
       check: `every measured point has ${enoughFrameErrors} frame errors, or none`,
