@@ -1,6 +1,7 @@
 import { type BlockDesign, blockOf } from '../designs/block-design.ts';
 import { FormatError } from '../errors.ts';
 import type { BlockList } from './block-list.ts';
+import { decodeText } from './decode-text.ts';
 import { parseJson } from './json.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 
@@ -26,7 +27,7 @@ export function writeBlockListJson(
 /** Reads such a file; other keys are passed over. `points` may be left out when counting starts at 0.
  *  @throws FormatError with the place of a syntax error or the name of a wrong key; LimitError on size. */
 export function readBlockListJson(bytes: Uint8Array): BlockList {
-  const text = new TextDecoder().decode(bytes);
+  const text = decodeText(bytes);
   const value = (parseJson(text) ?? {}) as Record<'points' | 'blocks' | 'classes' | 'countedFrom', unknown>;
   const { points, blocks, classes, countedFrom = 0 } = value;
   const wrong = (key: string, expected: string, found: unknown) => {

@@ -1,5 +1,6 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { FormatError } from '../errors.ts';
+import { decodeText } from './decode-text.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 
 /** FNV-1a (Fowler, Noll, Vo), 32 bits, over the little-endian words rows, cols, row starts, column indices. A reader in C
@@ -50,7 +51,7 @@ ${lines(H.colIndex.length === 0 ? [0] : H.colIndex)}
 /** Reads a header written so, and holds it against its checksum.
  *  @throws FormatError naming what is missing, malformed or altered; LimitError on size. */
 export function readCHeader(bytes: Uint8Array): SparseMatrix {
-  const text = new TextDecoder().decode(bytes);
+  const text = decodeText(bytes);
   const lineOf = (at: number) => text.slice(0, Math.max(0, at)).split('\n').length;
   const macro = (name: string) => {
     const match = new RegExp(`#define\\s+${name}\\s+(0x[0-9a-f]+|\\d+)u?\\b`, 'i').exec(text);

@@ -1,5 +1,6 @@
 import { matrixFromRows, type SparseMatrix } from '../codes/sparse-matrix.ts';
 import { FormatError, ParamError } from '../errors.ts';
+import { decodeText } from './decode-text.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 
 /** The matrix as `{rows, columns, ones, countedFrom: 0, onesByRow: [[…], …]}`, one row a line, after anything that says
@@ -17,7 +18,7 @@ export function writeJson(H: SparseMatrix, provenance: Readonly<Record<string, u
 /** Reads such a file; other keys are passed over.
  *  @throws FormatError with the place of a syntax error or the name of a wrong key; LimitError on size. */
 export function readJson(bytes: Uint8Array): SparseMatrix {
-  const text = new TextDecoder().decode(bytes);
+  const text = decodeText(bytes);
   const value = parseJson(text) as { columns?: unknown; rows?: unknown; countedFrom?: unknown; onesByRow?: unknown };
   const { columns, rows, onesByRow, countedFrom = 0 } = value ?? {};
   const lineOf = (key: string) => text.slice(0, Math.max(0, text.indexOf(`"${key}"`))).split('\n').length;

@@ -1,4 +1,5 @@
 import { FormatError } from '../errors.ts';
+import { decodeText } from './decode-text.ts';
 
 export interface KeyedLines {
   /** What stands after `key=`, trimmed. @throws FormatError when the key is missing. */
@@ -14,7 +15,7 @@ export interface KeyedLines {
 export function linesOf(bytes: Uint8Array): KeyedLines {
   const values = new Map<string, { text: string; line: number }>();
   const rest: KeyedLines['rest'] = [];
-  const lines = new TextDecoder().decode(bytes).split(/\r\n|\n|\r/);
+  const lines = decodeText(bytes).split(/\r\n|\n|\r/);
   lines.forEach((raw, i) => {
     const text = raw.trim();
     if (text === '' || text.startsWith('#')) return;

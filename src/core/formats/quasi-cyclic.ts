@@ -1,5 +1,6 @@
 import { matrixFromRows, rowOf, type SparseMatrix } from '../codes/sparse-matrix.ts';
 import { FormatError, ParamError } from '../errors.ts';
+import { decodeText } from './decode-text.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 
 /** The largest block size z for which every z × z block is a sum of shifted identities, or null when that is only z = 1. */
@@ -33,7 +34,7 @@ export function writeQuasiCyclic(H: SparseMatrix): Uint8Array {
 
 /** @throws FormatError with line and column of what is wrong; LimitError on size. */
 export function readQuasiCyclic(bytes: Uint8Array): SparseMatrix {
-  const text = new TextDecoder().decode(bytes);
+  const text = decodeText(bytes);
   const lines = text.split(/\r\n|\n|\r/).map((line, i) => ({ text: line, number: i + 1 }));
   const used = lines.filter((line) => line.text.trim() !== '' && !line.text.trimStart().startsWith('#'));
   const head = /^\s*z=(\d{1,7}) block-rows=(\d{1,7}) block-columns=(\d{1,7})\s*$/.exec(used[0]?.text ?? '');

@@ -1,0 +1,98 @@
+import { zipSync } from 'fflate';
+import { describe, expect, test } from 'vitest';
+import { FormatError, LimitError } from '@/core/errors.ts';
+import { exportMatrix, importMatrix } from '@/core/formats/index.ts';
+import { encodeNpy } from '@/core/formats/npy.ts';
+import { readUpload } from '@/core/formats/read-upload.ts';
+import { quasiCyclicPlane as H } from '../../models/quasi-cyclic-plane.ts';
+
+const text = (of: string) => new TextEncoder().encode(of);
+const small = { rows: 2, cols: 3, rowStart: Uint32Array.of(0, 2, 3), colIndex: Uint32Array.of(0, 2, 1) };
+const written = (format: string) => new TextDecoder().decode(exportMatrix(small, format));
+
+describe('an archive', () => {
+  test('whose member claims to unpack beyond the limits is refused before it is unpacked', () => {
+    const bytes = zipSync({ 'data.npy': new Uint8Array(1000) }, { level: 9 });
+    // The size after unpacking, in the local header and in the central directory: said to be 2 GB.
+    const view = new DataView(bytes.buffer);
+    for (let at = 0; at + 4 <= bytes.length; at++) {
+      const mark = view.getUint32(at, true);
+      if (mark === 0x04034b50) view.setUint32(at + 22, 2_000_000_000, true);
+      if (mark === 0x02014b50) view.setUint32(at + 24, 2_000_000_000, true);
+    }
+    expect(() => importMatrix(bytes, 'npz')).toThrow(LimitError);
+  });
+
+  test('of zeros packed a thousand to one is refused by what its arrays say, in little time', () => {
+    const huge = encodeNpy({
+      shape: [20_000_000],
+      descr: '|i1',
+      fortranOrder: false,
+      data: new Uint8Array(20_000_000),
+    });
+    const bytes = zipSync({ 'data.npy': huge, 'format.npy': huge, 'shape.npy': huge }, { level: 9 });
+    expect(bytes.length).toBeLessThan(100_000);
+    expect(() => importMatrix(bytes, 'npz')).toThrow(FormatError);
+  });
+
+  test('with names that lead out of a folder has them passed over', () => {
+    const bytes = zipSync({ '../../etc/passwd': text('x'), '/absolute.npy': text('x'), 'C:\\data.npy': text('x') });
+    expect(() => importMatrix(bytes, 'npz')).toThrow(/member/);
+  });
+});
+
+describe('a text file', () => {
+  test.each(['alist', 'mtx', 'csv'])(
+    '%s is the same with CRLF, CR, a byte order mark and no last newline',
+    (format) => {
+      const plain = written(format);
+      for (const changed of [
+        plain.replaceAll('\n', '\r\n'),
+        plain.replaceAll('\n', '\r'),
+        `\uFEFF${plain}`,
+        plain.trimEnd(),
+      ])
+        expect(importMatrix(text(changed), format)).toEqual(small);
+    },
+  );
+
+  test.each([
+    ['alist', '3 2\n1 2\n1 1 1\n2 1\n1\n2\n1\n1 3\n1\n', /line/],
+    ['mtx', '%%MatrixMarket matrix coordinate pattern general\n2 3 1\n0 1\n', /count from 1/],
+    ['csv', '# rows=2 columns=3 counted-from=0\nrow,column\n2,0\n', /count from 0/],
+    ['csv', 'row,column\n1,1\n2,3\n', /start of counting cannot be told/],
+  ])('%s that counts from the other end is told so', (format, wrong, message) => {
+    expect(() => importMatrix(text(wrong), format)).toThrow(message);
+  });
+
+  test.each([
+    ['mtx', '%%MatrixMarket matrix coordinate pattern general\n2 3 2\n1 1\n1 1\n'],
+    ['csv', '# rows=2 columns=3 counted-from=0\nrow,column\n0,1\n0,1\n'],
+    ['json', '{"rows":1,"columns":3,"onesByRow":[[1,1]]}'],
+    ['alist', '2 1\n1 2\n1 1\n2\n1\n1\n1 1\n'],
+  ])('%s with a one twice is refused, since over GF(2) two ones cancel', (format, doubled) => {
+    expect(() => importMatrix(text(doubled), format)).toThrow(FormatError);
+  });
+
+  test.each(['alist', 'mtx', 'csv', 'json', 'c', 'qc'])('%s with NUL bytes is refused with the place', (format) => {
+    const bytes = exportMatrix(H, format);
+    bytes.fill(0, Math.floor(bytes.length / 2), Math.floor(bytes.length / 2) + 3);
+    expect(() => importMatrix(bytes, format)).toThrow(/line \d+/);
+  });
+
+  test('of one endless line is refused in little memory', () => {
+    const size = 150_000_000;
+    const source = {
+      size,
+      read(position: number, into: Uint8Array) {
+        const count = Math.max(0, Math.min(into.length, size - position));
+        into.fill(65, 0, count);
+        return count;
+      },
+    };
+    const from = performance.now();
+    expect(() => readUpload(source, 'alist')).toThrow(FormatError);
+    expect(() => readUpload(source)).toThrow(/formats/);
+    expect(performance.now() - from).toBeLessThan(5000);
+  });
+});
