@@ -1,7 +1,7 @@
 import type { DesignSpec, Symmetry } from '../designs/block-design.ts';
 import type { Enclosure, Graded } from '../evidence.ts';
 import { type Circulant, circulantOf, cyclicGenerators } from '../gf2/cyclic.ts';
-import { rank as rankOf } from '../gf2/rank.ts';
+import { findRank } from '../gf2/rank.ts';
 import { type CycleCounts, countCycles } from './analysis/cycles.ts';
 import { type DistanceEffort, distanceOf } from './analysis/distance/distance.ts';
 import { girth as girthOf } from './analysis/girth.ts';
@@ -56,12 +56,12 @@ export function analyseLdpc(
   const { H } = code;
   const circulant = circulantOf(H) ?? undefined;
   const cyclic = cyclicGenerators(H) !== null;
-  const rank = rankOf(H);
+  const { rank, method: rankMethod } = findRank(H);
   const k = H.cols - rank;
   const orbits = tannerOrbits(H, code.columnSymmetry);
   const girth = girthOf(H, orbits);
   const columnWeights = columnWeightProfile(H);
-  const rankMethod = cyclic ? 'n − deg gcd(rows, x^n + 1)' : 'elimination over GF(2)';
+  const leastColumnWeight = columnWeights[0]?.[0] ?? 0;
   const counted = options.cycles === false ? undefined : countCycles(H, girth, LONGEST_COUNTED, orbits);
   const cycles: Record<string, number | bigint> = Object.fromEntries(counted?.total ?? []);
   return {
@@ -73,7 +73,7 @@ export function analyseLdpc(
     columnWeights,
     girth,
     ...(counted && { cycles, cyclesPerColumn: counted.perColumn }),
-    distance: distanceOf(code, { k, girth, cyclic, leastColumnWeight: columnWeights[0]?.[0] ?? 0 }, options.distance),
+    distance: distanceOf(code, { k, girth, cyclic, leastColumnWeight, orbits }, options.distance),
     cyclic,
     circulant,
     evidence: {

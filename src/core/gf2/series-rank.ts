@@ -42,7 +42,7 @@ function leastValuation(
   for (let i = 0; i < freeRow.length; i++) {
     for (let j = 0; j < freeCol.length; j++) {
       const at = (freeRow[i]! * cols + freeCol[j]!) * length;
-      const most = best ? best.valuation : length;
+      const most: number = best?.valuation ?? length;
       let v = 0;
       while (v < most && values[at + v] === 0) v++;
       if (v === most) continue;

@@ -1,5 +1,6 @@
 import type { Symmetry } from '../../designs/block-design.ts';
 import { circulantOf } from '../../gf2/cyclic.ts';
+import { blockShift, quasiCyclicForm } from '../../gf2/quasi-cyclic.ts';
 import { rowIndex } from '../../gf2/row-index.ts';
 import { rowOf, type SparseMatrix } from '../sparse-matrix.ts';
 
@@ -15,11 +16,11 @@ export interface TannerOrbits {
   columns: Orbits;
   rows: Orbits;
   /** Where the symmetry came from. */
-  symmetry: 'none' | 'cyclic shift' | 'given';
+  symmetry: 'none' | 'cyclic shift' | 'block shift' | 'given';
 }
 
 /** Orbits under the permutations given, each checked here to map the set of rows onto itself (one that does not is left
- *  out); without any, under the cyclic shift when the rows are closed under it. */
+ *  out); without any, under the cyclic shift of all columns, or of blocks of columns, when the rows are closed under it. */
 export function tannerOrbits(H: SparseMatrix, given: readonly Symmetry[] = []): TannerOrbits {
   const shift = Uint32Array.from({ length: H.cols }, (_, c) => (c + 1) % H.cols);
   const circulant = circulantOf(H);
@@ -32,7 +33,10 @@ export function tannerOrbits(H: SparseMatrix, given: readonly Symmetry[] = []): 
     if (found.length > 0) return split(H, found, 'given');
   }
   const byShift = H.cols > 1 && H.rows > 0 ? symmetryOf(H, shift) : null;
-  return byShift ? split(H, [byShift], 'cyclic shift') : split(H, [], 'none');
+  if (byShift) return split(H, [byShift], 'cyclic shift');
+  const form = quasiCyclicForm(H);
+  const byBlocks = form && symmetryOf(H, blockShift(H.cols, form.size));
+  return byBlocks ? split(H, [byBlocks], 'block shift') : split(H, [], 'none');
 }
 
 /** A permutation of the columns with the permutation of the rows it brings about. */

@@ -2,22 +2,34 @@ import { ParamError } from '../../../errors.ts';
 import type { Enclosure, Graded } from '../../../evidence.ts';
 import type { AnalysableCode } from '../../analyse-ldpc.ts';
 import { cyclicGenerator } from '../../encode/generator-polynomial.ts';
+import { overlapSpectrum } from '../spectrum/second-eigenvalue.ts';
+import type { TannerOrbits } from '../tanner-orbits.ts';
+import { findDistance } from './exact-distance.ts';
 import { geometryDistance } from './geometry.ts';
 import { searchLowWeight } from './low-weight-search.ts';
-import { treeBound } from './tree-bound.ts';
+import { lowerBounds } from './lower-bounds.ts';
 import { weightDistribution } from './weight-distribution.ts';
 
-/** How hard to look for the distance: by `theorems` only; `quick`, with all words of small codes and a seeded search of
- *  about half a second; `thorough`, the same with some twenty times as much. */
-export type DistanceEffort = 'theorems' | 'quick' | 'thorough';
+/** How hard to look for the distance, by name or as the operations on words of 32 bits that may be spent, some 10^8 a second
+ *  and more. `theorems` computes nothing but what formulas need. */
+export type DistanceEffort = 'theorems' | 'quick' | 'thorough' | { wordOperations: number };
 
-/** For each effort: the largest dimension whose words are all visited, the words the search may touch, and the longest
- *  code it is tried on, since it begins with a dense elimination. */
-const EFFORTS = {
-  theorems: { dimension: 0, wordOperations: 0, length: 0 },
-  quick: { dimension: 18, wordOperations: 1e8, length: 1500 },
-  thorough: { dimension: 26, wordOperations: 3e9, length: 20_000 },
-} as const;
+/** What an effort may spend. */
+export interface DistanceLimits {
+  /** Largest dimension, of code or dual, whose words are all visited. */
+  dimension: number;
+  wordOperations: number;
+  /** Operations on the eigenvalues of HᵀH. */
+  eigenvalueOperations: number;
+  /** Longest code that is searched, since a search begins with a dense elimination. */
+  length: number;
+}
+
+export const distanceEfforts: Readonly<Record<'theorems' | 'quick' | 'thorough', DistanceLimits>> = {
+  theorems: { dimension: 0, wordOperations: 0, eigenvalueOperations: 0, length: 0 },
+  quick: { dimension: 18, wordOperations: 5e7, eigenvalueOperations: 3e7, length: 1500 },
+  thorough: { dimension: 26, wordOperations: 3e9, eigenvalueOperations: 3e9, length: 20_000 },
+};
 
 /** What the analysis knows of the code already. */
 export interface DistanceFacts {
@@ -26,14 +38,17 @@ export interface DistanceFacts {
   girth: number;
   cyclic: boolean;
   leastColumnWeight: number;
+  orbits: TannerOrbits;
 }
 
-/** Lower and upper value of the distance of {c : H·c = 0}, with both methods. */
+/** Lower and upper value of the distance of {c : H·c = 0}, with both methods.
+ *  @throws ParamError on an unknown effort. */
 export function distanceOf(
   code: AnalysableCode,
   facts: DistanceFacts,
   effort: DistanceEffort = 'quick',
 ): Graded<Enclosure> {
+  const limits = limitsOf(effort);
   const n = code.H.cols;
   if (facts.k === 0) {
     return {
@@ -45,36 +60,52 @@ export function distanceOf(
   const plain = (code.transforms?.length ?? 0) === 0;
   const exact = plain && code.checks ? geometryDistance(code.design, code.checks) : null;
   if (exact) return { ...exact, value: { lower: exact.value, upper: exact.value } };
-  const limits = EFFORTS[effort];
-  if (!limits) throw new ParamError('distance', effort, '"theorems", "quick" or "thorough"');
   if (Math.min(facts.k, n - facts.k) <= limits.dimension) {
     const { counts, method } = weightDistribution(code.H);
     const [, least] = [...counts.keys()];
     return { value: { lower: least!, upper: least! }, grade: 'computed', method };
   }
+  if (limits.wordOperations > distanceEfforts.quick.wordOperations && n <= limits.length) {
+    return findDistance(code.H, facts, limits)!.distance;
+  }
   return enclosed(code, facts, limits);
 }
 
-function enclosed(
-  code: AnalysableCode,
-  facts: DistanceFacts,
-  limits: { wordOperations: number; length: number },
-): Graded<Enclosure> {
-  const n = code.H.cols;
-  const tree = treeBound(facts.girth, facts.leastColumnWeight);
+function limitsOf(effort: DistanceEffort): DistanceLimits {
+  if (typeof effort === 'string') {
+    const named = distanceEfforts[effort];
+    if (named) return named;
+  } else if (effort?.wordOperations >= 0) {
+    const { wordOperations } = effort;
+    const { dimension, length } = distanceEfforts.thorough;
+    // Visiting all words of a code of dimension d takes 2^d times a few words.
+    const affordable = Math.min(dimension, Math.floor(Math.log2(wordOperations / 8 + 1)));
+    return { dimension: affordable, wordOperations, eigenvalueOperations: wordOperations, length };
+  }
+  throw new ParamError('distance', effort, '"theorems", "quick", "thorough" or { wordOperations }');
+}
+
+function enclosed(code: AnalysableCode, facts: DistanceFacts, limits: DistanceLimits): Graded<Enclosure> {
+  const { H } = code;
+  const n = H.cols;
+  const operations = limits.eigenvalueOperations;
+  const spectrum = operations > 0 ? overlapSpectrum(H, facts.orbits, { operations }) : null;
+  // Roots of unity cost a field; they are asked only when something is to be computed at all.
+  const below = lowerBounds(H, { ...facts, cyclic: facts.cyclic && operations > 0, spectrum })[0]!;
   const uppers: [number, string][] = [[n - facts.k + 1, 'Singleton bound']];
   if (facts.cyclic) uppers.push([generatorWeight(code), 'weight of the generator polynomial']);
   if (n <= limits.length) {
-    const word = searchLowWeight(code.H, { seed: 'distance', wordOperations: limits.wordOperations });
+    const { wordOperations } = limits;
+    const word = searchLowWeight(H, { seed: 'distance', wordOperations, goal: below.value });
     if (word) uppers.push([word.weight, 'a codeword found by information-set search']);
   }
   const [upper, upperMethod] = uppers.reduce((best, next) => (next[0] < best[0] ? next : best));
-  const lower = Math.min(tree.value, upper);
+  const lower = Math.min(below.value, upper);
   return {
     value: { lower, upper },
     grade: lower === upper ? 'proved' : 'bounded',
-    method: `below: ${tree.method}; above: ${upperMethod}`,
-    source: tree.source,
+    method: `below: ${below.method}; above: ${upperMethod}`,
+    source: below.source,
   };
 }
 

@@ -11,10 +11,11 @@ export interface LowWeightWord {
 
 /** A codeword of low weight by information-set decoding, one column exchanged a step (Leon 1988; Canteaut and Chabaud 1998):
  *  generator rows, and sums of two of them, that are light outside the information set. Its weight bounds the distance
- *  from above; that nothing lighter was met proves nothing. Null when k = 0. The same seed finds the same word. */
+ *  from above; that nothing lighter was met proves nothing. Null when k = 0. The same seed finds the same word. Ends early
+ *  with a word of weight `goal` or less, where a lower bound says that none is lighter. */
 export function searchLowWeight(
   H: SparseMatrix,
-  options: { seed: string; wordOperations: number },
+  options: { seed: string; wordOperations: number; goal?: number },
 ): LowWeightWord | null {
   const { basis, free } = nullSpace(reducedEchelon(H));
   const k = free.length;
@@ -33,7 +34,7 @@ export function searchLowWeight(
   };
   for (let r = 0; r < k; r++) offer(weightOf(basis.row(r)), () => basis.row(r).slice());
   const steps = k === n ? 0 : Math.floor(options.wordOperations / (2 * k * stride));
-  for (let step = 0; step < steps; step++) {
+  for (let step = 0; step < steps && least > (options.goal ?? 0); step++) {
     const row = random.below(k);
     const column = otherColumn(basis, row, inside, random.below(n));
     if (column < 0) continue;
