@@ -1,4 +1,4 @@
-import { zipSync } from 'fflate';
+import { zipSync, zlibSync } from 'fflate';
 import { describe, expect, test } from 'vitest';
 import { FormatError, LimitError } from '@/core/errors.ts';
 import { exportMatrix, importMatrix } from '@/core/formats/index.ts';
@@ -33,6 +33,27 @@ describe('an archive', () => {
     const bytes = zipSync({ 'data.npy': huge, 'format.npy': huge, 'shape.npy': huge }, { level: 9 });
     expect(bytes.length).toBeLessThan(100_000);
     expect(() => importMatrix(bytes, 'npz')).toThrow(FormatError);
+  });
+
+  test('of one element that unpacks a thousandfold is refused at the limit', () => {
+    const packed = zlibSync(new Uint8Array(60_000_000), { level: 9 });
+    const bytes = new Uint8Array(136 + packed.length);
+    const head = exportMatrix(H, 'mat').subarray(0, 128);
+    bytes.set(head);
+    new DataView(bytes.buffer).setUint32(128, 15, true);
+    new DataView(bytes.buffer).setUint32(132, packed.length, true);
+    bytes.set(packed, 136);
+    expect(bytes.length).toBeLessThan(1_000_000);
+    expect(() => importMatrix(bytes, 'mat')).toThrow(LimitError);
+  });
+
+  test('with a torn array of numbers is refused', () => {
+    const bytes = exportMatrix(H, 'mat');
+    // The size of the last element, the values, less seven: its last number is torn.
+    const values = bytes.length - 8 * H.colIndex.length - 4;
+    const view = new DataView(bytes.buffer);
+    view.setUint32(values, view.getUint32(values, true) - 7, true);
+    expect(() => importMatrix(bytes, 'mat')).toThrow(FormatError);
   });
 
   test('with names that lead out of a folder has them passed over', () => {
