@@ -20,7 +20,25 @@ export { type Candidate, type SearchResult, searchCatalogue, searchTable } from 
 export { catalogueTable } from './catalogue/table.ts';
 export { type Channel, channelSchema } from './channels/channel.ts';
 export { analyseLdpc, type LdpcAnalysis } from './codes/analyse-ldpc.ts';
-export { type ConstantWeightCode, deriveConstantWeight } from './codes/constant-weight.ts';
+export {
+  type ConstantWeightCode,
+  deriveConstantWeight,
+  wordMatrix,
+} from './codes/constant-weight/constant-weight-code.ts';
+export {
+  type ConstantWeightSheet,
+  constantWeightSheet,
+} from './codes/constant-weight/constant-weight-sheet.ts';
+export { disjunctness } from './codes/constant-weight/disjunctness.ts';
+export { coverEncoder, type EnumerativeEncoder, tableEncoder } from './codes/constant-weight/enumerative.ts';
+export { type KnownSize, knownSize } from './codes/constant-weight/known-size.ts';
+export {
+  type OpticalOrthogonalCode,
+  opticalOrthogonalCode,
+  opticalOrthogonalFromDesign,
+} from './codes/constant-weight/optical-orthogonal.ts';
+export { complementCode, shortenAt } from './codes/constant-weight/smaller-codes.ts';
+export { parallelClassesOf, partitionByClasses } from './codes/constant-weight/word-classes.ts';
 export { threshold, thresholdOfMatrix } from './codes/density-evolution/threshold.ts';
 export { generatorPolynomial } from './codes/encode/generator-polynomial.ts';
 export { type SystematicEncoder, systematicEncoder } from './codes/encode/systematic-encoder.ts';
@@ -45,6 +63,7 @@ export { type DesignCertificate, verifyDesign } from './designs/verify.ts';
 export { type Citation, FormatError, InfeasibleError, LimitError, ParamError } from './errors.ts';
 export type { Enclosure, Grade, Graded } from './evidence.ts';
 export { exportMatrix, importMatrix, matrixFormats } from './formats/index.ts';
+export { readWordList, type WordList, writeWordListCsv, writeWordListText } from './formats/word-list.ts';
 export { eliminationRank, rank } from './gf2/rank.ts';
 export { type Calibration, calibrate } from './simulation/calibrate.ts';
 export {

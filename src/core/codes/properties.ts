@@ -65,7 +65,12 @@ function refuseDisagreement(analysis: LdpcAnalysis, predicted: CodePrediction | 
     );
 }
 
-function fromGraded(key: string, label: string, graded: Graded<number>, text: (value: number) => string): Property {
+export function fromGraded(
+  key: string,
+  label: string,
+  graded: Graded<number>,
+  text: (value: number) => string,
+): Property {
   const { value, grade, method, source } = graded;
   return {
     key,
@@ -78,7 +83,11 @@ function fromGraded(key: string, label: string, graded: Graded<number>, text: (v
   };
 }
 
-function enclosureLine(key: string, label: string, { value, grade, method, source }: Graded<Enclosure>): Property {
+export function enclosureLine(
+  key: string,
+  label: string,
+  { value, grade, method, source }: Graded<Enclosure>,
+): Property {
   const { lower, upper } = value;
   const text = lower === upper ? (lower === 0 ? 'none' : spaced(lower)) : `${spaced(lower)} to ${spaced(upper)}`;
   return { key, label, text, number: lower, grade, method, source: cite(source) };
@@ -133,12 +142,12 @@ function structureLine({ cyclic, evidence }: LdpcAnalysis): Property {
 const girthText = (value: number) => (Number.isFinite(value) ? String(value) : 'no cycles');
 
 /** Thin spaces between groups of three digits, from five digits on. */
-function spaced(value: number | bigint): string {
+export function spaced(value: number | bigint): string {
   const digits = String(value);
   return digits.length < 5 || !/^\d+$/.test(digits) ? digits : digits.replace(/\B(?=(\d{3})+$)/g, '\u2009');
 }
 
-function cite(source: Citation | undefined): string | undefined {
+export function cite(source: Citation | undefined): string | undefined {
   if (!source) return undefined;
   return [`${source.authors} ${source.year}`, source.title, source.where, source.part].filter(Boolean).join(', ');
 }
