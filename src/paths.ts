@@ -14,6 +14,7 @@ export const paths = {
   newCode: (id: string) => `/projects/${id}/codes/new`,
   uploadCode: (id: string) => `/projects/${id}/codes/upload`,
   code: (projectId: string, id: string) => `/projects/${projectId}/codes/${id}`,
+  transform: (projectId: string, id: string) => `/projects/${projectId}/codes/${id}/transform`,
   design: (projectId: string, codeId: string) => `/projects/${projectId}/codes/${codeId}/design`,
   runs: (id: string) => `/projects/${id}/runs`,
   newRun: (id: string) => `/projects/${id}/runs/new`,

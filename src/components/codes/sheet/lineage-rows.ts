@@ -1,6 +1,7 @@
 import type { Code } from '@/api/codes.ts';
 import { wholeNumber } from '@/components/ui/numbers.ts';
 import type { TitleRow } from '@/components/ui/TitleBlock.tsx';
+import { transformText } from '../transform/transform-forms.ts';
 
 /** From which design, in which way, by whom and when. */
 export function lineageRows(code: Code): TitleRow[] {
@@ -28,7 +29,9 @@ function derivationRows(derivation: Code['derivation']): TitleRow[] {
       value: derivation.checks === 'blocks' ? 'one check a block' : 'one check a point',
       note: derivation.checks === 'blocks' ? 'rows are blocks, columns points' : 'rows are points, columns blocks',
     },
-    { label: 'Transforms', value: steps.length === 0 ? 'none' : steps.map(({ kind }) => kind).join(', then ') },
+    ...(steps.length === 0
+      ? [{ label: 'Transforms', value: 'none' }]
+      : steps.map((step, i) => ({ label: `Step ${i + 1}`, value: transformText(step) }))),
   ];
 }
 
