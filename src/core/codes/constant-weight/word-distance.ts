@@ -24,14 +24,14 @@ const WORDS_TRIED = 20;
  *  up until none does, which ends at t at once for the blocks of a Steiner system S(t, w, n). Where subsets grow too many,
  *  pairs of words are counted position by position, or as packed bits, whichever is less work. Beyond the limit what the
  *  subsets told is left as a bound. */
-export function leastDistance({ n, w, M, ones }: Words): Graded<Enclosure> {
+export function leastDistance({ n, w, M, ones }: Words, limit = DISTANCE_WORK_LIMIT): Graded<Enclosure> {
   if (M < 2) return exactly(2 * w, 'fewer than two words');
   const meetings = meetingsOf({ n, w, M, ones });
   const packed = ((M * (M - 1)) / 2) * packedStride(n);
   const byPairs = Math.min(STEPS_A_MEETING * meetings, packed);
   const { size, complete, repeated } = firstCollisionFreeSize({ n, w, M, ones }, byPairs / STEPS_A_SUBSET);
   if (complete) return exactly(2 * (w - (size - 1)), `no ${size} positions are ones of two words, ${size - 1} are`);
-  if (byPairs > DISTANCE_WORK_LIMIT) {
+  if (byPairs > limit) {
     const shared = Math.max(repeated, byPackedWords({ n, w, M, ones }, WORDS_TRIED));
     return {
       value: { lower: 0, upper: 2 * (w - shared) },
