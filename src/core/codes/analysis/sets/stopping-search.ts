@@ -4,15 +4,15 @@ import { rowOf, type SparseMatrix, transpose } from '../../sparse-matrix.ts';
 /** Small stopping sets by seeded descent: from a random set of columns, what peeling leaves is a stopping set; one column after
  *  another is taken out and the rest peeled again, as long as something is left. Each descent ends in a set that holds no
  *  smaller one. The smallest met is given; that none smaller was met proves nothing. Null when every erasure peels.
- *  `edgeVisits` bounds the work. */
+ *  `edgeVisits` bounds the work, and a set of `goal` columns or fewer ends it. */
 export function searchStoppingSets(
   H: SparseMatrix,
-  { seed, edgeVisits }: { seed: string; edgeVisits: number },
+  { seed, edgeVisits, goal = 0 }: { seed: string; edgeVisits: number; goal?: number },
 ): Uint32Array | null {
   const random = seededRandom(seed);
   const peeler = new Peeler(H);
   let best: Uint32Array | null = null;
-  while (peeler.visits < edgeVisits) {
+  while (peeler.visits < edgeVisits && (best?.length ?? H.cols + 1) > goal) {
     const all = random.shuffle(Uint32Array.from({ length: H.cols }, (_, c) => c));
     let current = peeler.residual(all.subarray(0, startSize(H, best)));
     if (current.length === 0) current = peeler.residual(all);
@@ -63,6 +63,8 @@ class Peeler {
 
   residual(columns: Uint32Array): Uint32Array {
     const { H, T, inside, degree } = this;
+    // Columns without checks cost nothing to peel, and yet a round of the search.
+    this.visits += columns.length + 1;
     for (const c of columns) {
       inside[c] = 1;
       for (const r of rowOf(T, c)) degree[r]!++;

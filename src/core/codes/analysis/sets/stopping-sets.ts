@@ -45,11 +45,11 @@ export interface StoppingBudget {
 export function smallestStoppingSets(H: SparseMatrix, options: StoppingBudget): StoppingSets {
   const { nodes, keep = 1000, seed = 'stopping', onProgress } = options;
   const orbits = options.orbits ?? tannerOrbits(H);
-  const quick = lightestFound(H, seed, Math.min(nodes, QUICK_NODES));
+  const below = provedBelow(H, orbits, nodes);
+  const quick = lightestFound(H, { seed, nodes: Math.min(nodes, QUICK_NODES), goal: below.value });
   if (!quick) {
     return { size: graded(0, 0, 'every erasure is resolved by peeling'), sets: [], nodes: 0 };
   }
-  const below = provedBelow(H, orbits, nodes);
   let lower = Math.min(below.value, quick.length);
   const search = new CheckSearch(H, orbits.columns, 'stopping');
   let left = nodes;
@@ -65,7 +65,7 @@ export function smallestStoppingSets(H: SparseMatrix, options: StoppingBudget): 
     if (!finished) break;
     lower = size + 1;
   }
-  const longer = nodes > QUICK_NODES ? lightestFound(H, `${seed}/longer`, nodes) : null;
+  const longer = nodes > QUICK_NODES ? lightestFound(H, { seed: `${seed}/longer`, nodes, goal: lower }) : null;
   const found = longer && longer.length < quick.length ? longer : quick;
   const method = `below: ${lower > below.value ? 'branch and bound' : below.method}; above: a set found`;
   return { size: graded(lower, found.length, method), sets: [found], nodes: nodes - left };
@@ -89,10 +89,16 @@ function provedBelow(H: SparseMatrix, orbits: TannerOrbits, nodes: number): Grad
   return bounds.reduce((best, bound) => (bound.value > best.value ? bound : best));
 }
 
-/** A column without checks, a codeword, or a set met by descent, whichever is smallest. */
-function lightestFound(H: SparseMatrix, seed: string, nodes: number): Uint32Array | null {
-  const descended = searchStoppingSets(H, { seed, edgeVisits: 4 * nodes });
-  const word = H.cols <= 20_000 ? searchLowWeight(H, { seed, wordOperations: 4 * nodes }) : null;
-  if (!word) return descended;
-  return descended && descended.length <= word.weight ? descended : word.positions;
+/** A codeword or a set met by descent, whichever is smaller; neither is looked for below what is proved. */
+function lightestFound(
+  H: SparseMatrix,
+  { seed, nodes, goal }: { seed: string; nodes: number; goal: number },
+): Uint32Array | null {
+  const descended = searchStoppingSets(H, { seed, edgeVisits: 4 * nodes, goal });
+  if (!descended || descended.length <= goal || H.cols > LONGEST_FOR_WORDS) return descended;
+  const word = searchLowWeight(H, { seed, wordOperations: 4 * nodes, goal });
+  return word && word.weight < descended.length ? word.positions : descended;
 }
+
+/** The search for words begins with a dense elimination. */
+const LONGEST_FOR_WORDS = 20_000;
