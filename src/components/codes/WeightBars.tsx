@@ -6,7 +6,7 @@ export type Weights = readonly (readonly [weight: number, count: number])[];
 const TEXT = { fill: 'var(--quiet)', fontSize: 12 };
 
 /** How many rows, or columns, have each weight. */
-export default function WeightBars({ weights, of }: { weights: Weights; of: 'row' | 'column' }) {
+export default function WeightBars({ weights, of, axis }: { weights: Weights; of: 'row' | 'column'; axis?: string }) {
   const most = Math.max(1, ...weights.map(([, count]) => count));
   const data = weights.map(([weight, count]) => ({ weight: String(weight), count }));
   return (
@@ -16,7 +16,7 @@ export default function WeightBars({ weights, of }: { weights: Weights; of: 'row
           dataKey="weight"
           tick={TEXT}
           stroke="var(--quiet)"
-          label={{ value: `${of} weight`, position: 'bottom', offset: 2, ...TEXT }}
+          label={{ value: axis ?? `${of} weight`, position: 'bottom', offset: 2, ...TEXT }}
         />
         <YAxis
           domain={[0, most]}

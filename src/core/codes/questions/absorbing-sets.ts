@@ -1,0 +1,63 @@
+import { absorbingSets as search } from '../analysis/sets/absorbing-sets.ts';
+import type { CodeQuestion } from './question.ts';
+import { setList } from './set-list.ts';
+
+const BRANCHES_A_SECOND = 2e6;
+const LARGEST = 12;
+const KEPT = 500;
+
+/** Small sets of bits that bit flipping does not leave: a bits, b checks that meet them an odd number of times. */
+export const absorbingSets: CodeQuestion = {
+  title: 'Small absorbing sets',
+  searches: true,
+  obstacle({ columnWeights }) {
+    const [least, most] = [columnWeights[0]?.[0] ?? 0, columnWeights.at(-1)?.[0] ?? 0];
+    return least >= 3 && most <= 5
+      ? null
+      : `asked of matrices whose columns have weights 3 to 5; here ${least} to ${most}`;
+  },
+  answer({ H }, { seconds, onProgress }) {
+    const { classes, completeTo } = search(H, {
+      largest: LARGEST,
+      nodes: seconds * BRANCHES_A_SECOND,
+      keep: KEPT,
+      onProgress,
+    });
+    const { value, grade, method, source } = completeTo;
+    const cited = source && `${source.authors} ${source.year}, ${source.title}`;
+    const lines = classes.map(({ a, b, count, fullyAbsorbing }) => {
+      const whole = a <= value;
+      return {
+        key: `absorbing-${a}-${b}`,
+        label: `(${a}, ${b}) sets`,
+        text: whole ? `${count}, ${fullyAbsorbing} of them fully` : `${count} met, others may be`,
+        number: count,
+        grade: whole ? grade : ('bounded' as const),
+        method,
+        source: cited,
+      };
+    });
+    const listed = classes.flatMap(({ a, b, sets }) => sets.map((set) => ({ head: `(${a} ${b})`, set })));
+    return {
+      lines: [
+        {
+          key: 'absorbing-complete',
+          label: 'Complete up to',
+          text: `${value} bits`,
+          number: value,
+          grade,
+          method,
+          source: cited,
+        },
+        ...lines,
+      ],
+      ...(listed.length > 0 && {
+        list: setList(
+          'absorbing-sets.csv',
+          listed.map(({ set }) => set),
+          listed.map(({ head }) => head),
+        ),
+      }),
+    };
+  },
+};

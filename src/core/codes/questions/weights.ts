@@ -1,0 +1,38 @@
+import { ENUMERATION_LIMIT, weightDistribution } from '../analysis/distance/weight-distribution.ts';
+import type { CodeQuestion } from './question.ts';
+
+/** How many codewords have each weight. */
+export const weights: CodeQuestion = {
+  title: 'Weight distribution',
+  searches: false,
+  obstacle({ n, k }) {
+    const smaller = Math.min(k, n - k);
+    return smaller <= ENUMERATION_LIMIT
+      ? null
+      : `asked of codes with k or n − k up to ${ENUMERATION_LIMIT}; here the smaller is ${smaller}`;
+  },
+  answer({ H }) {
+    const { counts, method } = weightDistribution(H);
+    const rows = [...counts];
+    const least = rows.find(([weight]) => weight > 0);
+    const line = (key: string, label: string, text: string) => ({
+      key,
+      label,
+      text,
+      grade: 'computed' as const,
+      method,
+    });
+    return {
+      lines: least
+        ? [
+            line('distance', 'Minimum distance', String(least[0])),
+            line('lightest', `Words of weight ${least[0]}`, String(least[1])),
+          ]
+        : [line('distance', 'Minimum distance', 'none: no word but zero')],
+      list: {
+        fileName: 'weight-distribution.csv',
+        text: `weight,codewords\n${rows.map(([weight, count]) => `${weight},${count}\n`).join('')}`,
+      },
+    };
+  },
+};
