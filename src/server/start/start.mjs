@@ -3,7 +3,7 @@
 // it runs before they are there.
 import { spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
+import { existsSync, lstatSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 
@@ -14,6 +14,8 @@ const buildStamp = join(root, 'dist', '.blockwright-sources');
 
 /** Whether node_modules was made from the present lock file. npm writes its own copy of the lock after an install. */
 function installIsStale() {
+  // Lent by another checkout: installing would empty that one's.
+  if (lstatSync(join(root, 'node_modules'), { throwIfNoEntry: false })?.isSymbolicLink()) return false;
   const npmCopy = join(root, 'node_modules', '.package-lock.json');
   if (!existsSync(npmCopy)) return true;
   const lock = readFileSync(join(root, 'package-lock.json'), 'utf8');
