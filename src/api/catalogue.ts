@@ -54,6 +54,10 @@ export const catalogueQueryParams = z.strictObject({
     .enum(['true', 'false'])
     .transform((text) => text === 'true')
     .optional(),
+  meetsFirst: z
+    .enum(['true', 'false'])
+    .transform((text) => text === 'true')
+    .optional(),
   offset: count.optional(),
   limit: z.coerce.number().int().min(1).max(5000).optional(),
 }) satisfies z.ZodType<CatalogueQuery>;

@@ -1,29 +1,37 @@
 import { citationFrom, citationText } from '@/components/codes/citation-text.ts';
-import { EmptyState } from '@/components/ui/EmptyState.tsx';
+import { Notice } from '@/components/ui/Notice.tsx';
+import { wholeNumber } from '@/components/ui/numbers.ts';
 import { titleOf } from './candidate-words.ts';
 import type { Candidates } from './use-candidates.ts';
 
 /** Where nothing fits: the theorems in the way, and what comes nearest when one requirement alone is given up. */
 export function NearestList({ nearest, obstacles }: Pick<Candidates, 'nearest' | 'obstacles'>) {
   return (
-    <EmptyState title="No construction in the catalogue fits this window">
+    <section aria-label="Nothing fits" className="grid gap-4 border border-rule border-dashed px-5 py-6">
+      <h2>No construction in the catalogue fits this window</h2>
       {obstacles.map(({ rule, statement, source }) => {
-        const cited = citationFrom(source);
+        const citation = citationFrom(source);
         return (
-          <span key={`${rule} ${statement}`} className="mb-2 block text-ink">
-            <span className="font-semibold text-fail">Impossible.</span> {statement}
-            {cited && <span className="block text-quiet text-tiny">{citationText(cited)}</span>}
-          </span>
+          <Notice key={rule + statement} kind="fail" word="Impossible">
+            {statement}
+            {citation && <span className="mt-1 block text-quiet text-tiny">{citationText(citation)}</span>}
+          </Notice>
         );
       })}
-      {nearest.length === 0
-        ? 'No single requirement, given up alone, lets one in. Widen two of them.'
-        : 'With one requirement given up, these come nearest:'}
-      {nearest.map(({ givenUp, direction, words, entry }) => (
-        <span key={`${givenUp}-${direction}`} className="mt-2 block text-ink">
-          <span className="font-semibold">{words}</span>: {titleOf(entry)}, n = {entry.n}
-        </span>
-      ))}
-    </EmptyState>
+      {nearest.length === 0 ? (
+        <p className="text-quiet">No single requirement, given up alone, lets one in. Widen two of them.</p>
+      ) : (
+        <div>
+          <p className="text-quiet">With one requirement given up, these come nearest:</p>
+          <ul className="mt-2 grid">
+            {nearest.map(({ givenUp, direction, words, entry }) => (
+              <li key={`${givenUp}-${direction}`} className="border-hair border-b py-1.5">
+                <span className="font-semibold">{words}</span>: {titleOf(entry)}, n = {wholeNumber(entry.n)}
+              </li>
+            ))}
+          </ul>
+        </div>
+      )}
+    </section>
   );
 }

@@ -13,7 +13,6 @@ export interface Candidates {
   matching: number | null;
   total: number | null;
   nearest: Answer['nearest'];
-  /** Theorems that forbid what was asked, where nothing fits. */
   obstacles: Answer['obstacles'];
   failure: ApiFailure | undefined;
   isLoading: boolean;
@@ -21,12 +20,15 @@ export interface Candidates {
   more(): void;
 }
 
-/** The catalogue's answer, fetched page by page as the table is read; the last answer stays while the next is on its way. */
-export function useCandidates(query: CatalogueParams): Candidates {
+/** The catalogue's answer, fetched page by page as the table is read; the last answer stays while the next is on its way.
+ *  Null waits. */
+export function useCandidates(query: CatalogueParams | null): Candidates {
   const pageOf = (offset: number) => ({ query: { ...query, limit: pageSize, offset } as CatalogueParams });
   const { data, error, isLoading, size, setSize } = useSWRInfinite<Answer, ApiFailure>(
     (page, previous: Answer | null) =>
-      previous && previous.next === undefined ? null : addressOf(endpoints.searchCatalogue, pageOf(page * pageSize)),
+      query === null || (previous && previous.next === undefined)
+        ? null
+        : addressOf(endpoints.searchCatalogue, pageOf(page * pageSize)),
     (address: string) => {
       const offset = Number(new URLSearchParams(address.split('?')[1]).get('offset') ?? 0);
       return call(endpoints.searchCatalogue, pageOf(offset));

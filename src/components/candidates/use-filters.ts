@@ -1,12 +1,10 @@
 import { useCallback, useMemo, useSyncExternalStore } from 'react';
-import { type ChoiceName, choiceNames, type FilterName, type Filters, filterFields } from './filters.ts';
+import { type Filters, orderNames, windowNames } from './filters.ts';
 
 const CHANGE = 'filterschange';
-const names: readonly (FilterName | ChoiceName | 'chosen')[] = [
-  ...filterFields.map(({ name }) => name),
-  ...choiceNames,
-  'chosen',
-];
+const names = [...windowNames, ...orderNames, 'chosen', 'columns', 'window'] as const;
+type Name = (typeof names)[number];
+type Texts = Partial<Record<Name, string>>;
 
 function subscribe(listener: () => void): () => void {
   window.addEventListener(CHANGE, listener);
@@ -21,39 +19,47 @@ export interface FilterState {
   filters: Filters;
   /** Id of the candidate whose numbers are shown beside the table. */
   chosen: string | null;
-  /** Changes what is named; an empty text takes a filter away. */
-  change(next: Filters & { chosen?: string }): void;
-  /** Puts these filters in place of all others. */
+  /** Keys of the columns asked for; null for those that fit. */
+  columns: readonly string[] | null;
+  /** The address states nothing at all, as on a first visit. */
+  isBare: boolean;
+  /** Changes what is named; an empty text takes it away. */
+  change(next: Texts): void;
+  /** Puts this window in place of the present one; order and columns stay. */
   replace(next: Filters): void;
 }
 
-/** Filters, order and selection live in the address, so that a link restores them. */
+/** Window, order, columns and selection live in the address, so that a link restores them. A window that was emptied is
+ *  written as `window=open`, which tells it from a first visit. */
 export function useFilters(): FilterState {
   const search = useSyncExternalStore(
     subscribe,
     () => location.search,
     () => '',
   );
-  const { chosen = null, ...filters } = useMemo(() => {
-    const params = new URLSearchParams(search);
-    return Object.fromEntries(
-      names.flatMap((name) => (params.get(name) ? [[name, params.get(name)!]] : [])),
-    ) as Filters & { chosen?: string };
-  }, [search]);
-  const change = useCallback((next: Record<string, string | undefined>) => write(next, new URL(location.href)), []);
-  const replace = useCallback((next: Record<string, string | undefined>) => {
+  const { chosen = null, columns, window: _window, ...filters } = useMemo(() => textsIn(search), [search]);
+  const change = useCallback((next: Texts) => write(next, new URL(location.href)), []);
+  const replace = useCallback((next: Filters) => {
     const url = new URL(location.href);
-    for (const name of names) url.searchParams.delete(name);
+    for (const name of [...windowNames, 'chosen']) url.searchParams.delete(name);
     write(next, url);
   }, []);
-  return { filters, chosen, change, replace };
+  const isBare = Object.keys(textsIn(search)).length === 0;
+  return { filters, chosen, columns: columns?.split(',').filter(Boolean) ?? null, isBare, change, replace };
 }
 
-function write(next: Record<string, string | undefined>, url: URL): void {
+function textsIn(search: string): Texts {
+  const params = new URLSearchParams(search);
+  return Object.fromEntries(names.flatMap((name) => (params.get(name) ? [[name, params.get(name)!]] : [])));
+}
+
+function write(next: Texts, url: URL): void {
   for (const [name, text] of Object.entries(next)) {
     if (text) url.searchParams.set(name, text);
     else url.searchParams.delete(name);
   }
+  if (windowNames.some((name) => url.searchParams.get(name))) url.searchParams.delete('window');
+  else url.searchParams.set('window', 'open');
   if (url.href === location.href) return;
   history.replaceState(history.state, '', url);
   window.dispatchEvent(new Event(CHANGE));

@@ -43,6 +43,8 @@ export const catalogueQuerySchema = z.strictObject({
   targetFer: z.number().gt(0).lt(1).optional(),
   sort: z.enum(sortColumns).optional(),
   descending: z.boolean().optional(),
+  /** Those that surely meet everything come before those that may. */
+  meetsFirst: z.boolean().optional(),
   offset: whole('a whole number of rows').optional(),
   limit: z.int().min(1).max(5000).optional(),
 });

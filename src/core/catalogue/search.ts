@@ -70,7 +70,22 @@ export class Search {
       for (let i = 0; isLeft && i < outcomes.length; i++) isLeft = outcomes[i]!(row) !== 'misses';
       if (isLeft) found[size++] = row;
     }
-    return found.subarray(0, size);
+    const left = found.subarray(0, size);
+    return this.query.meetsFirst ? this.meetingFirst(left) : left;
+  }
+
+  /** Those that meet every requirement before those of which formulas leave something open, each part in its order. */
+  private meetingFirst(rows: Uint32Array): Uint32Array {
+    const meets = (row: number) => this.requirements.every(({ outcome }) => outcome(row) === 'meets');
+    const isOpen = new Uint8Array(rows.length);
+    const sorted = new Uint32Array(rows.length);
+    let size = 0;
+    for (let at = 0; at < rows.length; at++) {
+      if (meets(rows[at]!)) sorted[size++] = rows[at]!;
+      else isOpen[at] = 1;
+    }
+    for (let at = 0; at < rows.length; at++) if (isOpen[at] === 1) sorted[size++] = rows[at]!;
+    return sorted;
   }
 
   /** The column whose order is that of the figure asked for. Once a payload or a length fixes part of a code, the rest of

@@ -37,3 +37,20 @@ test('a candidate is found by its id far down the listing, with its verdicts, an
   expect(findCandidate(table, query, 'no-family;q=2;blocks')).toBeNull();
   expect(() => findCandidate(table, { girthMin: -1 }, deep!.id)).toThrow(ParamError);
 });
+
+test('asked for, candidates that surely meet everything come first, each part in its order and none lost', () => {
+  const query = {
+    n: { min: 20, max: 150 },
+    rate: { min: 0.45 },
+    sort: 'distance' as const,
+    descending: true,
+    limit: 5000,
+  };
+  const plain = searchTable(table, query).candidates;
+  const first = searchTable(table, { ...query, meetsFirst: true }).candidates;
+  const meets = ({ verdicts }: (typeof plain)[number]) => verdicts.every(({ outcome }) => outcome === 'meets');
+  expect(first.map(({ id }) => id)).toEqual(
+    [...plain.filter(meets), ...plain.filter((candidate) => !meets(candidate))].map(({ id }) => id),
+  );
+  expect(plain.map(({ id }) => id)).not.toEqual(first.map(({ id }) => id));
+});
