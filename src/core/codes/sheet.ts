@@ -5,6 +5,9 @@ import { designTitle } from '../designs/design-title.ts';
 import type { DesignPrediction } from '../designs/family.ts';
 import { ParamError } from '../errors.ts';
 import { analyseLdpc } from './analyse-ldpc.ts';
+import { columnWeightProfile, rowWeightProfile } from './analysis/weights.ts';
+import { type ConstantWeightCode, deriveConstantWeight, wordMatrix } from './constant-weight/constant-weight-code.ts';
+import { constantWeightSheet } from './constant-weight/constant-weight-sheet.ts';
 import { deriveLdpc, type LdpcCode, type Transform } from './ldpc.ts';
 import { type Property, propertiesOf } from './properties.ts';
 import type { SparseMatrix } from './sparse-matrix.ts';
@@ -12,15 +15,29 @@ import type { SparseMatrix } from './sparse-matrix.ts';
 /** What to build: a design, and how its code comes from it. */
 export interface SheetRequest {
   design: DesignSpec;
-  derivation: { kind: 'ldpc'; checks: 'blocks' | 'points'; transforms?: Transform[] };
+  derivation: LdpcDerivation | ConstantWeightDerivation;
+}
+
+export interface LdpcDerivation {
+  kind: 'ldpc';
+  checks: 'blocks' | 'points';
+  transforms?: Transform[];
+}
+
+export interface ConstantWeightDerivation {
+  kind: 'constant-weight';
+  /** Ones and zeros of the blocks exchanged. */
+  complement?: boolean;
 }
 
 export type SheetStep = 'build' | 'verify' | 'derive' | 'analyse';
 
 /** A code with all that is known of it, ready to be kept and shown. */
 export interface CodeSheet {
+  /** Parity checks as rows; of a constant-weight code, its words. */
   H: SparseMatrix;
   n: number;
+  /** Dimension; of a constant-weight code, the bits that a word carries. */
   k: number;
   designTitle: string;
   certificate: TimedCertificate;
@@ -39,7 +56,9 @@ export function codeSheet(
   options: { clock(): number; onStep?(step: SheetStep): void },
 ): CodeSheet {
   const { clock, onStep } = options;
-  if (request.derivation.kind !== 'ldpc') throw new ParamError('derivation.kind', request.derivation.kind, '"ldpc"');
+  const { derivation } = request;
+  if (derivation.kind !== 'ldpc' && derivation.kind !== 'constant-weight')
+    throw new ParamError('derivation.kind', (derivation as { kind: unknown }).kind, '"ldpc" or "constant-weight"');
   const prediction = predictDesign(request.design);
   onStep?.('build');
   const design = buildDesign(request.design);
@@ -48,9 +67,24 @@ export function codeSheet(
   if (!certificate.holds)
     throw new ParamError('design', request.design.family, `a design whose blocks verify (${certificate.reason})`);
   onStep?.('derive');
-  const code = deriveLdpc(design, request.derivation);
+  const named = { designTitle: designTitle(request.design), certificate };
+  if (derivation.kind === 'constant-weight') {
+    const code = deriveConstantWeight(design, derivation);
+    onStep?.('analyse');
+    return { ...describeWords(code, clock), ...named };
+  }
+  const code = deriveLdpc(design, derivation);
   onStep?.('analyse');
-  return { ...describeCode(code, prediction, clock), designTitle: designTitle(request.design), certificate };
+  return { ...describeCode(code, prediction, clock), ...named };
+}
+
+function describeWords(code: ConstantWeightCode, clock: () => number) {
+  const from = clock();
+  const { n, messageBits: k, properties } = constantWeightSheet(code);
+  const elapsedMs = clock() - from;
+  const H = wordMatrix(code);
+  const timed = properties.map((line) => (line.key === 'distance' ? { ...line, elapsedMs } : line));
+  return { H, n, k, properties: timed, rowWeights: rowWeightProfile(H), columnWeights: columnWeightProfile(H) };
 }
 
 function describeCode(code: LdpcCode, prediction: DesignPrediction, clock: () => number) {

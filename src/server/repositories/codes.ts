@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import type { Code, NewCode } from '@/api/codes.ts';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import type { Database } from '../db/database.ts';
@@ -74,14 +75,35 @@ export async function codeIdByFingerprint(db: Database, projectId: string, finge
   return row?.id as string | undefined;
 }
 
+/** Codes of a project that came from one design, oldest first. */
+export async function codesOfDesign(db: Database, projectId: string, design: NewCode['design']) {
+  const rows = await db('codes')
+    .where({ project_id: projectId })
+    .whereRaw("json_extract(design, '$.family') = ?", design.family)
+    .orderBy('id')
+    .select('id', 'name', 'design', 'derivation');
+  return rows
+    .map(({ id, name, design, derivation }: Row) => ({
+      id: id as string,
+      name: name as string,
+      design: JSON.parse(design!) as Code['design'],
+      derivation: JSON.parse(derivation!) as Code['derivation'],
+    }))
+    .filter((row) => isDeepStrictEqual(row.design, design));
+}
+
 export async function matrixOf(db: Database, id: string): Promise<SparseMatrix | undefined> {
   const row = await db('codes').where({ id }).first('matrix');
   return row && unpackMatrix(row.matrix);
 }
 
-/** Of the ids given, the codes that the project holds, each with its length. */
+/** Of the ids given, the codes with parity checks that the project holds, each with its length. */
 export async function codeLengths(db: Database, projectId: string, ids: readonly string[]) {
-  const rows = await db('codes').where({ project_id: projectId }).whereIn('id', ids).select('id', 'n');
+  const rows = await db('codes')
+    .where({ project_id: projectId })
+    .whereIn('id', ids)
+    .whereRaw("json_extract(derivation, '$.kind') <> 'constant-weight'")
+    .select('id', 'n');
   return new Map<string, number>(rows.map((row) => [row.id, row.n]));
 }
 

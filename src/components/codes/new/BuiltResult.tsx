@@ -1,26 +1,30 @@
 import type { BuiltCode } from '@workers/build/api.ts';
 import { type ReactNode, useEffect, useRef } from 'react';
 import { InTurn } from '@/components/ui/InTurn.tsx';
-import { duration, wholeNumber } from '@/components/ui/numbers.ts';
+import { duration } from '@/components/ui/numbers.ts';
+import type { SheetRequest } from '@/core/codes/sheet.ts';
 import { CertificateBlock } from '../CertificateBlock.tsx';
 import { MatrixPlot } from '../matrix-plot/MatrixPlot.tsx';
 import { Fingerprint, PropertiesBlock } from '../PropertiesBlock.tsx';
+import { sizeText } from '../size-text.ts';
 import WeightCharts from '../WeightCharts.tsx';
 
 interface Props {
   built: BuiltCode;
   elapsedMs: number;
+  kind: SheetRequest['derivation']['kind'];
   /** What can be done with it. */
   children: ReactNode;
 }
 
 /** What the build found: certificate, properties, weights, the matrix. Comes into view by itself. */
-export function BuiltResult({ built, elapsedMs, children }: Props) {
+export function BuiltResult({ built, elapsedMs, kind, children }: Props) {
   const top = useRef<HTMLElement>(null);
   useEffect(() => {
     top.current?.scrollIntoView({ block: 'start', behavior: 'smooth' });
   }, []);
-  const { n, k, designTitle, fingerprint, properties, certificate, rowWeights, columnWeights } = built;
+  const isWords = kind === 'constant-weight';
+  const { n, k, H, designTitle, fingerprint, properties, certificate, rowWeights, columnWeights } = built;
   return (
     <section
       ref={top}
@@ -31,7 +35,7 @@ export function BuiltResult({ built, elapsedMs, children }: Props) {
       <div className="flex flex-wrap items-end justify-between gap-x-8 gap-y-4">
         <div role="status">
           <h2>
-            ({wholeNumber(n)}, {wholeNumber(k)}) {designTitle}
+            {sizeText({ n, k, rows: H.rows, rowWeights, kind })} {designTitle}
           </h2>
           <p className="text-quiet">Built and verified in this browser in {duration(elapsedMs)}.</p>
         </div>
@@ -54,9 +58,9 @@ export function BuiltResult({ built, elapsedMs, children }: Props) {
         </div>
       </div>
       <div>
-        <h2 className="mb-2">Matrix</h2>
+        <h2 className="mb-2">{isWords ? 'Words' : 'Matrix'}</h2>
         <InTurn turn={3} className="aspect-square max-h-168">
-          <MatrixPlot H={built.H} />
+          <MatrixPlot H={H} name={isWords ? 'Words, one a row' : undefined} />
         </InTurn>
       </div>
     </section>

@@ -1,17 +1,19 @@
 import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
+import { Button } from '@/components/ui/Button.tsx';
 import { ChoiceGroup } from '@/components/ui/ChoiceGroup.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
 import { TitleBlock } from '@/components/ui/TitleBlock.tsx';
 import type { SheetRequest } from '@/core/codes/sheet.ts';
 import { shortCitation } from '../citation-text.ts';
 import { RefusalNotice } from '../RefusalNotice.tsx';
-import { type Choice, choiceFromSearch, choiceToSearch } from './address.ts';
+import { transformText } from '../transform/transform-forms.ts';
+import { type Choice, choiceFromSearch, choiceToSearch, derivationOf } from './address.ts';
 import { BuildControls } from './BuildControls.tsx';
 import { type Engine, type FamilyInfo, type Predicted, useEngine } from './engine.ts';
 import { KeepForm } from './KeepForm.tsx';
 import { ParamFields } from './ParamFields.tsx';
 import { paramsFrom, startingParams } from './params.ts';
-import { codeRows, designRows } from './prediction-rows.ts';
+import { codeRows, designRows, wordRows } from './prediction-rows.ts';
 import { useBuild } from './use-build.ts';
 
 const BuiltResult = lazy(() => import('./BuiltResult.tsx').then((module) => ({ default: module.BuiltResult })));
@@ -45,7 +47,7 @@ function Bench({ engine, projectId, mayKeep, search }: Props & { engine: Engine 
   const request = useMemo<SheetRequest>(
     () => ({
       design: { family: family.id, params: paramsFrom(family.params, choice.params) },
-      derivation: { kind: 'ldpc', checks: choice.checks },
+      derivation: derivationOf(choice),
     }),
     [family, choice],
   );
@@ -73,23 +75,28 @@ function Bench({ engine, projectId, mayKeep, search }: Props & { engine: Engine 
           onChange={(name, value) => choose({ params: { ...choice.params, [name]: value } })}
         />
         <ChoiceGroup
-          legend="checks"
-          value={choice.checks}
-          onChange={(checks) => choose({ checks })}
+          legend="code"
+          value={choice.words ? (`words-${choice.words}` as const) : choice.checks}
+          onChange={(form) => choose(formChosen(form))}
           choices={[
             { value: 'blocks', label: 'One check a block', note: 'n = points, the incidence matrix' },
             { value: 'points', label: 'One check a point', note: 'n = blocks, its transpose' },
+            { value: 'words-blocks', label: 'Words are blocks', note: 'constant weight, n = points' },
+            { value: 'words-complements', label: 'Words are complements', note: 'ones and zeros exchanged' },
           ]}
         />
+        {!choice.words && choice.transforms && (
+          <Steps steps={choice.transforms} onRemove={() => choose({ transforms: undefined })} />
+        )}
         {refusal && <RefusalNotice refusal={refusal} />}
       </div>
       <div className="grid gap-4">
-        <Prediction family={family} predicted={predicted} checks={choice.checks} typed={choice.params} />
+        <Prediction family={family} predicted={predicted} choice={choice} />
         <BuildControls build={build} allowed={predicted.ok} onStart={() => start(request)} onCancel={cancel} />
       </div>
       {build.state === 'built' && (
         <Suspense fallback={<p className="text-quiet">Drawing …</p>}>
-          <BuiltResult built={build.built} elapsedMs={build.elapsedMs}>
+          <BuiltResult built={build.built} elapsedMs={build.elapsedMs} kind={build.request.derivation.kind}>
             {mayKeep ? (
               <KeepForm projectId={projectId} built={build.built} request={build.request} />
             ) : (
@@ -111,7 +118,34 @@ function startingChoice(families: readonly FamilyInfo[], search: string): Choice
     family: family.id,
     params: startingParams(family.params, family.id === given.family ? given.params : {}),
     checks: given.checks ?? 'blocks',
+    words: given.words,
+    transforms: given.transforms,
   };
+}
+
+type CodeForm = Choice['checks'] | `words-${NonNullable<Choice['words']>}`;
+
+function formChosen(form: CodeForm): Pick<Choice, 'words'> & Partial<Choice> {
+  if (form === 'blocks' || form === 'points') return { checks: form, words: undefined };
+  return { words: form === 'words-blocks' ? 'blocks' : 'complements' };
+}
+
+/** Steps that an address asks for, from a kept code's lineage or a candidate. */
+function Steps({ steps, onRemove }: { steps: NonNullable<Choice['transforms']>; onRemove: () => void }) {
+  return (
+    <section aria-label="Transforms">
+      <h2 className="text-quiet text-tiny">then</h2>
+      <ol className="ml-5 list-decimal">
+        {steps.map((step, at) => (
+          // biome-ignore lint/suspicious/noArrayIndexKey: steps are a fixed listing and may repeat
+          <li key={at}>{transformText(step)}</li>
+        ))}
+      </ol>
+      <Button size="small" className="mt-2" onClick={onRemove}>
+        Without these steps
+      </Button>
+    </section>
+  );
 }
 
 interface FamilyChoiceProps {
@@ -138,11 +172,11 @@ function FamilyChoice({ families, value, onChange }: FamilyChoiceProps) {
 interface PredictionProps {
   family: FamilyInfo;
   predicted: Predicted;
-  checks: Choice['checks'];
-  typed: Record<string, string>;
+  choice: Choice;
 }
 
-function Prediction({ family, predicted, checks, typed }: PredictionProps) {
+function Prediction({ family, predicted, choice }: PredictionProps) {
+  const typed = choice.params;
   const stated = family.params.filter(({ name, optional }) => typed[name] || !optional);
   const params = stated.map(({ name }) => `${name} = ${typed[name] || '…'}`).join(', ');
   if (!predicted.ok) {
@@ -161,9 +195,15 @@ function Prediction({ family, predicted, checks, typed }: PredictionProps) {
     <div aria-live="polite">
       <TitleBlock
         title="Prediction"
-        rows={[...designRows(`${family.title}, ${params}`, prediction), ...codeRows(prediction, checks)]}
+        rows={[
+          ...designRows(`${family.title}, ${params}`, prediction),
+          ...(choice.words ? wordRows(prediction, choice.words) : codeRows(prediction, choice.checks)),
+        ]}
       />
-      <p className="mt-2 text-quiet text-tiny">From closed formulas; nothing is built yet.</p>
+      <p className="mt-2 text-quiet text-tiny">
+        From closed formulas; nothing is built yet.
+        {!choice.words && choice.transforms && ' They tell of the matrix before its transforms.'}
+      </p>
     </div>
   );
 }

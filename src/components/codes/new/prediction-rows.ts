@@ -1,4 +1,4 @@
-import { scientific, wholeNumber } from '@/components/ui/numbers.ts';
+import { counted, scientific, wholeNumber } from '@/components/ui/numbers.ts';
 import type { TitleRow } from '@/components/ui/TitleBlock.tsx';
 import type { CodePrediction, DesignPrediction } from '@/core/designs/family.ts';
 import type { Enclosure, Graded } from '@/core/evidence.ts';
@@ -35,6 +35,31 @@ export function codeRows(design: DesignPrediction, checks: 'blocks' | 'points'):
     { label: 'Row weight', value: wholeNumber(code.rowWeight), grade: 'proved' },
     { label: 'Column weight', value: wholeNumber(code.columnWeight), grade: 'proved' },
     { label: 'Structure', value: code.structure === 'none' ? 'none claimed' : code.structure, grade: 'proved' },
+  ];
+}
+
+/** What is known of the constant-weight code of the blocks before it is built. */
+export function wordRows(
+  { v, b, k, t, lambda, partialLinear }: DesignPrediction,
+  words: 'blocks' | 'complements',
+): TitleRow[] {
+  const w = words === 'blocks' ? k : v - k;
+  // Two blocks that share t points would cover a t-subset twice.
+  const shared = partialLinear ? 2 : t;
+  const distance: TitleRow =
+    partialLinear || lambda === 1
+      ? {
+          label: 'Distance',
+          value: `≥ ${wholeNumber(2 * (k - shared + 1))}`,
+          grade: 'proved',
+          note: `no two blocks share ${counted(shared, 'point')}; the build computes it`,
+        }
+      : { label: 'Distance', value: 'the build computes it' };
+  return [
+    { label: 'Length n', value: wholeNumber(v), grade: 'proved', note: 'the points of the design' },
+    { label: 'Weight w', value: wholeNumber(w), grade: 'proved' },
+    { label: 'Words M', value: wholeNumber(b), grade: 'proved', note: 'the blocks of the design' },
+    distance,
   ];
 }
 

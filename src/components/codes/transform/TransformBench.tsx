@@ -74,7 +74,7 @@ export default function TransformBench({ code, mayKeep, search }: Props) {
       <BuildControls build={build} allowed onStart={() => start(request)} onCancel={cancel} />
       {build.state === 'built' && (
         <Suspense fallback={<p className="text-quiet">Drawing …</p>}>
-          <BuiltResult built={build.built} elapsedMs={build.elapsedMs}>
+          <BuiltResult built={build.built} elapsedMs={build.elapsedMs} kind={build.request.derivation.kind}>
             {mayKeep ? (
               <KeepForm projectId={code.projectId} built={build.built} request={build.request} />
             ) : (

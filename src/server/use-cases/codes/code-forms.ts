@@ -4,6 +4,7 @@ import { matrixFormats } from '@/core/formats/index.ts';
 import { blockForms } from '@/core/release/release-files.ts';
 import type { Context } from '../../context.ts';
 import { matrixOf } from '../../repositories/codes.ts';
+import { isWords } from './constant-weight.ts';
 import { getCode } from './get-code.ts';
 
 /** Which files a code can be given as. */
@@ -13,7 +14,7 @@ export async function codeForms(context: Context, codeId: string): Promise<CodeF
   const named = <T extends { id: string; title: string }>({ id, title }: T) => ({ id: id as T['id'], title });
   return {
     formats: matrixFormats.filter((format) => format.writes?.(H) !== false).map(named) as CodeForms['formats'],
-    generators: generatorForms.filter((form) => form.writes(H)).map(named),
+    generators: isWords(code) ? [] : generatorForms.filter((form) => form.writes(H)).map(named),
     blocks: code.design.family === 'uploaded' ? [] : blockForms.map(named),
   };
 }

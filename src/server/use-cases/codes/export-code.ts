@@ -9,6 +9,7 @@ import type { FilesPool } from '../../jobs/files-pool.ts';
 import { workerStream } from '../../jobs/worker-stream.ts';
 import { Refusal } from '../../refusal.ts';
 import { matrixOf } from '../../repositories/codes.ts';
+import { refuseWords } from './constant-weight.ts';
 import { fileStem } from './file-stem.ts';
 import { getCode } from './get-code.ts';
 
@@ -49,6 +50,7 @@ export async function exportGenerator(
   formId: z.infer<typeof generatorFormSchema>,
 ): Promise<StreamedFile> {
   const code = await getCode(context, codeId);
+  refuseWords(code, 'generator');
   const H = (await matrixOf(context.db, codeId))!;
   const { extension } = generatorForms.find(({ id }) => id === formId)!;
   const stream = await workerStream(pool, { kind: 'generator', H, form: formId }, signal);
@@ -61,6 +63,7 @@ export async function exportVectors(
   { form: formId, ...request }: z.output<typeof vectorQueryParams>,
 ): Promise<StreamedFile> {
   const code = await getCode(context, codeId);
+  refuseWords(code, 'test vectors');
   const H = (await matrixOf(context.db, codeId))!;
   const form = vectorForms.find(({ id }) => id === formId)!;
   const head = { fingerprint: code.fingerprint, title: `(${code.n},${code.k}) ${code.designTitle}` };

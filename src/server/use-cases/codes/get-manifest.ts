@@ -3,11 +3,18 @@ import type { Context } from '../../context.ts';
 import { sha256Hex } from '../../files/matrix-blob.ts';
 import { matrixOf } from '../../repositories/codes.ts';
 import { programVersion } from '../../version.ts';
+import { isWords } from './constant-weight.ts';
 import { fileStem } from './file-stem.ts';
 import { getCode } from './get-code.ts';
 
 /** Formats whose digests a manifest states by default: those that carry only the matrix and are quick to write. */
 const digestedFormats = ['alist', 'mtx'];
+
+const matrixDefinition =
+  'SHA-256 over little-endian 32-bit words: rows, cols, then for each row its weight and its columns ascending.';
+const wordsDefinition =
+  'SHA-256 over little-endian 32-bit words: 0xffffffff, rows, cols, then for each row, which is a word of the code, its ' +
+  'weight and its columns ascending.';
 
 /** What a receiver needs to trust a matrix file: how the code came about, what is known of it, and digests. Holds no
  *  time of its own making, so that the same code gives the same manifest. */
@@ -34,8 +41,7 @@ export async function getManifest(context: Context, codeId: string) {
     certificate: code.certificate,
     properties: code.properties,
     fingerprint: code.fingerprint,
-    fingerprintDefinition:
-      'SHA-256 over little-endian 32-bit words: rows, cols, then for each row its weight and its columns ascending.',
+    fingerprintDefinition: isWords(code) ? wordsDefinition : matrixDefinition,
     files,
     caution:
       'Measured error rates hold for the channel model and decoder stated, not for a device. Extrapolation below the ' +

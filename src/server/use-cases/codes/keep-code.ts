@@ -29,14 +29,19 @@ export async function keepCode(db: Database, built: BuiltCode, keeping: Keeping)
   const createdAt = nowText();
   await inTransaction(db, async (trx) => {
     await refuseDuplicate(trx, projectId, built.fingerprint);
-    const name = request.name ?? `(${built.n},${built.k}) ${built.designTitle}`;
     const { design, derivation } = request;
+    const name = request.name ?? nameOf(built, derivation.kind);
     await insertCode(trx, { ...built, id, projectId, name, design, derivation, createdBy: userId, createdAt });
     const content = { name, design, derivation, fingerprint: built.fingerprint };
     await recordEvent(trx, { id: userId }, { projectId, kind: 'code.created', subject: id, content });
     if (keeping.jobId) await endJob(trx, keeping.jobId, { codeId: id }, createdAt);
   });
   return id;
+}
+
+function nameOf({ n, k, H, rowWeights, designTitle }: BuiltCode, kind: NewCode['derivation']['kind']): string {
+  if (kind !== 'constant-weight') return `(${n},${k}) ${designTitle}`;
+  return `${H.rows} words of ${n} bits, weight ${rowWeights[0]?.[0] ?? 0}: ${designTitle}`;
 }
 
 /** @throws Refusal naming the code that holds the same matrix. */

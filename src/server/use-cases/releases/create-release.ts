@@ -32,7 +32,8 @@ export async function createRelease(
   const project = await projectToWrite(context, projectId);
   const { db, caller } = context;
   const code = isId(codeId) ? await codeById(db, codeId) : undefined;
-  if (code?.projectId !== projectId) throw badFields({ codeId: 'the id of a code of this project' });
+  if (code?.projectId !== projectId || code.derivation.kind === 'constant-weight')
+    throw badFields({ codeId: 'the id of a code of this project, with parity checks' });
   const number = (await lastReleaseNumber(db, projectId)) + 1;
   const createdAt = nowText();
   const signOff = await signOffFacts(db, codeId);

@@ -27,7 +27,8 @@ export async function askSignOff(
   const project = await projectToWrite(context, projectId);
   const { db, caller } = context;
   const code = isId(codeId) ? await codeById(db, codeId) : undefined;
-  if (code?.projectId !== projectId) throw badFields({ codeId: 'the id of a code of this project' });
+  if (code?.projectId !== projectId || code.derivation.kind === 'constant-weight')
+    throw badFields({ codeId: 'the id of a code of this project, with parity checks' });
   const id = newId();
   const createdAt = nowText();
   const evidence = await codeEvidence(db, projectId, code);
