@@ -50,13 +50,16 @@ export function acknowledge(point: PointProgress, index: number): void {
   while (point.extra.delete(point.nextIndex)) point.nextIndex++;
 }
 
+/** A run that counts a set number of frames has no errors to stop on. */
+const errorsToStop = ({ frameErrors }: Stopping): number => frameErrors ?? Number.POSITIVE_INFINITY;
+
 export const reachedStop = (tally: Tally, stopping: Stopping) =>
-  tally.frameErrors >= stopping.frameErrors || tally.frames >= stopping.maxFrames;
+  tally.frameErrors >= errorsToStop(stopping) || tally.frames >= stopping.maxFrames;
 
 /** Share of a point's work that is behind it: by errors or by frames, whichever is further. */
 export function fractionDone(point: Pick<PointProgress, 'tally' | 'done'>, stopping: Stopping): number {
   if (point.done) return 1;
-  return Math.min(1, Math.max(point.tally.frameErrors / stopping.frameErrors, point.tally.frames / stopping.maxFrames));
+  return Math.min(1, Math.max(point.tally.frameErrors / errorsToStop(stopping), point.tally.frames / stopping.maxFrames));
 }
 
 /** Frames a point is expected to need still; with no error seen yet, all that the cap allows. */
@@ -65,5 +68,5 @@ export function framesLeft(point: Pick<PointProgress, 'tally' | 'done'>, stoppin
   const { frames, frameErrors } = point.tally;
   const toCap = Math.max(0, stopping.maxFrames - frames);
   if (frameErrors === 0) return toCap;
-  return Math.min(toCap, (Math.max(0, stopping.frameErrors - frameErrors) * frames) / frameErrors);
+  return Math.min(toCap, (Math.max(0, errorsToStop(stopping) - frameErrors) * frames) / frameErrors);
 }

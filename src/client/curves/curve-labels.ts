@@ -14,7 +14,7 @@ export function curveLabels(
     (curve) => runName(curve.runId),
     (curve) => curve.runId.slice(0, 8),
   ];
-  let labels = curves.map((curve) => `(${curve.n},${curve.k}) ${curveShortName(curve)}`);
+  let labels = curves.map((curve) => `(${curve.n},${curve.k}) ${curveShortName(curve)}${curve.at ? ', strata' : ''}`);
   for (const detail of detailers) {
     const groups = indicesByLabel(labels);
     const next = [...labels];

@@ -1,5 +1,6 @@
 import type { Point } from '@/api/runs.ts';
 import type { DecoderSpec } from '@/core/decoders/decoder-spec.ts';
+import type { Grade } from '@/core/evidence.ts';
 
 /** Which error rate is looked at: of frames, or of bits over all n positions. */
 export type RateKind = 'fer' | 'ber';
@@ -28,6 +29,8 @@ export interface CurvePoint {
   fer: Estimate;
   ber: Estimate;
   level: number;
+  /** `bounded` where the rate comes from weight strata and its limits are rigorous; a direct sample when not given. */
+  grade?: Extract<Grade, 'bounded' | 'sampled'>;
 }
 
 /** The points of one code under one decoder in one run, or of one set of measured data, from the worst channel to the
@@ -43,13 +46,24 @@ export interface Curve {
   /** null of data measured elsewhere, whose decoder is not ours to state. */
   decoder: DecoderSpec | null;
   points: CurvePoint[];
+  /** The rate at any p, of a curve that is known at every p and not only at its points. */
+  at?: (p: number) => CurvePoint;
 }
+
+/** A curve made from weight strata: a line within a band. */
+export type CombinedCurve = Curve & Required<Pick<Curve, 'at' | 'decoder'>>;
 
 /** Where a point stands on the axis of p; null for channels that have no crossover probability of their own. */
 export const crossoverOf = (point: Pick<Point, 'channel'>): number | null =>
   point.channel.kind === 'bsc' ? point.channel.p : null;
 
-export const isThin = (point: Pick<CurvePoint, 'frameErrors'>): boolean => point.frameErrors < THIN_BELOW_FRAME_ERRORS;
+/** Rigorous limits say themselves how thin the evidence is. */
+export const isThin = (point: Pick<CurvePoint, 'frameErrors' | 'grade'>): boolean =>
+  point.grade !== 'bounded' && point.frameErrors < THIN_BELOW_FRAME_ERRORS;
+
+/** The point of a curve at p: of a combined curve any, of another one that was measured there. */
+export const pointAt = (curve: Pick<Curve, 'points' | 'at'>, p: number): CurvePoint | undefined =>
+  curve.at && curve.points.length > 0 ? curve.at(p) : curve.points.find((point) => Math.abs(point.p / p - 1) < 1e-9);
 
 /** The measured part of a point as a curve shows it; null while no frame is in, or off the axis of p. */
 export function curvePointOf(point: Point): CurvePoint | null {

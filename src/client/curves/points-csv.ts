@@ -56,11 +56,11 @@ function pointRow(curve: Curve, point: CurvePoint, note: RunNote | undefined): s
     String(point.frameErrors),
     String(point.bitErrors),
     String(point.undetected),
-    point.iterationsMean.toPrecision(6),
+    Number.isNaN(point.iterationsMean) ? '' : point.iterationsMean.toPrecision(6),
     ...estimateCells(point.fer),
     ...estimateCells(point.ber),
     String(point.level),
-    'sampled',
+    point.grade ?? 'sampled',
     markOf(point),
   ];
 }
@@ -71,7 +71,13 @@ const estimateCells = ({ value, lower, upper }: Estimate): string[] =>
 const digits = (x: number): string => String(Number(x.toPrecision(8)));
 
 const markOf = (point: CurvePoint): string =>
-  point.frameErrors === 0 ? 'no error seen, upper limit only' : isThin(point) ? 'thin' : '';
+  point.grade === 'bounded'
+    ? 'from weight strata'
+    : point.frameErrors === 0
+      ? 'no error seen, upper limit only'
+      : isThin(point)
+        ? 'thin'
+        : '';
 
 /** A whole CSV file. */
 export const csvText = (rows: readonly (readonly string[])[]): string => rows.map(csvLine).join('');

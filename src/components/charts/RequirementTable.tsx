@@ -1,4 +1,4 @@
-import { isThin } from '@/client/curves/curve.ts';
+import { isThin, pointAt } from '@/client/curves/curve.ts';
 import { type Column, DataTable } from '@/components/ui/DataTable.tsx';
 import { CurveSwatch } from './CurveSwatch.tsx';
 import type { ChartCurve } from './chart-curve.ts';
@@ -20,11 +20,11 @@ const LOOK: Record<Verdict, string> = {
 };
 
 /** At the required channel point: the upper limit of each curve and what it says. Only a point measured there counts;
- *  nothing is read off between points. */
+ *  nothing is read off between points, save from weight strata, whose limits hold at every p. */
 export function RequirementTable({ curves, requirement }: Props) {
   const { p, kind, target } = requirement;
   if (p === null) return null;
-  const pointOf = ({ curve }: ChartCurve) => curve.points.find((point) => Math.abs(point.p / p - 1) < 1e-9);
+  const pointOf = ({ curve }: ChartCurve) => pointAt(curve, p);
   const columns: Column<ChartCurve>[] = [
     {
       key: 'curve',

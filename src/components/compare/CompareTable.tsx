@@ -55,7 +55,13 @@ export function CompareTable({ curves, kind }: Props) {
         empty="No points to compare."
       />
       <p className="flex flex-wrap items-baseline gap-x-4 text-quiet text-tiny">
-        <Grade grade="sampled" method="Monte Carlo over the frames stated" />
+        {curves.some(({ curve }) => !curve.at) && <Grade grade="sampled" method="Monte Carlo over the frames stated" />}
+        {curves.some(({ curve }) => curve.at) && (
+          <span className="inline-flex items-baseline gap-2">
+            <Grade grade="bounded" method="from weight strata; the limits hold at every p at once" />
+            strata: estimate and rigorous limits
+          </span>
+        )}
         <span>
           <span className="font-semibold text-thin">thin</span>: fewer than 100 frame errors.
         </span>
@@ -78,7 +84,10 @@ function Head({ chartCurve }: { chartCurve: ChartCurve }) {
 function Cell({ point, kind }: { point: CurvePoint | null; kind: RateKind }) {
   if (point === null) return <span className="whitespace-nowrap font-sans text-quiet">no point</span>;
   const rate = point[kind];
-  const counts = `${counted(point.frameErrors, 'frame error')} in ${counted(point.frames, 'frame')}`;
+  const counts =
+    point.grade === 'bounded'
+      ? 'rigorous limits from weight strata'
+      : `${counted(point.frameErrors, 'frame error')} in ${counted(point.frames, 'frame')}`;
   return (
     <span className="inline-grid whitespace-nowrap" title={counts}>
       <Figure text={rateText(rate)} />

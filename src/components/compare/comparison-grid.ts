@@ -1,6 +1,7 @@
 import type { CurvePoint, RateKind } from '@/client/curves/curve.ts';
-import { isThin } from '@/client/curves/curve.ts';
+import { isThin, pointAt } from '@/client/curves/curve.ts';
 import { uncodedRate } from '@/client/curves/uncoded.ts';
+import { isRound } from '@/client/strata/combined-curve.ts';
 import type { ChartCurve } from '../charts/chart-curve.ts';
 
 export interface GridRow {
@@ -9,11 +10,13 @@ export interface GridRow {
   cells: (CurvePoint | null)[];
 }
 
-/** Curves side by side: a row for each crossover probability at which any has a point, worst channel first. */
+/** Curves side by side: a row for each crossover probability at which any has a point, worst channel first. Of curves
+ *  known at every p the round ones of their own have rows. */
 export function comparisonGrid(curves: readonly ChartCurve[]): GridRow[] {
   const rows = new Map<number, GridRow>();
   curves.forEach(({ curve }, column) => {
     for (const point of curve.points) {
+      if (curve.at && !isRound(point.p)) continue;
       let row = rows.get(point.p);
       if (row === undefined) {
         row = { p: point.p, cells: curves.map(() => null) };
@@ -21,6 +24,9 @@ export function comparisonGrid(curves: readonly ChartCurve[]): GridRow[] {
       }
       row.cells[column] = point;
     }
+  });
+  curves.forEach(({ curve }, column) => {
+    if (curve.at) for (const row of rows.values()) row.cells[column] ??= pointAt(curve, row.p) ?? null;
   });
   return [...rows.values()].sort((a, b) => b.p - a.p);
 }

@@ -25,7 +25,7 @@ export interface StratifiedRate extends RateBounds {
 }
 
 /** The share of failing patterns, and of wrong bits, at one weight. */
-interface Fractions {
+export interface Fractions {
   frames: RateBounds;
   bits: RateBounds | null;
 }
@@ -55,7 +55,12 @@ export function stratifiedCurve(
   ps: readonly number[],
   level: number,
 ): StratifiedRate[] {
-  const fractions = fractionsByWeight(strata, n, level);
+  return ratesAt(fractionsByWeight(strata, n, level), ps);
+}
+
+/** The same from the shares of each weight, 0 to n, for whoever comes back for more p. */
+export function ratesAt(fractions: readonly Fractions[], ps: readonly number[]): StratifiedRate[] {
+  const n = fractions.length - 1;
   const haveBits = fractions.every(({ bits }) => bits !== null);
   const logs = logFactorials(n);
   return ps.map((p) => {

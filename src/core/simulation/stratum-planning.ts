@@ -1,5 +1,5 @@
 import { lowerLimit, upperLimit } from '../statistics/binomial-interval.ts';
-import { fractionsByWeight, type Stratum, weightLaw } from './stratified-rate.ts';
+import { type Fractions, fractionsByWeight, type Stratum, weightLaw } from './stratified-rate.ts';
 
 /** What one weight contributes to the failure rate at some p. */
 export interface Contribution {
@@ -21,8 +21,13 @@ export function dominantStrata(
   level: number,
   most = 8,
 ): Contribution[] {
-  const law = weightLaw(n, p);
-  const parts = fractionsByWeight(strata, n, level).map(({ frames }, weight) => ({
+  return contributions(fractionsByWeight(strata, n, level), p, most);
+}
+
+/** The same from the shares of each weight, 0 to n. */
+export function contributions(fractions: readonly Fractions[], p: number, most = 8): Contribution[] {
+  const law = weightLaw(fractions.length - 1, p);
+  const parts = fractions.map(({ frames }, weight) => ({
     weight,
     probability: law[weight]!,
     estimate: law[weight]! * frames.estimate,

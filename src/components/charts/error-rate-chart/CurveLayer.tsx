@@ -12,11 +12,12 @@ const DENSE_FROM = 80;
 
 /** One curve: line through measured points, whiskers, points, and arrows hanging from upper limits. */
 export function CurveLayer({ placed, style, activePointId }: Props) {
-  const { marks, path, curve } = placed;
+  const { marks, path, band, curve } = placed;
   const isDense = marks.length >= DENSE_FROM;
   const foot = isDense ? 0 : 3;
   return (
     <g style={{ color: curveColour(style) }} data-curve={curve.key} stroke="currentColor" fill="none">
+      {band !== '' && <path d={band} fill="currentColor" fillOpacity="0.16" strokeWidth="0.6" data-band />}
       {path !== '' && (
         <path
           d={path}
@@ -26,8 +27,10 @@ export function CurveLayer({ placed, style, activePointId }: Props) {
           strokeLinejoin="round"
         />
       )}
-      <path d={marks.map((mark) => whiskerPath(mark, foot)).join('')} strokeWidth="1.2" data-whiskers />
-      {marks.map((mark) => (
+      {band === '' && (
+        <path d={marks.map((mark) => whiskerPath(mark, foot)).join('')} strokeWidth="1.2" data-whiskers />
+      )}
+      {marksToDraw(placed, activePointId).map((mark) => (
         <PointMark
           key={mark.point.pointId}
           mark={mark}
@@ -38,6 +41,10 @@ export function CurveLayer({ placed, style, activePointId }: Props) {
     </g>
   );
 }
+
+/** Within a band only the point that is looked at is marked. */
+const marksToDraw = ({ marks, band }: CurveMarks, activePointId: string | null): readonly Mark[] =>
+  band === '' ? marks : marks.filter(({ point }) => point.pointId === activePointId);
 
 function whiskerPath({ whisker, x }: Mark, foot: number): string {
   if (whisker === null) return '';

@@ -48,7 +48,8 @@ export function ErrorRateChart(props: ErrorRateChartProps) {
   const caption = intervalCaption(curves, props.intervalMethod);
   const keep = (file: ChartFile) => {
     const shown = curves.filter(({ curve }) => !props.hidden.has(curve.key));
-    const key = `${markWords(caption)}, ${uncodedFormula(kind)}.`;
+    const bands = shown.some(({ curve }) => curve.at) ? '; bands: rigorous limits from weight strata' : '';
+    const key = `${markWords(caption)}, ${uncodedFormula(kind)}${bands}.`;
     return keepChart(svg.current!, { title, curves: shown, key, provenance: props.provenance }, file);
   };
 
@@ -83,7 +84,7 @@ export function ErrorRateChart(props: ErrorRateChartProps) {
       </div>
       <figcaption className="mt-2 grid gap-1.5 px-1">
         <Legend curves={curves} hidden={props.hidden} onToggle={props.onToggle} />
-        <MarkKey interval={caption} kind={kind} />
+        <MarkKey interval={caption} kind={kind} hasBands={curves.some(({ curve }) => curve.at)} />
       </figcaption>
     </figure>
   );

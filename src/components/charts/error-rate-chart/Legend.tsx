@@ -33,7 +33,7 @@ export function Legend({ curves, hidden, onToggle }: Props) {
 }
 
 /** What the marks and the thin lines mean. */
-export function MarkKey({ interval, kind }: { interval: string; kind: RateKind }) {
+export function MarkKey({ interval, kind, hasBands }: { interval: string; kind: RateKind; hasBands: boolean }) {
   return (
     <p className="flex flex-wrap gap-x-5 gap-y-1 text-quiet text-tiny">
       <KeyItem text={`interval, ${interval}`}>
@@ -46,6 +46,12 @@ export function MarkKey({ interval, kind }: { interval: string; kind: RateKind }
       <KeyItem text="no error seen: the rate is below the bar">
         <path d={boundPath(9, 0.8)} strokeWidth="1.4" transform="scale(0.9)" />
       </KeyItem>
+      {hasBands && (
+        <KeyItem text="band: rigorous limits from weight strata, valid at every p at once">
+          <path d="M0 3 18 6v7L0 10z" fill="currentColor" fillOpacity="0.16" strokeWidth="0.6" />
+          <path d="M0 6.5 18 9.5" strokeWidth="1.6" />
+        </KeyItem>
+      )}
       <KeyItem text="shaded: not measured">
         <rect x="0.5" y="2.5" width="17" height="11" fill="var(--unmeasured)" stroke="var(--rule)" />
       </KeyItem>

@@ -10,8 +10,11 @@ import type { Mark } from './marks.ts';
 /** A point in one sentence, for the status line that screen readers hear. */
 export function pointSentence(label: string, point: CurvePoint, kind: RateKind): string {
   const errors = counted(point.frameErrors, 'frame error');
+  const rate = `${label}: at p = ${parameterText(point.p)}, ${kind.toUpperCase()} ${rateText(point[kind], 3)}`;
+  if (point.grade === 'bounded')
+    return `${rate}, rigorous ${levelText(point.level)} limits ${intervalText(point[kind])}.`;
   const thin = isThin(point) ? ', thin' : '';
-  return `${label}: at p = ${parameterText(point.p)}, ${kind.toUpperCase()} ${rateText(point[kind], 3)}, ${levelText(point.level)} interval ${intervalText(point[kind])}, ${errors} in ${counted(point.frames, 'frame')}${thin}.`;
+  return `${rate}, ${levelText(point.level)} interval ${intervalText(point[kind])}, ${errors} in ${counted(point.frames, 'frame')}${thin}.`;
 }
 
 interface Props {
@@ -46,9 +49,14 @@ export function Readout({ chartCurve, mark, kind, width }: Props) {
         <Line label="p" value={parameterText(point.p)} />
         <Line label={kind.toUpperCase()} value={rateText(rate, 3)} />
         <Line label={levelText(point.level)} value={intervalText(rate)} />
-        <Line label="frames" value={wholeNumber(point.frames)} />
-        <Line label="errors" value={wholeNumber(point.frameErrors)} />
+        {point.grade !== 'bounded' && (
+          <>
+            <Line label="frames" value={wholeNumber(point.frames)} />
+            <Line label="errors" value={wholeNumber(point.frameErrors)} />
+          </>
+        )}
       </dl>
+      {point.grade === 'bounded' && <p className="mt-1 text-quiet">bounded: rigorous limits from weight strata</p>}
       {isThin(point) && <p className="mt-1 font-semibold text-thin">thin: fewer than 100 frame errors</p>}
     </div>
   );

@@ -1,4 +1,4 @@
-import { line } from 'd3-shape';
+import { area, line } from 'd3-shape';
 import type { Curve, CurvePoint, RateKind } from '@/client/curves/curve.ts';
 import { isThin } from '@/client/curves/curve.ts';
 import { downsample } from '@/client/curves/downsample.ts';
@@ -26,6 +26,8 @@ export interface CurveMarks {
   inside: readonly Mark[];
   /** Path through the measured points; bounds are not joined, as no value is known there. */
   path: string;
+  /** Between the limits, of a curve known at every p; empty for measured points, which have whiskers. */
+  band: string;
   /** The last mark inside the window, where the label goes. */
   end: Mark | null;
 }
@@ -43,7 +45,16 @@ export function curveMarks(curve: Curve, kind: RateKind, frame: Frame, window: C
     mark.point.p >= window.pMin && mark.point.p <= window.pMax && mark.y >= frame.top && mark.y <= frame.bottom;
   const seen = marks.filter(inside);
   const end = seen.findLast((mark) => !mark.isBound) ?? null;
-  return { curve, marks, inside: seen, path: path ?? '', end: labelAnchor(end, seen.at(-1) ?? null) };
+  const band = curve.at ? bandPath(placed, frame) : '';
+  return { curve, marks, inside: seen, path: path ?? '', band, end: labelAnchor(end, seen.at(-1) ?? null) };
+}
+
+function bandPath(placed: readonly Mark[], frame: Frame): string {
+  const path = area<Mark>()
+    .x((mark) => mark.x)
+    .y0((mark) => mark.whisker?.low ?? frame.bottom + 10)
+    .y1((mark) => mark.whisker?.high ?? mark.y);
+  return path(placed) ?? '';
 }
 
 /** The label stands at the last measured mark, or at the last bound when there are only bounds after it. */

@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { createStrataApi } from './strata.ts';
+
+expose(createStrataApi());
