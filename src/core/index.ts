@@ -19,7 +19,18 @@ export type { Verdict } from './catalogue/requirements.ts';
 export { type Candidate, type SearchResult, searchCatalogue, searchTable } from './catalogue/search.ts';
 export { catalogueTable } from './catalogue/table.ts';
 export { type Channel, channelSchema } from './channels/channel.ts';
-export { analyseLdpc, type LdpcAnalysis } from './codes/analyse-ldpc.ts';
+export { type AnalysableCode, analyseLdpc, type LdpcAnalysis } from './codes/analyse-ldpc.ts';
+export { cycleHistogram } from './codes/analysis/cycle-histogram.ts';
+export { type DistanceEffort, distanceEfforts } from './codes/analysis/distance/distance.ts';
+export { type DistanceFound, findDistance } from './codes/analysis/distance/exact-distance.ts';
+export { lowerBounds } from './codes/analysis/distance/lower-bounds.ts';
+export { weightDistribution } from './codes/analysis/distance/weight-distribution.ts';
+export { weightFourWords } from './codes/analysis/distance/weight-four.ts';
+export { type MajoritySteps, multiStepMajority, oneStepRadius } from './codes/analysis/majority-logic.ts';
+export { type AbsorbingSets, absorbingSets } from './codes/analysis/sets/absorbing-sets.ts';
+export { type StoppingSets, smallestStoppingSets } from './codes/analysis/sets/stopping-sets.ts';
+export { type OverlapSpectrum, overlapSpectrum } from './codes/analysis/spectrum/second-eigenvalue.ts';
+export { tannerOrbits } from './codes/analysis/tanner-orbits.ts';
 export {
   type ConstantWeightCode,
   deriveConstantWeight,
@@ -40,7 +51,11 @@ export {
 export { complementCode, shortenAt } from './codes/constant-weight/smaller-codes.ts';
 export { parallelClassesOf, partitionByClasses } from './codes/constant-weight/word-classes.ts';
 export { threshold, thresholdOfMatrix } from './codes/density-evolution/threshold.ts';
+export { approximateTriangularEncoder } from './codes/encode/approximate-triangular.ts';
+export { type EncoderEntry, type EncoderReport, encoderReport } from './codes/encode/encoder-report.ts';
 export { generatorPolynomial } from './codes/encode/generator-polynomial.ts';
+export { shiftRegister } from './codes/encode/shift-register.ts';
+export { systematicCirculants } from './codes/encode/systematic-circulants.ts';
 export { type SystematicEncoder, systematicEncoder } from './codes/encode/systematic-encoder.ts';
 export { fingerprint } from './codes/fingerprint.ts';
 export { deriveLdpc, type LdpcCode, type Transform } from './codes/ldpc.ts';

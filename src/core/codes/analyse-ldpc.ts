@@ -1,10 +1,13 @@
 import type { DesignSpec, Symmetry } from '../designs/block-design.ts';
 import type { Enclosure, Graded } from '../evidence.ts';
 import { type Circulant, circulantOf, cyclicGenerators } from '../gf2/cyclic.ts';
+import { quasiCyclicForm } from '../gf2/quasi-cyclic.ts';
 import { findRank } from '../gf2/rank.ts';
 import { type CycleCounts, countCycles } from './analysis/cycles.ts';
 import { type DistanceEffort, distanceOf } from './analysis/distance/distance.ts';
+import { weightFourWords } from './analysis/distance/weight-four.ts';
 import { girth as girthOf } from './analysis/girth.ts';
+import { type MajoritySteps, multiStepMajority, oneStepRadius } from './analysis/majority-logic.ts';
 import { type TannerOrbits, tannerOrbits } from './analysis/tanner-orbits.ts';
 import { columnWeightProfile, rowWeightProfile, type WeightProfile } from './analysis/weights.ts';
 import type { SparseMatrix } from './sparse-matrix.ts';
@@ -34,9 +37,17 @@ export interface LdpcAnalysis {
   cyclesPerColumn?: Map<number, Float64Array>;
   /** Least weight of a codeword other than zero; 0 to 0 when there is none. */
   distance: Graded<Enclosure>;
+  /** Errors that one vote among each bit's checks always corrects. */
+  oneStepRadius: Graded<number>;
+  /** Majority logic in several steps, for checks on the flats of a geometry. */
+  majority?: Graded<MajoritySteps>;
+  /** Number of words of weight 4, for codes of triples few enough to be gone through at once. */
+  weightFourWords?: Graded<number>;
   /** The rows are closed under the cyclic shift of the columns. */
   cyclic: boolean;
   circulant?: Circulant;
+  /** The rows are closed under moving every block of `size` columns by one place; not given for cyclic matrices. */
+  quasiCyclic?: { size: number; blocks: number };
   evidence: {
     rank: Graded<number>;
     k: Graded<number>;
@@ -47,21 +58,24 @@ export interface LdpcAnalysis {
 }
 
 /** Rank, weights, girth, cycles and distance of the code {c : H·c = 0}. Cycles are counted unless `cycles` is false;
- *  `distance` says how hard to look.
+ *  `distance` says how hard to look, by name or by budget; `onProgress` is told the share of that budget spent.
  *  @throws LimitError when the matrix is too large to be ranked. */
 export function analyseLdpc(
   code: AnalysableCode,
-  options: { cycles?: boolean; distance?: DistanceEffort } = {},
+  options: { cycles?: boolean; distance?: DistanceEffort; onProgress?(share: number): void } = {},
 ): LdpcAnalysis {
   const { H } = code;
+  const { onProgress } = options;
   const circulant = circulantOf(H) ?? undefined;
   const cyclic = cyclicGenerators(H) !== null;
-  const { rank, method: rankMethod } = findRank(H);
+  const form = cyclic ? null : quasiCyclicForm(H);
+  const { rank, method: rankMethod } = findRank(H, form);
   const k = H.cols - rank;
   const orbits = tannerOrbits(H, code.columnSymmetry);
   const girth = girthOf(H, orbits);
   const columnWeights = columnWeightProfile(H);
   const leastColumnWeight = columnWeights[0]?.[0] ?? 0;
+  const fours = (H.rows <= MOST_POINTS_AT_ONCE && weightFourWords(H, girth)) || undefined;
   const counted = options.cycles === false ? undefined : countCycles(H, girth, LONGEST_COUNTED, orbits);
   const cycles: Record<string, number | bigint> = Object.fromEntries(counted?.total ?? []);
   return {
@@ -73,9 +87,17 @@ export function analyseLdpc(
     columnWeights,
     girth,
     ...(counted && { cycles, cyclesPerColumn: counted.perColumn }),
-    distance: distanceOf(code, { k, girth, cyclic, leastColumnWeight, orbits }, options.distance),
+    distance: distanceOf(
+      code,
+      { k, girth, cyclic, leastColumnWeight, orbits, weightFourWords: fours, onProgress },
+      options.distance,
+    ),
+    oneStepRadius: oneStepRadius(H, girth, orbits),
+    majority: multiStepMajority(code) ?? undefined,
+    weightFourWords: fours,
     cyclic,
     circulant,
+    quasiCyclic: form ? { size: form.size, blocks: form.blocks } : undefined,
     evidence: {
       rank: { value: rank, grade: 'computed', method: rankMethod },
       k: { value: k, grade: 'computed', method: 'n − rank' },
@@ -85,6 +107,9 @@ export function analyseLdpc(
     },
   };
 }
+
+/** Triples on more points are searched for Pasch configurations only when asked. */
+const MOST_POINTS_AT_ONCE = 300;
 
 /** Cycles up to this length are counted, where the method reaches it. */
 const LONGEST_COUNTED = 8;

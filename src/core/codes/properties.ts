@@ -2,6 +2,7 @@ import type { CodePrediction, DesignPrediction } from '../designs/family.ts';
 import type { Citation } from '../errors.ts';
 import type { Enclosure, Grade, Graded } from '../evidence.ts';
 import type { LdpcAnalysis } from './analyse-ldpc.ts';
+import { cycleHistogram } from './analysis/cycle-histogram.ts';
 import type { LdpcCode } from './ldpc.ts';
 
 /** One line of a code's sheet, ready to show. */
@@ -50,10 +51,28 @@ export function propertiesOf(
     weights('column-weight', 'Column weight', analysis.columnWeights),
     fromGraded('girth', 'Girth', evidence.girth, girthText),
     ...cycleLines(analysis),
-    enclosureLine('distance', 'Minimum distance', analysis.distance),
-    radiusLine(analysis),
+    ...cyclesPerBitLine(analysis),
+    enclosureLine('distance', 'Minimum distance', within(analysis.distance, predicted?.distance)),
+    ...weightFourLine(analysis),
+    fromGraded('one-step-radius', 'One-step radius', analysis.oneStepRadius, errorsText),
+    ...multiStepLine(analysis),
     structureLine(analysis),
   ];
+}
+
+/** The narrower of what was found on the matrix and what a formula says of the design. */
+function within(found: Graded<Enclosure>, predicted: Graded<Enclosure> | undefined): Graded<Enclosure> {
+  if (!predicted) return found;
+  const [a, b] = [found.value, predicted.value];
+  const value = { lower: Math.max(a.lower, b.lower), upper: Math.min(a.upper, b.upper) };
+  if (value.lower > value.upper)
+    throw new Error(
+      `a closed formula disagrees with the distance: ${b.lower} to ${b.upper}, found ${a.lower} to ${a.upper}`,
+    );
+  if (value.lower === a.lower && value.upper === a.upper) return found;
+  if (value.lower === b.lower && value.upper === b.upper) return predicted;
+  const grade = value.lower === value.upper ? 'proved' : 'bounded';
+  return { value, grade, method: `${found.method}; by formula: ${predicted.method}`, source: predicted.source };
 }
 
 function refuseDisagreement(analysis: LdpcAnalysis, predicted: CodePrediction | undefined): void {
@@ -112,28 +131,37 @@ function cycleLines({ cycles, evidence }: LdpcAnalysis): Property[] {
   }));
 }
 
-/** With girth 6 or more the checks on a bit share no other bit, so they are orthogonal on it, and one step of majority
- *  logic corrects half as many errors as the least column weight, rounded down (Massey 1963). */
-function radiusLine({ girth, columnWeights }: LdpcAnalysis): Property {
-  const least = columnWeights[0]?.[0] ?? 0;
-  const orthogonal = girth >= 6;
-  const radius = Math.floor(least / 2);
-  return {
-    key: 'one-step-radius',
-    label: 'One-step radius',
-    text: orthogonal ? `${radius} ${radius === 1 ? 'error' : 'errors'}` : 'not known',
-    number: orthogonal ? radius : undefined,
-    grade: orthogonal ? 'proved' : 'bounded',
-    method: orthogonal ? `${least} orthogonal checks on every bit` : 'checks on a bit share other bits, so 0 at least',
-    source: orthogonal ? 'J. L. Massey, Threshold Decoding, 1963' : undefined,
-  };
+/** How many of the shortest cycles pass through a bit, from the bit with fewest to the bit with most. */
+function cyclesPerBitLine({ girth, cyclesPerColumn, evidence }: LdpcAnalysis): Property[] {
+  const histogram = cycleHistogram(cyclesPerColumn, girth);
+  if (!histogram || !evidence.cycles) return [];
+  const [least, most] = [histogram[0]![0], histogram.at(-1)![0]];
+  const text = least === most ? `${spaced(least)} through every bit` : `${spaced(least)} to ${spaced(most)}`;
+  const { grade, method } = evidence.cycles;
+  return [
+    { key: 'cycles-per-bit', label: `Cycles of length ${girth} through a bit`, text, number: most, grade, method },
+  ];
 }
 
-function structureLine({ cyclic, evidence }: LdpcAnalysis): Property {
+const errorsText = (radius: number) => `${radius} ${radius === 1 ? 'error' : 'errors'}`;
+
+function multiStepLine({ majority }: LdpcAnalysis): Property[] {
+  if (!majority || majority.value.steps.length < 2) return [];
+  const { steps, radius } = majority.value;
+  const line = fromGraded('multi-step-radius', 'Majority-logic radius', { ...majority, value: radius }, errorsText);
+  return [{ ...line, text: `${errorsText(radius)} in ${steps.length} steps` }];
+}
+
+function weightFourLine({ weightFourWords }: LdpcAnalysis): Property[] {
+  return weightFourWords ? [fromGraded('weight-4-words', 'Words of weight 4', weightFourWords, spaced)] : [];
+}
+
+function structureLine({ cyclic, quasiCyclic, evidence }: LdpcAnalysis): Property {
+  const blocks = quasiCyclic && `quasi-cyclic, ${quasiCyclic.blocks} blocks of ${quasiCyclic.size} columns`;
   return {
     key: 'structure',
     label: 'Structure',
-    text: cyclic ? 'cyclic' : 'not cyclic in this order',
+    text: cyclic ? 'cyclic' : (blocks ?? 'not cyclic in this order'),
     grade: evidence.cyclic.grade,
     method: evidence.cyclic.method,
   };

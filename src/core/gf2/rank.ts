@@ -4,7 +4,7 @@ import { PACKED_LIMIT_BYTES } from './bit-matrix.ts';
 import { cyclicRank } from './cyclic.ts';
 import { fourRussiansRank } from './four-russians.ts';
 import { peel } from './peel.ts';
-import { quasiCyclicForm } from './quasi-cyclic.ts';
+import { type QuasiCyclicForm, quasiCyclicForm } from './quasi-cyclic.ts';
 import { quasiCyclicRank, quasiCyclicWork } from './quasi-cyclic-rank.ts';
 
 export interface RankFound {
@@ -19,11 +19,12 @@ export function rank(H: SparseMatrix): number {
   return findRank(H).rank;
 }
 
-/** The rank, and by which of the three ways it was found. */
-export function findRank(H: SparseMatrix): RankFound {
+/** The rank, and by which of the three ways it was found. The quasi-cyclic form may be given where it is known, or null
+ *  where it is known that there is none. */
+export function findRank(H: SparseMatrix, known?: QuasiCyclicForm | null): RankFound {
   const cyclic = cyclicRank(H);
   if (cyclic !== null) return { rank: cyclic, method: 'n − deg gcd(rows, x^n + 1)' };
-  const form = H.colIndex.length >= KERNEL_FROM_ONES ? quasiCyclicForm(H) : null;
+  const form = known === undefined && H.colIndex.length >= KERNEL_FROM_ONES ? quasiCyclicForm(H) : known;
   if (form && quasiCyclicWork(form) < eliminationWork(H)) {
     const method = `block by block over GF(2)[x]/(x^${form.size} + 1)`;
     return { rank: quasiCyclicRank(form), method };

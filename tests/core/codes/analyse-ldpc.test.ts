@@ -1,7 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { analyseLdpc } from '../../../src/core/codes/analyse-ldpc.ts';
-import { matrixFromRows } from '../../../src/core/codes/sparse-matrix.ts';
-import { circulantMatrix } from '../../models/gf2-models.ts';
+import { cycleHistogram } from '../../../src/core/codes/analysis/cycle-histogram.ts';
+import { matrixFromRows, transpose } from '../../../src/core/codes/sparse-matrix.ts';
+import { circulantMatrix, quasiCyclicMatrix } from '../../models/gf2-models.ts';
+
+const fano = circulantMatrix(7, [0, 1, 3]);
 
 describe('analysis of an LDPC code', () => {
   it('of PG(2,4) finds [21, 11], girth 6 and a distance that encloses 6', () => {
@@ -15,6 +18,22 @@ describe('analysis of an LDPC code', () => {
 
   it('counts no cycles when asked not to', () => {
     expect(analyseLdpc({ H: circulantMatrix(7, [0, 1, 3]) }, { cycles: false }).cycles).toBeUndefined();
+  });
+
+  it('knows circulants in blocks, the words of weight 4 and how many cycles pass a bit', () => {
+    const code = analyseLdpc({ H: transpose(fano) });
+    expect(code.weightFourWords?.value).toBe(7);
+    expect(cycleHistogram(code.cyclesPerColumn, 6)).toEqual([[12, 7]]);
+    expect(cycleHistogram(code.cyclesPerColumn, 20)).toBeNull();
+    const blocks = analyseLdpc({
+      H: quasiCyclicMatrix(13, [
+        [
+          [0, 1, 4],
+          [0, 2, 7],
+        ],
+      ]),
+    });
+    expect(blocks.quasiCyclic).toEqual({ size: 13, blocks: 2 });
   });
 
   it('of a full-rank matrix says that no distance is defined', () => {

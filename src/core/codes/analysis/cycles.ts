@@ -14,18 +14,24 @@ export interface CycleCounts {
   stoppedBy?: 'length limit of the method' | 'numbers past 2^53' | 'work limit';
 }
 
-/** Edges walked in one count at most, a few seconds. */
+/** Edges walked in one count at most unless more are asked for, a few seconds. */
 export const CYCLE_WORK_LIMIT = 4e8;
 
 /** Exact numbers of cycles of lengths g to maxLength, at most 2g − 2: below 2g every closed walk that never turns back is
  *  a cycle (Karimi and Banihashemi 2012), so walks are counted, from one column of each orbit. Lengths g and g + 2 take one
  *  sweep of the graph a column, longer ones a sweep for each edge of it. */
-export function countCycles(H: SparseMatrix, girth: number, maxLength: number, orbits: TannerOrbits): CycleCounts {
+export function countCycles(
+  H: SparseMatrix,
+  girth: number,
+  maxLength: number,
+  orbits: TannerOrbits,
+  workLimit = CYCLE_WORK_LIMIT,
+): CycleCounts {
   const counts: CycleCounts = { total: new Map(), perColumn: new Map() };
   if (!Number.isFinite(girth) || maxLength < girth) return counts;
   let longest = Math.min(maxLength, 2 * girth - 2);
   if (longest < maxLength) counts.stoppedBy = 'length limit of the method';
-  while (longest >= girth && workOf(H, girth, longest, orbits) > CYCLE_WORK_LIMIT) {
+  while (longest >= girth && workOf(H, girth, longest, orbits) > workLimit) {
     longest -= 2;
     counts.stoppedBy = 'work limit';
   }

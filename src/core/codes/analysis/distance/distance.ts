@@ -39,6 +39,10 @@ export interface DistanceFacts {
   cyclic: boolean;
   leastColumnWeight: number;
   orbits: TannerOrbits;
+  /** Where it was counted. */
+  weightFourWords?: Graded<number>;
+  /** Told the share of the budget spent by a search. */
+  onProgress?(share: number): void;
 }
 
 /** Lower and upper value of the distance of {c : H·c = 0}, with both methods.
@@ -66,7 +70,8 @@ export function distanceOf(
     return { value: { lower: least!, upper: least! }, grade: 'computed', method };
   }
   if (limits.wordOperations > distanceEfforts.quick.wordOperations && n <= limits.length) {
-    return findDistance(code.H, facts, limits)!.distance;
+    const { wordOperations } = limits;
+    return findDistance(code.H, facts, { wordOperations, onProgress: facts.onProgress })!.distance;
   }
   return enclosed(code, facts, limits);
 }
@@ -91,10 +96,13 @@ function enclosed(code: AnalysableCode, facts: DistanceFacts, limits: DistanceLi
   const operations = limits.eigenvalueOperations;
   const spectrum = operations > 0 ? overlapSpectrum(H, facts.orbits, { operations }) : null;
   // Roots of unity cost a field; they are asked only when something is to be computed at all.
-  const below = lowerBounds(H, { ...facts, cyclic: facts.cyclic && operations > 0, spectrum })[0]!;
+  const bound = lowerBounds(H, { ...facts, cyclic: facts.cyclic && operations > 0, spectrum })[0]!;
+  const four = operations > 0 ? facts.weightFourWords : undefined;
+  const below = four?.value === 0 && bound.value < 6 ? noPasch(bound, four) : bound;
   const uppers: [number, string][] = [[n - facts.k + 1, 'Singleton bound']];
+  if (four?.value) uppers.push([4, `${four.value} words of weight 4, Pasch configurations`]);
   if (facts.cyclic) uppers.push([generatorWeight(code), 'weight of the generator polynomial']);
-  if (n <= limits.length) {
+  if (n <= limits.length && Math.min(...uppers.map(([weight]) => weight)) > below.value) {
     const { wordOperations } = limits;
     const word = searchLowWeight(H, { seed: 'distance', wordOperations, goal: below.value });
     if (word) uppers.push([word.weight, 'a codeword found by information-set search']);
@@ -108,6 +116,14 @@ function enclosed(code: AnalysableCode, facts: DistanceFacts, limits: DistanceLi
     source: below.source,
   };
 }
+
+/** Columns of weight 3 make all weights even, and weight 4 is ruled out. */
+const noPasch = (bound: Graded<number>, { source }: Graded<number>): Graded<number> => ({
+  ...bound,
+  value: 6,
+  method: 'no Pasch configuration, so no word of weight 4, and all words are even',
+  source,
+});
 
 function generatorWeight({ H }: AnalysableCode): number {
   const g = cyclicGenerator(H);
