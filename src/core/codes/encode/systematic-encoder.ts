@@ -4,15 +4,19 @@ import { reducedEchelon } from '../../gf2/echelon.ts';
 import type { SparseMatrix } from '../sparse-matrix.ts';
 import { cyclicGenerator } from './generator-polynomial.ts';
 
-export interface SystematicEncoder {
+/** Any encoder that shows the information bits in the clear. */
+export interface WordEncoder {
   k: number;
   /** Positions of the codeword that carry the information bits, in the order of these bits. */
   infoPositions: Uint32Array;
-  /** How the parity bits are found. */
-  method: 'polynomial division' | 'dense parity rows';
   /** The codeword of k information bits, one byte 0 or 1 a bit.
    *  @throws ParamError when the word's length is not k. */
   encode(info: Uint8Array): Uint8Array;
+}
+
+export interface SystematicEncoder extends WordEncoder {
+  /** How the parity bits are found. */
+  method: 'polynomial division' | 'dense parity rows';
   /** For each information bit in turn, the other positions' bits, in ascending order of position, of the word in which
    *  it alone is one: the rows of P where G = [I P]. Much quicker than encoding them one by one. */
   parityRows(): Generator<Uint8Array>;
