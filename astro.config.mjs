@@ -35,6 +35,7 @@ const nodeWorkers = {
             input: {
               build: here('./workers/build/node.ts'),
               files: here('./workers/files/node.ts'),
+              simulate: here('./workers/simulate/node.ts'),
               upload: here('./workers/upload/node.ts'),
             },
             output: { entryFileNames: '[name].mjs' },

@@ -33,9 +33,14 @@ import {
   vectorQueryParams,
 } from './releases.ts';
 import {
+  failedShardsSchema,
+  leasesSchema,
+  newLeasesSchema,
   newRunSchema,
   pointSchema,
   pointsQueryParams,
+  provenanceQueryParams,
+  provenanceSchema,
   runEventsQueryParams,
   runPatchSchema,
   runSchema,
@@ -180,6 +185,25 @@ export const endpoints = {
     body: shardBatchSchema,
     response: shardReceiptSchema,
     scopes: ['run'],
+  }),
+  leaseShards: endpoint('POST', '/runs/:id/leases', 'Take shards to compute that nobody else has', {
+    body: newLeasesSchema,
+    response: leasesSchema,
+    scopes: ['run'],
+  }),
+  failShards: endpoint(
+    'POST',
+    '/runs/:id/failures',
+    'Say that shards could not be computed; the third time sets one aside',
+    {
+      body: failedShardsSchema,
+      response: z.object({ setAside: z.number() }),
+      scopes: ['run'],
+    },
+  ),
+  runProvenance: endpoint('GET', '/runs/:id/provenance', 'Where shards were computed, and which contradict or failed', {
+    query: provenanceQueryParams,
+    response: provenanceSchema,
   }),
   projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, for charts', {
     query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),

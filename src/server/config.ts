@@ -47,3 +47,13 @@ export function s3Settings(env: NodeJS.ProcessEnv = process.env): S3Settings | u
     secretAccessKey: env.S3_SECRET_ACCESS_KEY ?? '',
   };
 }
+
+/** The share of shards from browsers, scripts and the fleet that the server computes again; checked by
+ *  src/server/environment.mjs at the start. 0 takes every result as it comes. */
+export const recheckShare = (): number => Number(process.env.RECHECK_SHARE ?? '0.02');
+
+/** Threads that compute shards; all cores less one unless SIMULATION_THREADS says otherwise. */
+export const workerThreads = (): number | undefined =>
+  process.env.SIMULATION_THREADS ? Number(process.env.SIMULATION_THREADS) : undefined;
+
+export const redisUrl = (): string | undefined => process.env.REDIS_URL || undefined;

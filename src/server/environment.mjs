@@ -14,7 +14,8 @@ function refuse(name, given, accepted) {
   throw new SettingError(`${name}: got ${JSON.stringify(given)}; accepted is ${accepted}.`);
 }
 
-/** Reads HOST, PORT, DATA_DIR, PUBLIC_URL, AUTH_SECRET, TRUST_PROXY, SMTP_URL, MAIL_FROM and the S3_ settings. Makes the data folder, and in local mode the
+/** Reads HOST, PORT, DATA_DIR, PUBLIC_URL, AUTH_SECRET, TRUST_PROXY, SMTP_URL, MAIL_FROM, REDIS_URL,
+ *  RECHECK_SHARE, SIMULATION_THREADS and the S3_ settings. Makes the data folder, and in local mode the
  *  secret in it. What later modules read is written back to process.env: DATA_DIR as an absolute path, AUTH_SECRET.
  *  @throws SettingError */
 export function prepareEnvironment(env = process.env) {
@@ -27,6 +28,7 @@ export function prepareEnvironment(env = process.env) {
   const port = readPort(env.PORT);
   checkFileStore(env);
   checkMail(env);
+  checkWork(env);
   const dataDir = readDataDir(env.DATA_DIR);
   env.DATA_DIR = dataDir;
   env.AUTH_SECRET = publicUrl ? productionSecret(env.AUTH_SECRET) : localSecret(dataDir);
@@ -100,6 +102,24 @@ function checkMail(env) {
   }
   if (mailFrom !== undefined && !/^([^<>\r\n]*<[^<>@\s]+@[^<>@\s]+>|[^<>@\s]+@[^<>@\s]+)$/.test(mailFrom)) {
     refuse('MAIL_FROM', mailFrom, 'an e-mail address, such as Blockwright <bench@example.org>');
+  }
+}
+
+/** Where shards are computed, and how many of other places' are computed again.
+ *  @param {NodeJS.ProcessEnv} env */
+function checkWork(env) {
+  const { REDIS_URL: redisUrl, RECHECK_SHARE: share, SIMULATION_THREADS: threads } = env;
+  if (redisUrl) {
+    const url = URL.canParse(redisUrl) ? new URL(redisUrl) : undefined;
+    if (!url || !/^rediss?:$/.test(url.protocol) || url.hostname === '') {
+      refuse('REDIS_URL', redisUrl.replace(/\/\/.*@/, '//…@'), 'a URL such as redis://127.0.0.1:6379');
+    }
+  }
+  if (share !== undefined && !(share.trim() !== '' && Number(share) >= 0 && Number(share) <= 1)) {
+    refuse('RECHECK_SHARE', share, 'a share from 0 to 1, or no setting for 0.02');
+  }
+  if (threads !== undefined && !(/^\d{1,3}$/.test(threads) && Number(threads) >= 1)) {
+    refuse('SIMULATION_THREADS', threads, 'a whole number from 1 to 999, or no setting for all cores less one');
   }
 }
 

@@ -15,6 +15,7 @@ export type RefusalCode =
   | 'fingerprint'
   | 'in-use'
   | 'run-closed'
+  | 'quarantined'
   | 'too-large'
   | 'media-type'
   | 'busy'

@@ -8,6 +8,8 @@ export const exampleRun = (change: Partial<Run> = {}): Run => ({
   framesPerShard: 2000,
   stopping: { frameErrors: 100, maxFrames: 1_000_000 },
   place: 'browser',
+  goal: null,
+  outcome: null,
   state: 'finished',
   createdAt: '2026-12-01T05:00:00.000Z',
   createdBy: 'engineer',

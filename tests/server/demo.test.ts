@@ -51,7 +51,7 @@ describe('the stored results', () => {
       for (const [position, shards] of points.entries()) {
         const { n } = await built(run.points[position]!.code);
         const errors = shards.reduce((sum, [frameErrors]) => sum + frameErrors, 0);
-        const enough = errors >= run.stopping.frameErrors;
+        const enough = errors >= run.stopping.frameErrors!;
         expect(enough || shards.length * run.framesPerShard >= run.stopping.maxFrames).toBe(true);
         for (const packed of shards) {
           expect(impossibleTally(unpackTally(packed, run.framesPerShard, n), n, run.framesPerShard)).toBeNull();

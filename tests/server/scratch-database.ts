@@ -23,8 +23,8 @@ export function openScratch(dataDir = scratchDir()): Scratch {
 }
 
 /** A migrated database with one member, who owns one project. */
-export async function furnishedScratch(): Promise<Scratch & { context: Context; projectId: string }> {
-  const scratch = openScratch();
+export async function furnishedScratch(dataDir?: string): Promise<Scratch & { context: Context; projectId: string }> {
+  const scratch = openScratch(dataDir);
   await migrateSafely(scratch.db, migrationSource);
   const caller = { id: newId(), email: 'a@b.test', name: 'A member', role: 'member' as const };
   await insertUser(scratch.db, { ...caller, passwordHash: null, isDemo: false, createdAt: nowText() });

@@ -3,6 +3,7 @@
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import { runShard } from '@/core/simulation/shard.ts';
+import { stoppingReason } from '@/core/simulation/stopping.ts';
 import { emptyTally, mergeTallies } from '@/core/simulation/tally.ts';
 import { buildDemoCode } from './build.ts';
 import { kernelFor } from './kernel.ts';
@@ -21,7 +22,7 @@ async function computePoint(run: DemoRun, position: number, H: SparseMatrix): Pr
   const spec = { H, channel, decoder, seed, framesPerShard };
   const shards: PackedTally[] = [];
   let sum = emptyTally();
-  while (sum.frameErrors < stopping.frameErrors && sum.frames < stopping.maxFrames) {
+  while (stoppingReason(sum, stopping) === null) {
     const tally = await runShard(spec, shards.length, kernelFor(decoder));
     shards.push(packTally(tally));
     sum = mergeTallies(sum, tally);

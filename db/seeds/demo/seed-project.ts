@@ -9,7 +9,7 @@ import { insertProject } from '@/server/repositories/projects.ts';
 import { saveRequirements } from '@/server/repositories/requirements.ts';
 import { insertRun } from '@/server/repositories/runs.ts';
 import { insertShards } from '@/server/repositories/shards.ts';
-import { advancePoint } from '@/server/use-cases/runs/advance-point.ts';
+import { recountPoint } from '@/server/use-cases/runs/recount-point.ts';
 import { type DemoProject, type DemoRun, demoAccounts } from './scenario.ts';
 import { type PackedTally, type StoredResults, unpackTally } from './stored-results.ts';
 
@@ -80,5 +80,5 @@ async function seedShards(
   const tallies = packed.map((shard) => unpackTally(shard, run.framesPerShard, point.n));
   const shards = tallies.map((tally, index) => ({ pointId: point.id, index, tally }));
   await insertShards(db, shards, { userId, at: nowText() });
-  await advancePoint(db, point, tallies, run.stopping);
+  await recountPoint(db, run, point);
 }

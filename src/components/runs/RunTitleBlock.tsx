@@ -1,9 +1,10 @@
 import type { Point, Run } from '@/api/runs.ts';
-import { counted, wholeNumber } from '@/components/ui/numbers.ts';
+import { counted } from '@/components/ui/numbers.ts';
 import { TitleBlock, type TitleRow } from '@/components/ui/TitleBlock.tsx';
 import { INTERVAL_METHOD } from '../charts/interval-method.ts';
 import { levelText } from '../charts/rate-text.ts';
 import { STATE_WORD } from './run-progress.ts';
+import { stoppingRules } from './stopping-text.ts';
 
 interface Props {
   run: Run;
@@ -12,8 +13,8 @@ interface Props {
 
 /** What the run is, so that it can be done again to the last bit. */
 export function RunTitleBlock({ run, points }: Props) {
-  const { stopping } = run;
   const level = points[0]?.level;
+  const rules = stoppingRules(run.stopping);
   const rows: TitleRow[] = [
     {
       label: 'Run',
@@ -25,8 +26,11 @@ export function RunTitleBlock({ run, points }: Props) {
     { label: 'Shard', value: counted(run.framesPerShard, 'frame') },
     {
       label: 'A point ends',
-      value: `at ${counted(stopping.frameErrors, 'frame error')}`,
-      note: `or at ${wholeNumber(stopping.maxFrames)} frames`,
+      value: `at ${rules[0]}`,
+      note: rules
+        .slice(1)
+        .map((rule) => `or at ${rule}`)
+        .join(', '),
     },
     { label: 'Place', value: PLACE[run.place] },
     { label: 'Points', value: `${run.pointCount}` },

@@ -103,12 +103,25 @@ const MEASURED_COLUMNS: Column<PointRow>[] = [
   },
 ];
 
+const DONE_WORD: Record<NonNullable<Point['stopReason']>, string> = {
+  errors: 'done',
+  width: 'done, as narrow as asked',
+  frames: 'done, at the cap on frames',
+  pass: 'keeps the limit',
+  fail: 'does not keep the limit',
+  time: 'ended, time used up',
+  failed: 'given up',
+};
+
 /** A parameter that may be 0, as of a channel without errors in its good state. */
 const numberText = (value: number): string => (value === 0 ? '0' : parameterText(value));
 
 /** "done at 100 errors", "done at the cap", "under way", "waiting". */
-export function pointState(point: Pick<Point, 'done' | 'tally'>, stopping: Stopping): string {
-  if (point.done) return point.tally.frameErrors >= stopping.frameErrors ? 'done' : 'done, at the cap on frames';
+export function pointState(point: Pick<Point, 'done' | 'tally' | 'stopReason'>, { frameErrors }: Stopping): string {
+  if (point.done) {
+    const reached = frameErrors !== undefined && point.tally.frameErrors >= frameErrors ? 'errors' : 'frames';
+    return DONE_WORD[point.stopReason ?? reached];
+  }
   return point.tally.frames > 0 ? 'under way' : 'waiting';
 }
 

@@ -45,6 +45,8 @@ async function prepare(seedDemo: Seeder): Promise<void> {
   await redoInterruptedJobs(db);
   const { startSendingMail } = await import('../mail/outgoing.ts');
   await startSendingMail(db);
+  const { startWorking } = await import('../jobs/start-working.ts');
+  await startWorking(db);
   const { removeLeftovers } = await import('../files/receive-file.ts');
   await removeLeftovers();
 }

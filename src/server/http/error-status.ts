@@ -15,6 +15,7 @@ export const statusOf: Record<RefusalCode, number> = {
   fingerprint: 409,
   'in-use': 409,
   'run-closed': 409,
+  quarantined: 409,
   'too-large': 413,
   'media-type': 415,
   infeasible: 422,

@@ -1,6 +1,7 @@
+import type { Point, PointPlan } from '@/api/runs.ts';
 import type { Channel } from '@/core/channels/channel.ts';
 import type { DecoderSpec } from '@/core/decoders/decoder-spec.ts';
-import type { Tally } from '@/core/simulation/tally.ts';
+import { emptyTally, type Tally } from '@/core/simulation/tally.ts';
 import type { Database } from '../db/database.ts';
 import type { PageRequest } from './paging.ts';
 import type { Row } from './row.ts';
@@ -13,15 +14,29 @@ export interface NewPointRow {
   codeId: string;
   channel: Channel;
   decoder: DecoderSpec;
+  plan?: PointPlan | null;
 }
+
+export type StopReason = NonNullable<Point['stopReason']>;
 
 export interface StoredPoint extends NewPointRow {
   n: number;
   k: number;
   designTitle: string;
   tally: Tally;
+  /** Shards 0 … nextIndex − 1 are counted or set aside. */
   nextIndex: number;
   done: boolean;
+  /** Sum of the counted ones. */
+  counted: Tally;
+  /** Frames and errors before the last counted one. */
+  before: { frames: number; frameErrors: number };
+  stopReason: StopReason | null;
+  /** The number of errors that it stopped on, if it did. */
+  stopTarget: number | null;
+  recomputed: number;
+  setAside: number;
+  plan: PointPlan | null;
 }
 
 // SQLite takes at most 500 rows in one compound statement.
@@ -35,6 +50,7 @@ export async function insertPoints(db: Database, points: readonly NewPointRow[])
     code_id: point.codeId,
     channel: JSON.stringify(point.channel),
     decoder: JSON.stringify(point.decoder),
+    plan: point.plan ? JSON.stringify(point.plan) : null,
   }));
   for (let from = 0; from < rows.length; from += rowsAStatement) {
     await db('points').insert(rows.slice(from, from + rowsAStatement));
@@ -87,19 +103,66 @@ export async function measuredPointsOf(
   return (await query).map(toPoint);
 }
 
-export async function savePointProgress(
-  db: Database,
-  id: string,
-  progress: Pick<StoredPoint, 'tally' | 'nextIndex' | 'done'>,
-): Promise<void> {
+export type PointProgress = Pick<
+  StoredPoint,
+  'tally' | 'counted' | 'before' | 'nextIndex' | 'done' | 'stopReason' | 'stopTarget' | 'setAside'
+>;
+
+export async function savePointProgress(db: Database, id: string, progress: PointProgress): Promise<void> {
   await db('points')
     .where({ id })
-    .update({ ...tallyToColumns(progress.tally), next_index: progress.nextIndex, done: progress.done ? 1 : 0 });
+    .update({
+      ...tallyToColumns(progress.tally),
+      next_index: progress.nextIndex,
+      done: progress.done ? 1 : 0,
+      counted: JSON.stringify(progress.counted),
+      before_frames: progress.before.frames,
+      before_errors: progress.before.frameErrors,
+      stop_reason: progress.stopReason,
+      stop_target: progress.stopTarget,
+      set_aside: progress.setAside,
+    });
+}
+
+/** Points of a run that are not done, in their order. */
+export async function openPointsOf(db: Database, runId: string, most: number): Promise<StoredPoint[]> {
+  const query = shown(db).where('points.run_id', runId).where('points.done', 0);
+  return (await query.orderBy('points.position').limit(most)).map(toPoint);
+}
+
+export async function pointById(db: Database, id: string): Promise<StoredPoint | undefined> {
+  const row = await shown(db).where('points.id', id).first();
+  return row && toPoint(row);
+}
+
+/** Closes what is open of a run whose time is over. */
+export async function closeOpenPoints(db: Database, runId: string, stopReason: StopReason): Promise<void> {
+  await db('points').where({ run_id: runId, done: 0 }).update({ done: 1, stop_reason: stopReason });
+}
+
+/** Opens points closed for want of time, for a run that is extended. */
+export async function reopenPoints(db: Database, runId: string): Promise<void> {
+  await db('points').where({ run_id: runId, done: 1 }).update({ done: 0, stop_reason: null });
+}
+
+export async function setRecomputed(db: Database, id: string, recomputed: number): Promise<void> {
+  await db('points').where({ id }).update({ recomputed });
 }
 
 export async function openPointCount(db: Database, runId: string): Promise<number> {
   const row = await db('points').where({ run_id: runId, done: 0 }).count({ open: '*' }).first();
   return Number(row?.open ?? 0);
+}
+
+/** How many points ended for which reason. */
+export async function stopReasonsOf(db: Database, runId: string): Promise<Map<StopReason, number>> {
+  const rows: { stop_reason: StopReason; points: number }[] = await db('points')
+    .where({ run_id: runId })
+    .whereNotNull('stop_reason')
+    .groupBy('stop_reason')
+    .select('stop_reason')
+    .select(db.raw('count(*) AS points'));
+  return new Map(rows.map((row) => [row.stop_reason, row.points]));
 }
 
 function toPoint(row: Row): StoredPoint {
@@ -116,5 +179,12 @@ function toPoint(row: Row): StoredPoint {
     tally: tallyFromColumns(row as unknown as TallyColumns),
     nextIndex: row.next_index!,
     done: row.done === 1,
+    counted: row.counted ? JSON.parse(row.counted) : emptyTally(),
+    before: { frames: row.before_frames ?? 0, frameErrors: row.before_errors ?? 0 },
+    stopReason: row.stop_reason ?? null,
+    stopTarget: row.stop_target ?? null,
+    recomputed: row.recomputed ?? 0,
+    setAside: row.set_aside ?? 0,
+    plan: row.plan ? JSON.parse(row.plan) : null,
   };
 }

@@ -1,9 +1,10 @@
-import type { NewRun, Run, RunState } from '@/api/runs.ts';
+import type { Goal, NewRun, Outcome, Place, Run, RunState, Stopping } from '@/api/runs.ts';
 import type { Database } from '../db/database.ts';
 import type { PageRequest } from './paging.ts';
 import type { Row } from './row.ts';
 
-export interface NewRunRow extends Omit<NewRun, 'points'> {
+export interface NewRunRow extends Omit<NewRun, 'points' | 'goal'> {
+  goal?: Goal | null;
   id: string;
   projectId: string;
   isDemo: boolean;
@@ -19,8 +20,8 @@ export async function insertRun(db: Database, run: NewRunRow): Promise<void> {
     name: run.name,
     seed: run.seed,
     frames_per_shard: run.framesPerShard,
-    stop_frame_errors: run.stopping.frameErrors,
-    stop_max_frames: run.stopping.maxFrames,
+    ...stoppingColumns(run.stopping),
+    goal: run.goal ? JSON.stringify(run.goal) : null,
     place: run.place,
     state: run.state,
     is_demo: run.isDemo ? 1 : 0,
@@ -58,8 +59,47 @@ export async function runsOf(db: Database, projectId: string, page: PageRequest)
   return (await query).map(toRun);
 }
 
-export async function updateRun(db: Database, id: string, change: { name?: string; state?: RunState }): Promise<void> {
-  await db('runs').where({ id }).update(change);
+export interface RunChange {
+  name?: string;
+  state?: RunState;
+  place?: Place;
+  stopping?: Stopping;
+  outcome?: Outcome | null;
+}
+
+export async function updateRun(db: Database, id: string, change: RunChange): Promise<void> {
+  const { stopping, outcome, ...plain } = change;
+  await db('runs')
+    .where({ id })
+    .update({
+      ...plain,
+      ...(stopping && stoppingColumns(stopping)),
+      ...(outcome !== undefined && { outcome: outcome && JSON.stringify(outcome) }),
+    });
+}
+
+/** Without a rule on errors, as many as there can be frames say the same. */
+const stoppingColumns = (stopping: Stopping) => ({
+  stopping: JSON.stringify(stopping),
+  stop_frame_errors: stopping.frameErrors ?? stopping.maxFrames,
+  stop_max_frames: stopping.maxFrames,
+});
+
+/** Runs under way at a place, in the order of their making. */
+export async function runsUnderWay(db: Database, place: Place): Promise<Run[]> {
+  const ids = await db('runs').where({ place, state: 'running' }).orderBy('id').pluck('id');
+  const runs = await Promise.all(ids.map((id) => runById(db, id)));
+  return runs.filter((run) => run !== undefined);
+}
+
+export async function authorIdOf(db: Database, id: string): Promise<string | undefined> {
+  return (await db('runs').where({ id }).first('created_by'))?.created_by;
+}
+
+/** Adds to the time that a run was worked on. @returns all of it. */
+export async function addTimeSpent(db: Database, id: string, elapsedMs: number): Promise<number> {
+  await db('runs').where({ id }).increment('spent_ms', Math.round(elapsedMs));
+  return Number((await db('runs').where({ id }).first('spent_ms'))?.spent_ms ?? 0);
 }
 
 function toRun(row: Row): Run {
@@ -69,8 +109,13 @@ function toRun(row: Row): Run {
     name: row.name!,
     seed: row.seed!,
     framesPerShard: row.frames_per_shard!,
-    stopping: { frameErrors: row.stop_frame_errors!, maxFrames: row.stop_max_frames! },
+    // Runs from before `stopping` was stored have the two that there were.
+    stopping: row.stopping
+      ? JSON.parse(row.stopping)
+      : { frameErrors: row.stop_frame_errors!, maxFrames: row.stop_max_frames! },
     place: row.place!,
+    goal: row.goal ? JSON.parse(row.goal) : null,
+    outcome: row.outcome ? JSON.parse(row.outcome) : null,
     state: row.state!,
     createdAt: row.created_at!,
     createdBy: row.author!,

@@ -28,7 +28,7 @@ export async function storedTallies(
 export async function insertShards(
   db: Database,
   shards: readonly StoredShard[],
-  by: { userId: string; at: string },
+  by: { userId: string; at: string; sourceId?: string },
 ): Promise<void> {
   const rows = shards.map((shard) => ({
     point_id: shard.pointId,
@@ -36,6 +36,7 @@ export async function insertShards(
     ...tallyToColumns(shard.tally),
     posted_by: by.userId,
     posted_at: by.at,
+    source_id: by.sourceId ?? null,
   }));
   for (let from = 0; from < rows.length; from += rowsAStatement) {
     await db('shards').insert(rows.slice(from, from + rowsAStatement));
@@ -49,6 +50,26 @@ export async function shardIndicesFrom(db: Database, pointId: string, from: numb
     .where('shard_index', '>=', from)
     .orderBy('shard_index')
     .pluck('shard_index');
+}
+
+/** Shards stored from `from` on, ascending, `most` at a time. */
+export async function shardsFrom(
+  db: Database,
+  pointId: string,
+  from: number,
+  most: number,
+): Promise<{ index: number; tally: Tally }[]> {
+  const rows = await db('shards')
+    .where({ point_id: pointId })
+    .where('shard_index', '>=', from)
+    .orderBy('shard_index')
+    .limit(most);
+  return rows.map((row) => ({ index: row.shard_index, tally: tallyFromColumns(row) }));
+}
+
+export async function shardSource(db: Database, pointId: string, index: number): Promise<string | undefined> {
+  const row = await db('shards').where({ point_id: pointId, shard_index: index }).first('source_id');
+  return row?.source_id ?? undefined;
 }
 
 /** For points of a run, the indices stored beyond the unbroken beginning. */

@@ -1,6 +1,7 @@
-import type { NewRun, Point, Run } from '@/api/runs.ts';
+import type { NewRun, Point, Run, RunState } from '@/api/runs.ts';
 import { type Context, nowText } from '../../context.ts';
 import { inTransaction } from '../../db/database.ts';
+import { workEvents } from '../../events/work-events.ts';
 import { newId } from '../../ids.ts';
 import { recordEvent } from '../../repositories/audit-events.ts';
 import { codeLengths } from '../../repositories/codes.ts';
@@ -20,9 +21,11 @@ export async function createRun(
   const { db, caller } = context;
   const id = newId();
   const { points, ...run } = input;
+  // The server and the fleet begin by themselves; a browser by its first shard.
+  const state: RunState = input.place === 'browser' ? 'ready' : 'running';
   await inTransaction(db, async (trx) => {
     refuseBadRun(input, await codeLengths(trx, projectId, [...new Set(points.map((point) => point.codeId))]));
-    const row = { ...run, id, projectId, isDemo: false, state: 'ready' as const };
+    const row = { ...run, id, projectId, isDemo: false, state };
     await insertRun(trx, { ...row, createdBy: caller.id, createdAt: nowText() });
     await insertPoints(
       trx,
@@ -31,6 +34,7 @@ export async function createRun(
     const content = { name: run.name, seed: run.seed, points: points.length };
     await recordEvent(trx, caller, { projectId, kind: 'run.stated', subject: id, content });
   });
+  workEvents.changed();
   const stored = await getRun(context, id);
   return { ...stored.run, points: stored.points };
 }

@@ -1,5 +1,9 @@
 import type { NewRun } from '@/api/runs.ts';
+import { redisUrl } from '../../config.ts';
 import { badFields } from '../../refusal.ts';
+
+/** What is accepted as a place when there is no Redis. */
+export const noFleet = '"browser" or "server"; a fleet needs a server started with REDIS_URL';
 
 const largestIndex = 1e9;
 
@@ -8,7 +12,7 @@ const largestIndex = 1e9;
  *  @throws Refusal naming every bad field. */
 export function refuseBadRun(run: NewRun, lengths: ReadonlyMap<string, number>): void {
   const fields: Record<string, string> = {};
-  if (run.place !== 'browser') fields.place = '"browser"; this server does not compute shards itself yet';
+  if (run.place === 'fleet' && !redisUrl()) fields.place = noFleet;
   if (run.stopping.maxFrames / run.framesPerShard > largestIndex) {
     fields.framesPerShard = `at least ${Math.ceil(run.stopping.maxFrames / largestIndex)} for so many frames`;
   }
@@ -16,7 +20,7 @@ export function refuseBadRun(run: NewRun, lengths: ReadonlyMap<string, number>):
   run.points.forEach((point, i) => {
     const n = lengths.get(point.codeId);
     if (n === undefined) {
-      fields[`points.${i}.codeId`] = 'the id of a code of this project';
+      fields[`points.${i}.codeId`] = 'the id of a code of this project, with parity checks';
       return;
     }
     if (point.channel.kind === 'stratum' && point.channel.weight > n) {

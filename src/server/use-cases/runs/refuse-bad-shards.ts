@@ -2,6 +2,7 @@ import type { Run } from '@/api/runs.ts';
 import { impossibleTally } from '@/core/simulation/tally.ts';
 import { badFields } from '../../refusal.ts';
 import type { StoredPoint } from '../../repositories/points.ts';
+import { shardCap } from './recount-point.ts';
 import type { Shard } from './sort-shards.ts';
 
 /** Shards that no computation of this run can give.
@@ -12,17 +13,19 @@ export function refuseBadShards(
   points: ReadonlyMap<string, StoredPoint>,
 ): void {
   const fields: Record<string, string> = {};
-  const shardCount = Math.ceil(run.stopping.maxFrames / run.framesPerShard);
   shards.forEach((shard, i) => {
     const point = points.get(shard.pointId);
     if (!point) {
       fields[`shards.${i}.pointId`] = 'the id of a point of this run';
       return;
     }
-    if (shard.index >= shardCount) {
-      fields[`shards.${i}.index`] = `from 0 to ${shardCount - 1}, as the stopping rule allows ${shardCount} shards`;
+    const cap = shardCap(run, point);
+    if (shard.index >= cap) {
+      fields[`shards.${i}.index`] = `from 0 to ${cap - 1}, as the stopping rule allows ${cap} shards`;
     }
-    const bad = impossibleTally(shard.tally, point.n, run.framesPerShard);
+    // A shard of an enumeration holds as many patterns as its branches do.
+    const frames = point.plan?.enumerate ? shard.tally.frames : run.framesPerShard;
+    const bad = impossibleTally(shard.tally, point.n, frames);
     if (bad) fields[`shards.${i}.tally.${bad.field}`] = bad.accepted;
   });
   if (Object.keys(fields).length > 0) throw badFields(fields);
