@@ -1,6 +1,7 @@
 import { countCycles } from '../analysis/cycles.ts';
 import { girth as girthOf } from '../analysis/girth.ts';
 import { tannerOrbits } from '../analysis/tanner-orbits.ts';
+import { spaced } from '../properties.ts';
 import type { CodeQuestion } from './question.ts';
 
 /** Cycles of the Tanner graph of every length that can be counted exactly, below twice the girth, and the shortest ones
@@ -21,7 +22,7 @@ export const cycles: CodeQuestion = {
     const lines = [...total].map(([length, count]) => ({
       key: `cycles-${length}`,
       label: `Cycles of length ${length}`,
-      text: String(count),
+      text: spaced(count),
       number: Number(count),
       grade: 'computed' as const,
       method: stoppedBy ? `${method}; longer ones not counted: ${stoppedBy}` : method,
