@@ -24,29 +24,39 @@ export interface NoCirculants {
   proved: boolean;
 }
 
-/** It exists exactly when some block columns of H, as many as rank/z, have full rank: then the others are free. Circulant
- *  parts follow, since the shift of every block at once keeps the code. */
+/** For blocks of z it exists exactly when some block columns of H, as many as rank/z, have full rank: then the others are
+ *  free. Circulant parts follow, since the shift of every block at once keeps the code. All block sizes that the code has
+ *  are tried, the largest first; the reason given is that of the largest. */
 export function systematicCirculants(H: SparseMatrix): SystematicCirculants | NoCirculants {
-  const z = quasiCyclicForm(H)?.size;
-  if (z === undefined)
+  const largest = quasiCyclicForm(H)?.size;
+  if (largest === undefined)
     return { reason: 'moving blocks of positions round does not keep the set of checks', proved: true };
+  const { rank } = findRank(H);
+  const failures: NoCirculants[] = [];
+  for (let z = largest; z > 1; z--) {
+    if (H.cols % z !== 0 || (z !== largest && !quasiCyclicForm(H, z))) continue;
+    const blocks = parityBlocksFor(H, z, rank);
+    if (Array.isArray(blocks)) return generatorOn(H, z, blocks);
+    failures.push(blocks);
+  }
+  return { reason: failures[0]!.reason, proved: failures.every(({ proved }) => proved) };
+}
+
+function parityBlocksFor(H: SparseMatrix, z: number, rank: number): number[] | NoCirculants {
   if (z === H.cols)
     return { reason: 'the code is cyclic: one block, for which a shift register is the encoder', proved: true };
-  const { rank } = findRank(H);
+  if (rank === H.cols) return { reason: 'the code holds the zero word alone', proved: true };
   if (rank % z !== 0) {
-    const blocks = Math.ceil(rank / z);
+    const count = Math.ceil(rank / z);
     return {
-      reason: `rank ${rank} is no multiple of the block size ${z}, so no whole blocks hold the parity: ${blocks} blocks have ${blocks * z - rank} positions too many; the rows that generate it as a module are circulants, but do not show the information`,
+      reason: `rank ${rank} is no multiple of the block size ${z}, so no whole blocks hold the parity: ${count} blocks have ${count * z - rank} positions too many; the rows that generate it as a module are circulants, but do not show the information`,
       proved: true,
     };
   }
-  if (rank === H.cols) return { reason: 'the code holds the zero word alone', proved: true };
   const { blocks, proved } = blockColumnsOfFullRank(H, z, rank / z);
-  if (!blocks) {
-    const tried = proved ? `no ${rank / z} block columns` : 'none of the choices of block columns tried';
-    return { reason: `${tried} of the matrix ${proved ? 'have' : 'has'} rank ${rank}`, proved };
-  }
-  return generatorOn(H, z, blocks);
+  if (blocks) return blocks;
+  const tried = proved ? `no ${rank / z} block columns` : 'none of the choices of block columns tried';
+  return { reason: `${tried} of the matrix ${proved ? 'have' : 'has'} rank ${rank}`, proved };
 }
 
 function generatorOn(H: SparseMatrix, z: number, parityBlocks: number[]): SystematicCirculants {
