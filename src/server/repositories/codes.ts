@@ -84,8 +84,8 @@ export async function codesOfDesign(db: Database, projectId: string, design: New
     .select('id', 'name', 'design', 'derivation');
   return rows
     .map(({ id, name, design, derivation }: Row) => ({
-      id: id as string,
-      name: name as string,
+      id: id!,
+      name: name!,
       design: JSON.parse(design!) as Code['design'],
       derivation: JSON.parse(derivation!) as Code['derivation'],
     }))

@@ -1,6 +1,7 @@
 import type { CodeForms } from '@/api/releases.ts';
 import { generatorForms } from '@/core/formats/generator-forms.ts';
 import { matrixFormats } from '@/core/formats/index.ts';
+import { wordForms } from '@/core/formats/word-forms.ts';
 import { blockForms } from '@/core/release/release-files.ts';
 import type { Context } from '../../context.ts';
 import { matrixOf } from '../../repositories/codes.ts';
@@ -16,5 +17,6 @@ export async function codeForms(context: Context, codeId: string): Promise<CodeF
     formats: matrixFormats.filter((format) => format.writes?.(H) !== false).map(named) as CodeForms['formats'],
     generators: isWords(code) ? [] : generatorForms.filter((form) => form.writes(H)).map(named),
     blocks: code.design.family === 'uploaded' ? [] : blockForms.map(named),
+    words: isWords(code) ? wordForms.map(named) : [],
   };
 }

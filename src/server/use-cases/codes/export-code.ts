@@ -1,7 +1,8 @@
 import type { z } from 'zod';
-import type { blockFormSchema, generatorFormSchema, vectorQueryParams } from '@/api/releases.ts';
+import type { blockFormSchema, generatorFormSchema, vectorQueryParams, wordFormSchema } from '@/api/releases.ts';
 import type { DesignSpec } from '@/core/designs/block-design.ts';
 import { generatorForms } from '@/core/formats/generator-forms.ts';
+import { wordForms } from '@/core/formats/word-forms.ts';
 import { blockForms } from '@/core/release/release-files.ts';
 import { vectorForms } from '@/core/test-vectors/vector-files.ts';
 import type { Context } from '../../context.ts';
@@ -9,7 +10,7 @@ import type { FilesPool } from '../../jobs/files-pool.ts';
 import { workerStream } from '../../jobs/worker-stream.ts';
 import { Refusal } from '../../refusal.ts';
 import { matrixOf } from '../../repositories/codes.ts';
-import { refuseWords } from './constant-weight.ts';
+import { isWords, refuseWords } from './constant-weight.ts';
 import { fileStem } from './file-stem.ts';
 import { getCode } from './get-code.ts';
 
@@ -55,6 +56,24 @@ export async function exportGenerator(
   const { extension } = generatorForms.find(({ id }) => id === formId)!;
   const stream = await workerStream(pool, { kind: 'generator', H, form: formId }, signal);
   return { stream, fileName: `${fileStem(code)}.${extension}`, mediaType: 'text/plain' };
+}
+
+/** The words of a constant-weight code, in the order of their numbers. */
+export async function exportWords(
+  { context, pool, codeId, signal }: Export,
+  formId: z.infer<typeof wordFormSchema>,
+): Promise<StreamedFile> {
+  const code = await getCode(context, codeId);
+  if (!isWords(code)) {
+    const accepted = 'a constant-weight code';
+    throw new Refusal('param', `The words of this code are not listed; accepted is ${accepted}.`, {
+      fields: { id: accepted },
+    });
+  }
+  const words = (await matrixOf(context.db, codeId))!;
+  const { extension, mediaType } = wordForms.find(({ id }) => id === formId)!;
+  const stream = await workerStream(pool, { kind: 'words', words, form: formId }, signal);
+  return { stream, fileName: `${fileStem(code)}.words.${extension}`, mediaType };
 }
 
 /** Test vectors of the code. */
