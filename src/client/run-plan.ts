@@ -59,7 +59,10 @@ export const reachedStop = (tally: Tally, stopping: Stopping) =>
 /** Share of a point's work that is behind it: by errors or by frames, whichever is further. */
 export function fractionDone(point: Pick<PointProgress, 'tally' | 'done'>, stopping: Stopping): number {
   if (point.done) return 1;
-  return Math.min(1, Math.max(point.tally.frameErrors / errorsToStop(stopping), point.tally.frames / stopping.maxFrames));
+  return Math.min(
+    1,
+    Math.max(point.tally.frameErrors / errorsToStop(stopping), point.tally.frames / stopping.maxFrames),
+  );
 }
 
 /** Frames a point is expected to need still; with no error seen yet, all that the cap allows. */

@@ -83,11 +83,11 @@ export async function codesOfDesign(db: Database, projectId: string, design: New
     .orderBy('id')
     .select('id', 'name', 'design', 'derivation');
   return rows
-    .map(({ id, name, design, derivation }: Row) => ({
-      id: id!,
-      name: name!,
-      design: JSON.parse(design!) as Code['design'],
-      derivation: JSON.parse(derivation!) as Code['derivation'],
+    .map((row: Row): Pick<Code, 'id' | 'name' | 'design' | 'derivation'> => ({
+      id: row.id!,
+      name: row.name!,
+      design: JSON.parse(row.design!),
+      derivation: JSON.parse(row.derivation!),
     }))
     .filter((row) => isDeepStrictEqual(row.design, design));
 }
