@@ -83,12 +83,14 @@ export async function codesOfDesign(db: Database, projectId: string, design: New
     .orderBy('id')
     .select('id', 'name', 'design', 'derivation');
   return rows
-    .map((row: Row): Pick<Code, 'id' | 'name' | 'design' | 'derivation'> => ({
-      id: row.id!,
-      name: row.name!,
-      design: JSON.parse(row.design!),
-      derivation: JSON.parse(row.derivation!),
-    }))
+    .map(
+      (row: Row): Pick<Code, 'id' | 'name' | 'design' | 'derivation'> => ({
+        id: row.id!,
+        name: row.name!,
+        design: JSON.parse(row.design!),
+        derivation: JSON.parse(row.derivation!),
+      }),
+    )
     .filter((row) => isDeepStrictEqual(row.design, design));
 }
 
