@@ -31,6 +31,7 @@ import {
   releaseSchema,
   releaseSheetSchema,
   vectorQueryParams,
+  wordFormSchema,
 } from './releases.ts';
 import {
   failedShardsSchema,
@@ -145,6 +146,9 @@ export const endpoints = {
       query: z.strictObject({ form: generatorFormSchema }),
     },
   ),
+  getWords: endpoint('GET', '/codes/:id/words', 'The words of a constant-weight code as a file', {
+    query: z.strictObject({ form: wordFormSchema }),
+  }),
   getVectors: endpoint('GET', '/codes/:id/vectors', 'Test vectors for decoders, from a seed', {
     query: vectorQueryParams,
   }),

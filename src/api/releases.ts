@@ -5,6 +5,7 @@ import { matrixFormatSchema } from './codes.ts';
 
 export const generatorFormSchema = z.enum(['polynomial', 'circulants', 'systematic']);
 export const blockFormSchema = z.enum(['text', 'json']);
+export const wordFormSchema = z.enum(['text', 'csv']);
 export const vectorFormSchema = z.enum(['jsonl', 'hex']);
 
 /** A part of a query that is JSON text, since an address holds only text. */
@@ -40,6 +41,8 @@ export const codeFormsSchema = z.object({
   formats: z.array(formSchema.extend({ id: matrixFormatSchema })),
   generators: z.array(formSchema.extend({ id: generatorFormSchema })),
   blocks: z.array(formSchema.extend({ id: blockFormSchema })),
+  /** Of a constant-weight code. */
+  words: z.array(formSchema.extend({ id: wordFormSchema })),
 });
 export type CodeForms = z.infer<typeof codeFormsSchema>;
 

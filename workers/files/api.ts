@@ -1,6 +1,7 @@
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import type { DesignSpec } from '@/core/designs/block-design.ts';
 import type { GeneratorForm } from '@/core/formats/generator-forms.ts';
+import type { WordForm } from '@/core/formats/word-forms.ts';
 import type { Bundle, ReleaseFacts } from '@/core/release/bundle.ts';
 import type { ReleaseContents, ReleasedCode } from '@/core/release/release-files.ts';
 import type { RunSpec } from '@/core/simulation/run-spec.ts';
@@ -13,6 +14,7 @@ import type { WorkerFailure } from '../failure.ts';
 export type FilesRequest =
   | { kind: 'blocks'; design: DesignSpec; form: 'text' | 'json'; provenance: Record<string, unknown> }
   | { kind: 'generator'; H: SparseMatrix; form: GeneratorForm['id'] }
+  | { kind: 'words'; words: SparseMatrix; form: WordForm['id'] }
   | { kind: 'vectors'; H: SparseMatrix; request: VectorRequest; form: VectorForm; head: VectorHead }
   | { kind: 'shards'; H: SparseMatrix; shards: (Omit<RunSpec, 'H'> & { index: number })[] }
   | { kind: 'bundle'; code: ReleasedCode; contents: ReleaseContents; facts: ReleaseFacts; folder: string };

@@ -1,4 +1,5 @@
 import { generatorForms } from '@/core/formats/generator-forms.ts';
+import { wordForms } from '@/core/formats/word-forms.ts';
 import { bundleRelease } from '@/core/release/bundle.ts';
 import { releaseFiles, writeBlocks } from '@/core/release/release-files.ts';
 import { runShard } from '@/core/simulation/shard.ts';
@@ -18,6 +19,9 @@ export async function makeFiles(request: FilesRequest, onPart: (part: Uint8Array
         return { ok: true };
       case 'generator':
         onPart(generatorForms.find(({ id }) => id === request.form)!.write(request.H));
+        return { ok: true };
+      case 'words':
+        onPart(wordForms.find(({ id }) => id === request.form)!.write(request.words));
         return { ok: true };
       case 'vectors':
         await inParts(vectorFile(request.H, request.request, request.form, request.head), onPart);

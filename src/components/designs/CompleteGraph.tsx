@@ -39,6 +39,7 @@ export function CompleteGraph({ design, groups, lambda, shown, chosen }: Props) 
               stroke={curveColour(style)}
               strokeWidth={shown === group ? 2.4 : 1.5}
               strokeDasharray={style.dash}
+              vectorEffect="non-scaling-stroke"
               opacity={faint ? 0.13 : 1}
               data-group={group}
             />

@@ -24,7 +24,7 @@ export function useResolutionRow(
   }, [found, onClasses]);
   const start = () => ask({ seed: seed.trim() || '1', limit });
   const settings = (
-    <span className="grid w-full grid-cols-2 gap-3">
+    <span className="grid w-full gap-3 sm:grid-cols-2">
       <TextField label="seed" value={seed} maxLength={64} onChange={(event) => setSeed(event.target.value)} />
       <SelectField
         label="search nodes"

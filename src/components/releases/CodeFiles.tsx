@@ -13,16 +13,25 @@ export function CodeFiles({ codeId, forms }: Props) {
   const params = { id: codeId };
   return (
     <dl className="grid gap-3">
-      <Group title="Parity-check matrix">
+      {forms.words.length > 0 && (
+        <Group title="Words">
+          {forms.words.map(({ id: form, title }) => (
+            <FileLink key={form} href={addressOf(endpoints.getWords, { params, query: { form } })} title={title} />
+          ))}
+        </Group>
+      )}
+      <Group title={forms.words.length > 0 ? 'Words as rows of a matrix' : 'Parity-check matrix'}>
         {forms.formats.map(({ id: format, title }) => (
           <FileLink key={format} href={addressOf(endpoints.getMatrix, { params, query: { format } })} title={title} />
         ))}
       </Group>
-      <Group title="Generator">
-        {forms.generators.map(({ id: form, title }) => (
-          <FileLink key={form} href={addressOf(endpoints.getGenerator, { params, query: { form } })} title={title} />
-        ))}
-      </Group>
+      {forms.generators.length > 0 && (
+        <Group title="Generator">
+          {forms.generators.map(({ id: form, title }) => (
+            <FileLink key={form} href={addressOf(endpoints.getGenerator, { params, query: { form } })} title={title} />
+          ))}
+        </Group>
+      )}
       {forms.blocks.length > 0 && (
         <Group title="Design">
           {forms.blocks.map(({ id: form, title }) => (
