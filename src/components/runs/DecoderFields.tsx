@@ -1,20 +1,24 @@
+import type { Code } from '@/api/codes.ts';
 import { decoderName } from '@/client/curves/decoder-text.ts';
 import { NumberField } from '@/components/ui/fields.tsx';
-import type { DecoderDraft, FieldErrors, OfferedDecoder } from './run-draft.ts';
+import { decoderCard } from '@/core/decoders/catalogue.ts';
+import { Calibrate } from './Calibrate.tsx';
+import { takenOver } from './calibrated.ts';
+import { MinSumFields } from './MinSumFields.tsx';
+import { type DecoderDraft, decoderOf, type FieldErrors, type OfferedDecoder } from './run-draft.ts';
 
 interface Props {
   kind: OfferedDecoder;
   draft: DecoderDraft;
   errors: FieldErrors;
+  /** Those chosen for the run: on one of them settings are tried. */
+  codes: readonly Code[];
+  /** At which p settings are tried unless another is typed. */
+  trialP: string;
+  /** Numbers of errors are measured, at which no decoder may know p. */
+  areStrata: boolean;
   onChange: (change: Partial<DecoderDraft>) => void;
 }
-
-const ABOUT: Record<OfferedDecoder, string> = {
-  'gallager-b': 'Hard decision; a check’s message is overruled when enough others disagree.',
-  'bit-flipping': 'Hard decision; every bit with enough failing checks flips at once.',
-  'majority-logic': 'Hard decision; one vote of the checks on each bit, one iteration.',
-  'sum-product': 'Soft, floating point; flooding schedule.',
-};
 
 const DEFAULT_THRESHOLD: Partial<Record<OfferedDecoder, string>> = {
   'gallager-b': 'empty: ⌈d/2⌉ of a bit’s d checks',
@@ -22,7 +26,7 @@ const DEFAULT_THRESHOLD: Partial<Record<OfferedDecoder, string>> = {
 };
 
 /** One decoder: whether it is measured, and with which parameters. */
-export function DecoderFields({ kind, draft, errors, onChange }: Props) {
+export function DecoderFields({ kind, draft, errors, codes, trialP, areStrata, onChange }: Props) {
   const threshold = DEFAULT_THRESHOLD[kind];
   return (
     <div className="border-hair border-b py-2.5">
@@ -35,7 +39,7 @@ export function DecoderFields({ kind, draft, errors, onChange }: Props) {
         />
         <span>
           <span className="inline-block font-semibold first-letter:uppercase">{decoderName({ kind })}</span>
-          <span className="block text-quiet text-tiny">{ABOUT[kind]}</span>
+          <span className="block text-quiet text-tiny">{decoderCard(kind).choose}</span>
         </span>
       </label>
       {draft.isChosen && kind !== 'majority-logic' && (
@@ -61,11 +65,20 @@ export function DecoderFields({ kind, draft, errors, onChange }: Props) {
               label="Set for p"
               value={draft.designP}
               error={errors[`${kind}.designP`]}
-              hint="empty: the channel’s own p at each point"
+              hint={areStrata ? 'needed for strata, whose failures must not depend on p' : 'empty: the channel’s own p'}
               onChange={(event) => onChange({ designP: event.target.value })}
             />
           )}
+          {kind === 'min-sum' && <MinSumFields draft={draft} errors={errors} onChange={onChange} />}
         </div>
+      )}
+      {draft.isChosen && (kind === 'min-sum' || kind === 'bit-flipping') && (
+        <Calibrate
+          codes={codes}
+          decoder={decoderOf(kind, draft)}
+          p={trialP}
+          onTake={(decoder) => onChange(takenOver(decoder))}
+        />
       )}
     </div>
   );

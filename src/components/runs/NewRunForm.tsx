@@ -2,9 +2,11 @@ import { type ReactNode, useRef } from 'react';
 import { endpoints } from '@/api/endpoints.ts';
 import { useApi } from '@/client/hooks.ts';
 import { Button } from '@/components/ui/Button.tsx';
+import { ChoiceGroup } from '@/components/ui/ChoiceGroup.tsx';
 import { TextField } from '@/components/ui/fields.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
 import { counted } from '@/components/ui/numbers.ts';
+import { WeightFields } from '../strata/WeightFields.tsx';
 import { CodeChoice } from './CodeChoice.tsx';
 import { DecoderFields } from './DecoderFields.tsx';
 import { PartError } from './PartError.tsx';
@@ -18,13 +20,18 @@ interface Props {
   projectId: string;
 }
 
-/** States a run: codes × decoders × channel points, seed and stopping rule. */
+/** States a run: codes × decoders × channel points or weights, seed and stopping rule. */
 export function NewRunForm({ projectId }: Props) {
   const codes = useApi(endpoints.listCodes, { params: { id: projectId }, query: { limit: 500 } });
   const requirements = useApi(endpoints.getRequirements, { params: { id: projectId } });
-  const { draft, name, judged, change } = useRunDraft(codes.data?.codes, requirements.data?.requirements);
+  const { draft, chosen, name, judged, change } = useRunDraft(codes.data?.codes, requirements.data?.requirements);
   const form = useRef<HTMLFormElement>(null);
-  const { errors, refusal, isBusy, onSubmit } = useRunSubmission(projectId, judged, form);
+  const { errors, refusal, isBusy, onSubmit } = useRunSubmission(
+    projectId,
+    judged,
+    form,
+    draft.points === 'strata' ? draft.targetP : null,
+  );
 
   return (
     <form ref={form} onSubmit={onSubmit} noValidate className="grid max-w-3xl gap-7" aria-label="New run">
@@ -48,6 +55,9 @@ export function NewRunForm({ projectId }: Props) {
             kind={kind}
             draft={draft.decoders[kind]}
             errors={errors}
+            codes={chosen}
+            trialP={draft.points === 'strata' ? draft.targetP : draft.from}
+            areStrata={draft.points === 'strata'}
             onChange={(part) =>
               change({ decoders: { ...draft.decoders, [kind]: { ...draft.decoders[kind], ...part } } })
             }
@@ -55,7 +65,25 @@ export function NewRunForm({ projectId }: Props) {
         ))}
       </Part>
       <Part title="Channel: binary symmetric">
-        <SweepFields draft={draft} errors={errors} sweep={judged.sweep} onChange={change} />
+        <ChoiceGroup
+          legend="Points"
+          className="mb-3"
+          value={draft.points}
+          onChange={(points) => change({ points })}
+          choices={[
+            { value: 'sweep', label: 'Sweep of p', note: 'frames as the channel sends them' },
+            {
+              value: 'strata',
+              label: 'Weight strata',
+              note: 'by number of errors: the whole curve, with rigorous limits',
+            },
+          ]}
+        />
+        {draft.points === 'sweep' ? (
+          <SweepFields draft={draft} errors={errors} sweep={judged.sweep} onChange={change} />
+        ) : (
+          <WeightFields draft={draft} errors={errors} weights={judged.weights} onChange={change} />
+        )}
       </Part>
       <Part title="Stopping, shards and seed">
         <StoppingFields draft={draft} errors={errors} onChange={change} />

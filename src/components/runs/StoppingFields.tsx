@@ -14,20 +14,7 @@ export function StoppingFields({ draft, errors, onChange }: Props) {
   return (
     <div className="grid gap-4">
       <div className="grid gap-4 sm:grid-cols-3">
-        <NumberField
-          label="A point ends at frame errors"
-          value={draft.frameErrors}
-          error={errors.frameErrors}
-          hint="100 gives about 10 % standard error"
-          onChange={(event) => onChange({ frameErrors: event.target.value })}
-        />
-        <NumberField
-          label="or at frames"
-          value={draft.maxFrames}
-          error={errors.maxFrames}
-          hint="the cap for each point; 1e8 is understood"
-          onChange={(event) => onChange({ maxFrames: event.target.value })}
-        />
+        {draft.points === 'sweep' && <StopFields draft={draft} errors={errors} onChange={onChange} />}
         <NumberField
           label="Frames per shard"
           value={draft.framesPerShard}
@@ -52,5 +39,27 @@ export function StoppingFields({ draft, errors, onChange }: Props) {
         </Button>
       </div>
     </div>
+  );
+}
+
+/** When a point of a sweep ends. */
+function StopFields({ draft, errors, onChange }: Props) {
+  return (
+    <>
+      <NumberField
+        label="A point ends at frame errors"
+        value={draft.frameErrors}
+        error={errors.frameErrors}
+        hint="100 gives about 10 % standard error"
+        onChange={(event) => onChange({ frameErrors: event.target.value })}
+      />
+      <NumberField
+        label="or at frames"
+        value={draft.maxFrames}
+        error={errors.maxFrames}
+        hint="the cap for each point; 1e8 is understood"
+        onChange={(event) => onChange({ maxFrames: event.target.value })}
+      />
+    </>
   );
 }

@@ -1,7 +1,7 @@
 import type { Code } from '@/api/codes.ts';
 import type { Requirements } from '@/api/projects.ts';
 import { decoderShortName } from '@/client/curves/decoder-text.ts';
-import { OFFERED_DECODERS, type RunDraft } from './run-draft.ts';
+import { MOST_WEIGHTS, OFFERED_DECODERS, type RunDraft } from './run-draft.ts';
 
 /** A fresh seed: 96 random bits in hexadecimal, in groups that can be read out. */
 export function freshSeed(): string {
@@ -28,6 +28,22 @@ export function proposedSweep(requirements: Requirements | null | undefined): { 
   return { from: String(Number(Math.min(0.5, channel.p * 3).toPrecision(3))), to: String(channel.p) };
 }
 
+/** Weights from the first that a decoder of large column weights may fail at up to where hardly a frame of p is
+ *  heavier; the chosen codes' own limits where they differ. */
+export function proposedWeights(
+  codes: readonly Pick<Code, 'n' | 'columnWeights'>[],
+  p: number,
+): { weightFrom: string; weightTo: string } | null {
+  if (codes.length === 0 || !(p > 0 && p <= 0.5)) return null;
+  const shortest = Math.min(...codes.map(({ n }) => n));
+  const longest = Math.max(...codes.map(({ n }) => n));
+  const lightest = Math.min(...codes.flatMap(({ columnWeights }) => columnWeights.map(([weight]) => weight)));
+  const from = Math.max(1, Math.floor((Number.isFinite(lightest) ? lightest : 0) / 2) + 1);
+  const heavy = Math.ceil(longest * p + 6 * Math.sqrt(longest * p * (1 - p)) + 4);
+  const to = Math.min(shortest, Math.max(heavy, from), from + MOST_WEIGHTS - 1);
+  return { weightFrom: String(Math.min(from, to)), weightTo: String(to) };
+}
+
 /** "PG(2,16), EG(2,32): Gallager B, sum-product". */
 export function proposedName(draft: RunDraft, codes: readonly Pick<Code, 'id' | 'name'>[]): string {
   const names = draft.codeIds.map((id) => codes.find((code) => code.id === id)?.name ?? '').filter(Boolean);
@@ -35,5 +51,6 @@ export function proposedName(draft: RunDraft, codes: readonly Pick<Code, 'id' | 
     decoderShortName({ kind }),
   );
   if (names.length === 0) return '';
-  return `${names.join('; ')}: ${decoders.join(', ')}`.slice(0, 120);
+  const strata = draft.points === 'strata' ? ', strata' : '';
+  return `${names.join('; ')}: ${decoders.join(', ')}`.slice(0, 120 - strata.length) + strata;
 }

@@ -2,11 +2,17 @@ import { type FormEvent, type RefObject, useState } from 'react';
 import { endpoints } from '@/api/endpoints.ts';
 import { ApiFailure, call } from '@/client/api.ts';
 import { paths } from '@/paths.ts';
-import { type FieldErrors, type Judged, serverErrors } from './run-draft.ts';
+import { type FieldErrors, type Judged, numberOf, serverErrors } from './run-draft.ts';
 
 /** Sends the run when the form is accepted and goes to its page; otherwise goes to the first field that is not. Errors
- *  are shown from the first try on and vanish as they are mended. */
-export function useRunSubmission(projectId: string, judged: Judged, form: RefObject<HTMLFormElement | null>) {
+ *  are shown from the first try on and vanish as they are mended.
+ *  @param targetP At which p the run's page is to be read; null where the run has no such place. */
+export function useRunSubmission(
+  projectId: string,
+  judged: Judged,
+  form: RefObject<HTMLFormElement | null>,
+  targetP: string | null = null,
+) {
   const [wasSent, setWasSent] = useState(false);
   const [refusal, setRefusal] = useState<{ message: string; fields: FieldErrors } | null>(null);
   const [isBusy, setIsBusy] = useState(false);
@@ -20,7 +26,8 @@ export function useRunSubmission(projectId: string, judged: Judged, form: RefObj
     setIsBusy(true);
     try {
       const answer = await call(endpoints.createRun, { params: { id: projectId }, body: run });
-      location.assign(paths.run(projectId, answer.run.id));
+      const at = targetP === null ? '' : `?at=${numberOf(targetP)}`;
+      location.assign(paths.run(projectId, answer.run.id) + at);
     } catch (error) {
       setIsBusy(false);
       if (!(error instanceof ApiFailure)) throw error;

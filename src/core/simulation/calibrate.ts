@@ -12,6 +12,11 @@ export interface Calibration {
   trials: { decoder: DecoderSpec; tally: Tally }[];
 }
 
+export interface CalibrationOptions extends ShardOptions {
+  /** Told after each setting how many of all have been tried. */
+  onTrial?: (done: number, all: number) => void;
+}
+
 type MinSum = Extract<DecoderSpec, { kind: 'min-sum' }>;
 const scales = ['1/8', '1/4', '1/2', '3/4', '1', 'offset-1'] as const;
 const channelValues = [4, 8, 16, 24, 32];
@@ -21,10 +26,12 @@ const channelValues = [4, 8, 16, 24, 32];
  *  first tried. The best of a short run is likely, not certain, to be the best of a long one: take a channel at which
  *  some per cent of the frames fail.
  *  @throws ParamError for other decoders, and on a spec out of range. */
-export async function calibrate(spec: RunSpec, options: ShardOptions = {}): Promise<Calibration> {
+export async function calibrate(spec: RunSpec, options: CalibrationOptions = {}): Promise<Calibration> {
   const trials: Calibration['trials'] = [];
-  for (const decoder of candidates(spec)) {
+  const tried = candidates(spec);
+  for (const decoder of tried) {
     trials.push({ decoder, tally: await runShard({ ...spec, decoder }, 0, 'wasm', options) });
+    options.onTrial?.(trials.length, tried.length);
   }
   trials.sort((a, b) => a.tally.frameErrors - b.tally.frameErrors || a.tally.iterations - b.tally.iterations);
   return { decoder: trials[0]!.decoder, trials };

@@ -50,7 +50,16 @@ describe('a run in the form', () => {
 
   it('names a bad parameter of a decoder at that decoder', () => {
     const chosen = draft();
-    chosen.decoders['gallager-b'] = { isChosen: true, iterations: '0', threshold: 'x', designP: '' };
+    chosen.decoders['gallager-b'] = {
+      isChosen: true,
+      iterations: '0',
+      threshold: 'x',
+      designP: '',
+      schedule: 'layered',
+      scale: '',
+      c: '',
+      rMax: '',
+    };
     const { errors } = judgeDraft(chosen, 'x');
     expect(Object.keys(errors).sort()).toEqual(['gallager-b.iterations', 'gallager-b.threshold']);
   });

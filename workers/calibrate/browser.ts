@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { createCalibrateApi } from './calibrate.ts';
+
+expose(createCalibrateApi());
