@@ -7,6 +7,7 @@ import {
   type Stratum,
 } from '@/core/simulation/stratified-rate.ts';
 import type { CombinedCurve, CurvePoint, Estimate } from '../curves/curve.ts';
+import { roundCrossovers } from './round-crossovers.ts';
 import type { StratumGroup } from './stratum-groups.ts';
 
 /** Rates below this are not drawn: the law of the weights keeps its digits as far down, and nobody asks for less. */
@@ -71,16 +72,3 @@ function crossovers(fractions: readonly Fractions[], top: number): number[] {
     return Array.from({ length: STEPS }, (_, step) => p * (next / p) ** (step / STEPS));
   });
 }
-
-/** 5, 2 and 1 of each decade within the limits, descending. */
-export function roundCrossovers(bottom: number, top: number): number[] {
-  const found: number[] = [];
-  for (let e = Math.ceil(Math.log10(top)); e >= Math.floor(Math.log10(bottom)); e--)
-    for (const digit of [5, 2, 1]) {
-      const p = Number(`${digit}e${e}`);
-      if (p >= bottom && p <= top) found.push(p);
-    }
-  return found;
-}
-
-export const isRound = (p: number): boolean => /^[125]e/.test(p.toExponential());

@@ -1,7 +1,7 @@
 import type { CurvePoint, RateKind } from '@/client/curves/curve.ts';
 import { isThin, pointAt } from '@/client/curves/curve.ts';
 import { uncodedRate } from '@/client/curves/uncoded.ts';
-import { isRound } from '@/client/strata/combined-curve.ts';
+import { isRound } from '@/client/strata/round-crossovers.ts';
 import type { ChartCurve } from '../charts/chart-curve.ts';
 
 export interface GridRow {
