@@ -16,7 +16,9 @@ export interface ExactFit {
 }
 
 /** Shortening, and an overall parity bit where one parity bit would be left over, that give a code of dimension exactly
- *  `payloadBits` with at most `parityBits` of parity; null when the base code is too short or has too much parity.
+ *  `payloadBits` with at most `parityBits` of parity; null when the base code is too short or has too much parity. Where
+ *  all words of the base are even, as those of a plane of even order are, the overall parity bit is always 0: it fills
+ *  the sector and corrects nothing more.
  *  @throws ParamError unless both are whole and positive. */
 export function exactFit(base: { n: number; k: number }, { payloadBits, parityBits }: SectorFit): ExactFit | null {
   for (const [name, value] of Object.entries({ payloadBits, parityBits })) {
