@@ -10,10 +10,12 @@ interface Props {
   code: Pick<Code, 'id' | 'fingerprint'>;
   /** Where the plot begins, from the address. */
   start: string | null;
+  /** What is drawn, for those who cannot see it. */
+  name?: string;
 }
 
 /** The matrix of a kept code: fetched, held against its fingerprint, drawn; the address follows the zoom. */
-export default function SheetMatrix({ code, start }: Props) {
+export default function SheetMatrix({ code, start, name }: Props) {
   const [H, setH] = useState<SparseMatrix | null>(null);
   const [failure, setFailure] = useState<string | null>(null);
   const [tries, setTries] = useState(0);
@@ -56,5 +58,5 @@ export default function SheetMatrix({ code, start }: Props) {
     );
   }
   if (!H) return <p className="text-quiet">Fetching the matrix …</p>;
-  return <MatrixPlot H={H} start={start} onView={onView} />;
+  return <MatrixPlot H={H} name={name} start={start} onView={onView} />;
 }
