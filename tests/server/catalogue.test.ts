@@ -76,6 +76,18 @@ describe('the catalogue', () => {
     expect([status, body.error.fields]).toEqual([400, { [field]: expect.stringMatching(accepted) }]);
   });
 
+  it('maps every match of a window, and finds one by its id', async () => {
+    const window = 'n=200..1100&rate=0.6..&structure=cyclic';
+    const map = (await client.get(`/catalogue/map?${window}`)).body;
+    const { candidates, matching } = (await client.get(`/catalogue?${window}&meetsFirst=true`)).body;
+    expect(map.matching).toBe(matching);
+    expect(map.cells.reduce((sum: number, cell: { count: number }) => sum + cell.count, 0)).toBe(matching);
+    const id = encodeURIComponent(candidates.at(-1).id);
+    expect((await client.get(`/catalogue/candidate?${window}&id=${id}`)).body.candidate).toEqual(candidates.at(-1));
+    expect((await client.get(`/catalogue/candidate?n=7&id=${id}`)).body).toEqual({ candidate: null });
+    expect((await client.get('/catalogue/candidate?n=7')).status).toBe(400);
+  });
+
   it('needs signing in', async () => {
     expect((await new ApiClient(server.base).get('/catalogue')).status).toBe(401);
   });
