@@ -1,8 +1,7 @@
 import { z } from 'zod';
-import { uploadFormats } from '@/core/formats/read-upload.ts';
-import type { UploadFormat } from '@/core/formats/recognise.ts';
+import { uploadFormats } from '@/core/formats/recognise.ts';
 
-export const uploadFormatSchema = z.enum(uploadFormats as [UploadFormat, ...UploadFormat[]]);
+export const uploadFormatSchema = z.enum(uploadFormats);
 
 /** What goes with a file that is sent as it is. */
 export const uploadQueryParams = z.strictObject({

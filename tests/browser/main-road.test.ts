@@ -138,7 +138,7 @@ test('4. a run over the binary symmetric channel is stated: two codes, four deco
   await hydrated(page);
   await page.getByRole('checkbox', { name: /Projective q = 16/ }).check();
   await page.getByRole('checkbox', { name: /Triples on 31 points/ }).check();
-  for (const decoder of [/parallel bit flipping/, /one-step majority/, /sum-product/])
+  for (const decoder of [/parallel bit flipping/, /one-step majority/, /^sum-product/])
     await page.getByRole('checkbox', { name: decoder }).check();
   await page.getByLabel('From p').fill('0.7');
   await page.getByRole('button', { name: 'State the run' }).click();

@@ -6,9 +6,9 @@ import { type BlockList, readBlockListText } from './block-list.ts';
 import { readBlockListJson } from './block-list-json.ts';
 import { allBytes, type FileBytes, sizeOf } from './byte-source.ts';
 import { readCsv } from './csv.ts';
-import { importMatrix, matrixFormats } from './index.ts';
+import { importMatrix } from './index.ts';
 import { readMatrixMarket } from './matrix-market.ts';
-import { recogniseFormat, type UploadFormat } from './recognise.ts';
+import { recogniseFormat, type UploadFormat, uploadFormats } from './recognise.ts';
 
 /** A file may have so many bytes; those of a format that is read as a whole, so many. */
 export const uploadLimits = { bytes: 200_000_000, wholeBytes: 64_000_000 } as const;
@@ -36,12 +36,6 @@ export function readUpload(file: FileBytes, stated?: UploadFormat): Upload {
   const matrix = readInPlace[format]?.(file) ?? importMatrix(allBytes(file), format);
   return { format, matrix };
 }
-
-export const uploadFormats: readonly UploadFormat[] = [
-  ...matrixFormats.map(({ id }) => id as UploadFormat),
-  'blocks',
-  'blocks-json',
-];
 
 const designOf = ({ v, blocks, classes }: BlockList): BlockDesign => designFromBlocks(v, blocks, { classes });
 

@@ -1,18 +1,22 @@
 import { bytesFrom, type FileBytes } from './byte-source.ts';
 
-/** What a file can hold: a matrix in one of the formats, or the blocks of a design. */
-export type UploadFormat =
-  | 'alist'
-  | 'mtx'
-  | 'csv'
-  | 'json'
-  | 'npz'
-  | 'npy'
-  | 'mat'
-  | 'c'
-  | 'qc'
-  | 'blocks'
-  | 'blocks-json';
+/** What a file can hold: a matrix in one of the formats, or the blocks of a design. Named here apart from their readers, so
+ *  that a page which only names them does not fetch them all. */
+export const uploadFormats = [
+  'alist',
+  'mtx',
+  'csv',
+  'json',
+  'npz',
+  'npy',
+  'mat',
+  'c',
+  'qc',
+  'blocks',
+  'blocks-json',
+] as const;
+
+export type UploadFormat = (typeof uploadFormats)[number];
 
 const LOOKED_AT = 4096;
 

@@ -4,7 +4,7 @@ import { buildDesign } from '@/core/designs/design.ts';
 import { writeBlockListText } from '@/core/formats/block-list.ts';
 import { writeBlockListJson } from '@/core/formats/block-list-json.ts';
 import { matrixFormats } from '@/core/formats/index.ts';
-import { recogniseFormat } from '@/core/formats/recognise.ts';
+import { recogniseFormat, uploadFormats } from '@/core/formats/recognise.ts';
 
 const bytes = (text: string) => new TextEncoder().encode(text);
 const circulant = matrixFromRows(6, [
@@ -16,6 +16,10 @@ const circulant = matrixFromRows(6, [
 describe('a file is recognised by its first bytes', () => {
   test.each(matrixFormats.map((format) => [format.id, format] as const))('%s', (id, format) => {
     expect(recogniseFormat(format.write(circulant))).toBe(id);
+  });
+
+  test('every matrix format is among those that can be uploaded', () => {
+    expect(uploadFormats.slice(0, -2)).toEqual(matrixFormats.map(({ id }) => id));
   });
 
   test('block lists, with and without their size line', () => {
