@@ -144,6 +144,7 @@ test('4. a run over the binary symmetric channel is stated: two codes, four deco
   await page.getByRole('button', { name: 'State the run' }).click();
   await page
     .getByText(/Not accepted/)
+    .filter({ visible: true })
     .first()
     .waitFor();
   await page.getByLabel('From p').fill('0.02');
