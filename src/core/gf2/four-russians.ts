@@ -13,6 +13,8 @@ import { PACKED_LIMIT_BYTES } from './bit-matrix.ts';
 /** Words of a row in one panel. */
 const PANEL_WORDS = PANEL_BYTES / 4;
 const PANEL_COLUMNS = 8 * PANEL_BYTES;
+/** Both are powers of two, so that packing divides by shifts. */
+const PANEL_SHIFT = Math.log2(PANEL_COLUMNS);
 
 /** Rank by the method of four Russians in WebAssembly, the whole matrix packed in its memory.
  *  @throws LimitError when the packed matrix does not fit. */
@@ -32,8 +34,8 @@ function pack({ rows, rowStart, colIndex }: SparseMatrix, words: Int32Array): vo
     const piece = r * PANEL_WORDS;
     for (let e = rowStart[r]!; e < rowStart[r + 1]!; e++) {
       const c = colIndex[e]!;
-      const w = c >>> 5;
-      words[Math.floor(w / PANEL_WORDS) * panelWords + piece + (w % PANEL_WORDS)]! ^= 1 << (c & 31);
+      const w = (c >>> PANEL_SHIFT) * panelWords + piece + ((c >>> 5) & (PANEL_WORDS - 1));
+      words[w]! ^= 1 << (c & 31);
     }
   }
 }
