@@ -18,6 +18,9 @@ const MOST_KEPT = 320;
 export function createTileStore(H: SparseMatrix, ink: () => string): TileStore {
   const kept = new Map<string, HTMLCanvasElement>();
   const counts = new Uint32Array(TILE * TILE);
+  // One for all tiles: a quarter of a megabyte each would keep the collector busy between frames.
+  const image = new ImageData(TILE, TILE);
+  const pixels = new Uint32Array(image.data.buffer);
   const nameOf = (level: number, tx: number, ty: number) => `${level}/${tx}/${ty}`;
 
   const peek: TileStore['peek'] = (level, tx, ty) => {
@@ -39,11 +42,9 @@ export function createTileStore(H: SparseMatrix, ink: () => string): TileStore {
     tile.height = TILE;
     const context = tile.getContext('2d');
     if (!context) return tile;
-    const image = context.createImageData(TILE, TILE);
-    const pixels = new Uint32Array(image.data.buffer);
     for (let i = 0; i < counts.length; i++) {
       const count = counts[i]!;
-      if (count > 0) pixels[i] = shades[Math.min(count, full)]!;
+      pixels[i] = count > 0 ? shades[Math.min(count, full)]! : 0;
     }
     context.putImageData(image, 0, 0);
     return tile;
