@@ -34,6 +34,7 @@ const nodeWorkers = {
           rollupOptions: {
             input: {
               build: here('./workers/build/node.ts'),
+              examine: here('./workers/examine/node.ts'),
               files: here('./workers/files/node.ts'),
               simulate: here('./workers/simulate/node.ts'),
               upload: here('./workers/upload/node.ts'),

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { accountPatchSchema, accountSchema, newPasswordSchema, passwordChangeSchema } from './account.ts';
+import { analysisSchema, newAnalysisSchema } from './analyses.ts';
 import {
   candidateAnswerSchema,
   candidateQueryParams,
@@ -121,6 +122,23 @@ export const endpoints = {
   getJob: endpoint('GET', '/jobs/:id', 'How a long piece of work stands', { response: z.object({ job: jobSchema }) }),
   getCode: endpoint('GET', '/codes/:id', 'One code with its properties', { response: z.object({ code: codeSchema }) }),
   deleteCode: endpoint('DELETE', '/codes/:id', 'Remove a code that no run uses', { success: [204] }),
+  listAnalyses: endpoint('GET', '/codes/:id/analyses', 'What more was asked of a code, newest first', {
+    response: z.object({ analyses: z.array(analysisSchema) }),
+  }),
+  startAnalysis: endpoint('POST', '/codes/:id/analyses', 'Ask more of a code and keep what it tells', {
+    body: newAnalysisSchema,
+    response: z.object({ analysis: analysisSchema }),
+    success: [201, 202],
+    scopes: ['run'],
+  }),
+  getAnalysis: endpoint('GET', '/analyses/:id', 'How an analysis stands, and what it told', {
+    response: z.object({ analysis: analysisSchema }),
+  }),
+  cancelAnalysis: endpoint('DELETE', '/analyses/:id', 'End an analysis that still works', {
+    success: [204],
+    scopes: ['run'],
+  }),
+  getAnalysisList: endpoint('GET', '/analyses/:id/list', 'The sets or words that an analysis found, as a file', {}),
   getMatrix: endpoint('GET', '/codes/:id/matrix', 'The parity-check matrix as a file', {
     query: z.object({ format: matrixFormatSchema }),
   }),

@@ -5,6 +5,12 @@ import type { WorkerFailure } from '../failure.ts';
 
 export type ExamineAnswer = { ok: true; answer: CodeAnswer; elapsedMs: number } | { ok: false; failure: WorkerFailure };
 
+export interface ExamineRequest {
+  question: CodeQuestionId;
+  code: AnalysableCode;
+  seconds: number;
+}
+
 export interface ExamineApi {
   ask(
     question: CodeQuestionId,

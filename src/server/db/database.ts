@@ -43,6 +43,8 @@ async function prepare(seedDemo: Seeder): Promise<void> {
   if (!isProduction() && (await seedDemo(db))) console.log('Seeded the demo projects.');
   const { redoInterruptedJobs } = await import('../use-cases/jobs/redo-interrupted-jobs.ts');
   await redoInterruptedJobs(db);
+  const { failInterruptedAnalyses } = await import('../use-cases/analyses/fail-interrupted-analyses.ts');
+  await failInterruptedAnalyses(db);
   const { startSendingMail } = await import('../mail/outgoing.ts');
   await startSendingMail(db);
   const { startWorking } = await import('../jobs/start-working.ts');

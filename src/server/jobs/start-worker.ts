@@ -2,7 +2,7 @@ import { join } from 'node:path';
 import { type ResourceLimits, Worker } from 'node:worker_threads';
 
 /** Jobs that have a Node worker, each a folder of workers/ and an entry in astro.config.mjs. */
-export type NodeJob = 'build' | 'files' | 'upload';
+export type NodeJob = 'build' | 'examine' | 'files' | 'upload';
 
 /** Starts a job's Node worker: the file bundled beside the built server, or the TypeScript source through tsx when the
  *  server itself runs from its sources (development, tests). */

@@ -109,6 +109,14 @@ export async function codeLengths(db: Database, projectId: string, ids: readonly
   return new Map<string, number>(rows.map((row) => [row.id, row.n]));
 }
 
+/** Puts other properties in place of a code's; the rest of its analysis stays. */
+export async function updateProperties(db: Database, id: string, properties: Code['properties']): Promise<void> {
+  const json = JSON.stringify(properties);
+  await db('codes')
+    .where({ id })
+    .update({ analysis: db.raw("json_set(analysis, '$.properties', json(?))", [json]) });
+}
+
 export async function runsUsingCode(db: Database, id: string): Promise<number> {
   const row = await db('points').where({ code_id: id }).countDistinct({ runs: 'run_id' }).first();
   return Number(row?.runs ?? 0);

@@ -29,7 +29,7 @@ export const absorbingSets: CodeQuestion = {
       const whole = a <= value;
       return {
         key: `absorbing-${a}-${b}`,
-        label: `(${a}, ${b}) sets`,
+        label: `(${a}, ${b}) absorbing sets`,
         text: whole ? `${count}, ${fullyAbsorbing} of them fully` : `${count} met, others may be`,
         number: count,
         grade: whole ? grade : ('bounded' as const),
@@ -42,10 +42,11 @@ export const absorbingSets: CodeQuestion = {
       lines: [
         {
           key: 'absorbing-complete',
-          label: 'Complete up to',
-          text: `${value} bits`,
+          label: 'Absorbing sets listed',
+          text: `all of up to ${value} bits`,
           number: value,
-          grade,
+          // Of larger ones nothing is said.
+          grade: 'bounded' as const,
           method,
           source: cited,
         },

@@ -16,7 +16,14 @@ export const stoppingSets: CodeQuestion = {
     const counted =
       count === undefined
         ? []
-        : [{ ...enclosureLine('stopping-count', 'How many', { ...size, value: { lower: count, upper: count } }) }];
+        : [
+            {
+              ...enclosureLine('stopping-count', 'Smallest stopping sets', {
+                ...size,
+                value: { lower: count, upper: count },
+              }),
+            },
+          ];
     return {
       lines: [enclosureLine('stopping-size', 'Smallest stopping set', size), ...counted],
       ...(sets.length > 0 && { list: setList('stopping-sets.csv', sets) }),

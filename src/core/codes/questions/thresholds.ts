@@ -2,12 +2,12 @@ import { type ThresholdQuestion, thresholdOfMatrix } from '../density-evolution/
 import type { CodeQuestion } from './question.ts';
 
 const asked: readonly (ThresholdQuestion & { label: string })[] = [
-  { channel: 'bsc', decoder: 'gallager-a', label: 'Gallager A, p' },
-  { channel: 'bsc', decoder: 'gallager-b', label: 'Gallager B, p' },
-  { channel: 'bsc', decoder: 'sum-product', label: 'Sum-product, p' },
-  { channel: 'bsc', decoder: 'min-sum', label: 'Min-sum, p' },
-  { channel: 'bec', decoder: 'peeling', label: 'Peeling, erasures' },
-  { channel: 'awgn', decoder: 'sum-product', label: 'Sum-product on AWGN, σ' },
+  { channel: 'bsc', decoder: 'gallager-a', label: 'Threshold p, Gallager A' },
+  { channel: 'bsc', decoder: 'gallager-b', label: 'Threshold p, Gallager B' },
+  { channel: 'bsc', decoder: 'sum-product', label: 'Threshold p, sum-product' },
+  { channel: 'bsc', decoder: 'min-sum', label: 'Threshold p, min-sum' },
+  { channel: 'bec', decoder: 'peeling', label: 'Threshold, erasures' },
+  { channel: 'awgn', decoder: 'sum-product', label: 'Threshold σ, sum-product on AWGN' },
 ];
 
 /** The worst channel that codes with these weights correct when they are long and without short cycles. Of this very code

@@ -1,8 +1,12 @@
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import type { NewCode } from '@/api/codes.ts';
+import { readWordList } from '@/core/formats/word-list.ts';
 import { createBuildPool } from '@/server/jobs/build-pool.ts';
+import { createFilesPool } from '@/server/jobs/files-pool.ts';
 import { matrixOf } from '@/server/repositories/codes.ts';
+import { codeForms } from '@/server/use-cases/codes/code-forms.ts';
 import { createCode } from '@/server/use-cases/codes/create-code.ts';
+import { exportGenerator, exportWords } from '@/server/use-cases/codes/export-code.ts';
 import { findLineage } from '@/server/use-cases/codes/find-lineage.ts';
 import { getCode } from '@/server/use-cases/codes/get-code.ts';
 import { getJob } from '@/server/use-cases/jobs/get-job.ts';
@@ -10,12 +14,13 @@ import { createRun } from '@/server/use-cases/runs/create-run.ts';
 import { furnishedScratch } from './scratch-database.ts';
 
 const pool = createBuildPool();
+const files = createFilesPool();
 let at: Awaited<ReturnType<typeof furnishedScratch>>;
 beforeAll(async () => {
   at = await furnishedScratch();
 });
 afterAll(async () => {
-  await pool.close();
+  await Promise.all([pool.close(), files.close()]);
   await at.db.destroy();
 });
 
@@ -71,6 +76,24 @@ describe('a constant-weight code', () => {
     const code = await keep({ kind: 'constant-weight', complement: true });
     expect(code.properties.find(({ key }) => key === 'w')?.number).toBe(16);
     expect(code.properties.find(({ key }) => key === 'distance')?.number).toBe(8);
+  });
+
+  it('is listed by number, and has neither generator nor test vectors', async () => {
+    const [row] = await at.db('codes').whereRaw("json_extract(derivation, '$.kind') = 'constant-weight'").orderBy('id');
+    const asked = { context: at.context, pool: files, codeId: row.id as string, signal: new AbortController().signal };
+    const { stream, fileName } = await exportWords(asked, 'text');
+    expect(fileName).toMatch(/\.words\.txt$/);
+    const list = readWordList(new Uint8Array(await new Response(stream).arrayBuffer()));
+    expect(list).toMatchObject({ n: 21, w: 5, M: 21 });
+    const forms = await codeForms(at.context, row.id);
+    expect(forms).toMatchObject({ generators: [], words: [{ id: 'text' }, { id: 'csv' }] });
+    await expect(exportGenerator(asked, 'systematic')).rejects.toThrow(/no generator/);
+  });
+
+  it('has words; a parity-check code is refused where words are asked for', async () => {
+    const [row] = await at.db('codes').whereRaw("json_extract(derivation, '$.kind') = 'ldpc'").orderBy('id');
+    const asked = { context: at.context, pool: files, codeId: row.id as string, signal: new AbortController().signal };
+    await expect(exportWords(asked, 'csv')).rejects.toThrow(/constant-weight/);
   });
 
   it('is refused in a run, which measures parity-check codes', async () => {
