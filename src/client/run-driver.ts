@@ -17,6 +17,8 @@ export interface DriverView {
   status: 'idle' | 'running' | 'pausing' | 'paused' | 'waiting-for-server' | 'finished' | 'stopped' | 'failed';
   workers: number;
   framesPerSecond: number;
+  /** The pace when it was last at work here; 0 before. */
+  lastFramesPerSecond?: number;
   /** null while nothing is known yet. */
   timeLeftMs: number | null;
   fractionDone: number;
@@ -55,6 +57,7 @@ export class RunDriver {
   private readonly pointById: ReadonlyMap<string, Point>;
   private readonly backlog: ShardResult[] = [];
   private readonly rates: { at: number; frames: number }[] = [];
+  private lastRate = 0;
   private status: DriverView['status'] = 'idle';
   private message: string | null = null;
   private inFlight = 0;
@@ -81,6 +84,7 @@ export class RunDriver {
       status: this.status,
       workers: this.ports.workers,
       framesPerSecond: rate,
+      lastFramesPerSecond: this.lastRate,
       timeLeftMs: rate > 0 ? (left / rate) * 1000 : null,
       fractionDone: this.points.reduce((sum, point) => sum + fractionDone(point, stopping), 0) / this.points.length,
       message: this.message,
@@ -245,6 +249,7 @@ export class RunDriver {
   private noteRate(frames: number): void {
     this.rates.push({ at: this.ports.now(), frames });
     if (this.rates.length > 64) this.rates.shift();
+    this.lastRate = this.framesPerSecond() || this.lastRate;
     this.show();
   }
 

@@ -19,6 +19,7 @@ import { CompareTable } from './CompareTable.tsx';
 import { CopyButton } from './CopyButton.tsx';
 import { CurvePicker } from './CurvePicker.tsx';
 import { gridText } from './comparison-grid.ts';
+import { DifferenceTest } from './DifferenceTest.tsx';
 import { selectedCurves, selectionText } from './selection.ts';
 
 interface Props {
@@ -81,6 +82,9 @@ export function CompareBench({ runs, measurements, curves, requirements, addAddr
             Download CSV
           </Button>
         </div>
+      </div>
+      <div className="min-w-0 wide:col-span-2">
+        <DifferenceTest curves={chosen} runs={runById} />
       </div>
     </div>
   );

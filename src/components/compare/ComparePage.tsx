@@ -5,6 +5,7 @@ import type { Point, Run } from '@/api/runs.ts';
 import { groupPoints } from '@/client/curves/group-points.ts';
 import { measuredCurves } from '@/client/curves/measured-curves.ts';
 import { useApi } from '@/client/hooks.ts';
+import { useStrataEvidence } from '@/client/strata/use-strata-evidence.ts';
 import { Button, ButtonLink } from '@/components/ui/Button.tsx';
 import { EmptyState } from '@/components/ui/EmptyState.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
@@ -67,10 +68,11 @@ type ComparedProps = Omit<Parameters<typeof CompareBench>[0], 'curves'> & {
 
 function Compared({ points, ...shown }: ComparedProps) {
   const { measurements } = shown;
-  const curves = useMemo(
-    () => [...groupPoints(points).filter((curve) => curve.points.length > 0), ...measuredCurves(measurements)],
-    [points, measurements],
-  );
+  const evidence = useStrataEvidence(points);
+  const curves = useMemo(() => {
+    const computed = [...groupPoints(points), ...evidence.map(({ curve }) => curve)];
+    return [...computed.filter((curve) => curve.points.length > 0), ...measuredCurves(measurements)];
+  }, [points, evidence, measurements]);
   return <CompareBench {...shown} curves={curves} />;
 }
 

@@ -4,6 +4,7 @@ import { curveKey } from '@/client/curves/group-points.ts';
 import { SelectField } from '@/components/ui/fields.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
 import { HistogramWhenVisible } from '../charts/HistogramWhenVisible.tsx';
+import { PointEstimators } from './PointEstimators.tsx';
 
 interface Props {
   points: readonly Point[];
@@ -24,14 +25,18 @@ function offered(points: readonly Point[], selected: Point): readonly Point[] {
   return first.includes(selected) ? first : [selected, ...first];
 }
 
-/** The iterations of one point, chosen here, in the table or on the chart. */
+/** The estimates and iterations of one point, chosen here, in the table or on the chart. */
 export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
   const labels = new Map(curves.map(({ curve, label }) => [curve.key, label]));
   const selected = points.find((point) => point.id === selectedId) ?? points[0];
   if (!selected) return null;
   return (
-    <section className="grid min-w-0 content-start gap-2" aria-label="Iterations of a point" data-screen-only>
-      <h2>Iterations</h2>
+    <section
+      className="grid min-w-0 content-start gap-2"
+      aria-label="Estimates and iterations of a point"
+      data-screen-only
+    >
+      <h2>One point</h2>
       <SelectField
         label="Point"
         className="max-w-md"
@@ -45,7 +50,10 @@ export function PointDetail({ points, curves, selectedId, onSelect }: Props) {
       {selected.tally.frames === 0 ? (
         <p className="text-quiet">No frames at this point yet.</p>
       ) : (
-        <HistogramWhenVisible histogram={selected.tally.iterationHistogram} />
+        <>
+          <PointEstimators point={selected} />
+          <HistogramWhenVisible histogram={selected.tally.iterationHistogram} />
+        </>
       )}
     </section>
   );

@@ -5,6 +5,7 @@ import { crossoverOf } from '@/client/curves/curve.ts';
 import { groupPoints } from '@/client/curves/group-points.ts';
 import { csvText, pointRows } from '@/client/curves/points-csv.ts';
 import { useApi } from '@/client/hooks.ts';
+import { useStrataEvidence } from '@/client/strata/use-strata-evidence.ts';
 import { Button, ButtonLink } from '@/components/ui/Button.tsx';
 import { counted } from '@/components/ui/numbers.ts';
 import { paths } from '@/paths.ts';
@@ -17,6 +18,7 @@ import { requirementOf } from '../charts/requirement.ts';
 import { runsText } from '../charts/runs-text.ts';
 import { useUrlParam } from '../charts/url-state.ts';
 import { useChartAddress } from '../charts/use-chart-address.ts';
+import { StrataBench } from '../strata/StrataBench.tsx';
 import { Caution } from './Caution.tsx';
 import { PointDetail } from './PointDetail.tsx';
 import { PointsTable } from './PointsTable.tsx';
@@ -27,13 +29,19 @@ interface Props {
   projectId: string;
   run: Run;
   points: Point[];
+  /** Whether the reader may state runs. */
+  canRun: boolean;
   /** Progress, with or without controls. */
   panel: ReactNode;
 }
 
 /** A run under way or at rest: chart and table on the left, progress and particulars on the right. */
-export function RunBench({ projectId, run, points, panel }: Props) {
-  const curves = useMemo(() => chartCurves(groupPoints(points)), [points]);
+export function RunBench({ projectId, run, points, canRun, panel }: Props) {
+  const evidence = useStrataEvidence(points);
+  const curves = useMemo(
+    () => chartCurves([...groupPoints(points), ...evidence.map(({ curve }) => curve)]),
+    [points, evidence],
+  );
   const planned = useMemo(() => points.flatMap((point) => crossoverOf(point) ?? []), [points]);
   const address = useChartAddress(curves);
   const [selectedId, setSelectedId] = useUrlParam('point');
@@ -82,6 +90,18 @@ export function RunBench({ projectId, run, points, panel }: Props) {
         <Caution />
       </div>
       <PointDetail points={points} curves={curves} selectedId={selectedId} onSelect={setSelectedId} />
+      {evidence.length > 0 && (
+        <div className="min-w-0 wide:col-span-2">
+          <StrataBench
+            evidence={evidence}
+            curves={curves}
+            requirements={data?.requirements ?? null}
+            run={run}
+            projectId={projectId}
+            canRun={canRun}
+          />
+        </div>
+      )}
       <div className="min-w-0 wide:col-span-2">
         <PointsTable
           points={points}

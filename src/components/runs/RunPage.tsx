@@ -51,10 +51,18 @@ function DrivenRun({ projectId, run, points }: BenchProps) {
     driver.status === 'waiting-for-server' ? 'waiting' : isAtWork ? percentText(driver.fractionDone) : null,
   );
   const panel = <RunPanel run={run} points={points} driver={driver} />;
-  return <RunBench projectId={projectId} run={run} points={points} panel={panel} />;
+  return <RunBench projectId={projectId} run={run} points={points} canRun panel={panel} />;
 }
 
 function WatchedRun({ projectId, run, points }: BenchProps) {
   useDocumentTitle(run.state === 'running' ? percentText(storedFraction(run, points)) : null);
-  return <RunBench projectId={projectId} run={run} points={points} panel={<WatchPanel run={run} points={points} />} />;
+  return (
+    <RunBench
+      projectId={projectId}
+      run={run}
+      points={points}
+      canRun={false}
+      panel={<WatchPanel run={run} points={points} />}
+    />
+  );
 }

@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/Button.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
 import { counted } from '@/components/ui/numbers.ts';
 import { Progress } from '@/components/ui/Progress.tsx';
+import { KernelNote } from './KernelNote.tsx';
 import { DRIVER_WORD, progressText, rateText, STATE_WORD, sumText } from './run-progress.ts';
 import { StopDialog } from './StopDialog.tsx';
 
@@ -32,9 +33,10 @@ export function RunPanel({ run, points, driver }: Props) {
         label="Share of the run that is done"
         value={fraction}
         left={progressText(fraction, status === 'running' ? driver.timeLeftMs : null)}
-        right={status === 'running' ? rateText(driver.framesPerSecond) : ''}
+        right={paceText(driver)}
       />
       <p className="text-quiet text-tiny">{sumText(points)}</p>
+      <KernelNote points={points} isWorkedOn={status !== 'idle'} />
       {status === 'waiting-for-server' && (
         <Notice kind="caution" word="Waiting for the server" live>
           {driver.message ?? 'It cannot write just now.'} Nothing acknowledged is lost; the run goes on by itself.
@@ -74,6 +76,12 @@ export function RunPanel({ run, points, driver }: Props) {
       />
     </section>
   );
+}
+
+/** Throughput now, or as it last was in this tab. */
+function paceText({ status, framesPerSecond, lastFramesPerSecond = 0 }: DriverView): string {
+  if (status === 'running') return rateText(framesPerSecond);
+  return lastFramesPerSecond > 0 ? `was ${rateText(lastFramesPerSecond)}` : '';
 }
 
 /** The stored state, unless this page is at work on the run or the run was left under way. */

@@ -171,10 +171,13 @@ export function decoderCard(kind: DecoderSpec['kind']): DecoderCard {
   return decoderCards.find((card) => card.kind === kind)!;
 }
 
+/** All that counts of a matrix here: its columns and its ones. */
+type Sized = Pick<SparseMatrix, 'cols'> & { colIndex: { length: number } };
+
 /** Edge visits a code bit: those of the iterations done, and one syndrome test more than iterations. The energy-free
  *  cost of a run, the same on every machine.
  *  @param iterationsPerFrame Mean over the frames of a run. */
-export function edgeVisitsPerBit(H: SparseMatrix, decoder: DecoderSpec, iterationsPerFrame: number): number {
+export function edgeVisitsPerBit(H: Sized, decoder: DecoderSpec, iterationsPerFrame: number): number {
   const edgesPerBit = H.colIndex.length / H.cols;
   const visits = decoderCard(decoder.kind).edgeVisitsPerIteration;
   return edgesPerBit * (iterationsPerFrame * visits + iterationsPerFrame + 1);
