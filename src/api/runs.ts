@@ -60,6 +60,8 @@ export const goalSchema = z.discriminatedUnion('kind', [
     rate: z.enum(['fer', 'uber']),
     target: rate('a rate above 0 and below 1'),
     level: levelSchema,
+    /** Numbers of errors up to this are always corrected, by a theorem; worked out by the server. */
+    radius: z.int().min(0).optional(),
   }),
 ]);
 export type Goal = z.infer<typeof goalSchema>;
