@@ -1,4 +1,4 @@
-import type { Goal, Outcome, Run } from '@/api/runs.ts';
+import type { Goal, Outcome, PointPlan, Run } from '@/api/runs.ts';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import { LimitError } from '@/core/errors.ts';
 import { enumerateStratum } from '@/core/simulation/enumerate-stratum.ts';
@@ -16,6 +16,7 @@ import type { StoredPoint } from '../../repositories/points.ts';
 import type { PlannedPoint } from './replan.ts';
 
 type GoalOfLimit = Extract<Goal, { kind: 'limit' }>;
+type Enumeration = NonNullable<PointPlan['enumerate']>;
 
 /** Patterns up to symmetry that a weight may have to be enumerated, and about so many a shard. */
 const mostPatterns = 300_000;
@@ -54,7 +55,7 @@ export async function firstStage(
   const points: PlannedPoint[] = [];
   let isSmall = true;
   for (const weight of weights) {
-    const enumerate = isSmall ? await enumerationOf(goal, H, weight, framesPerShard) : null;
+    const enumerate: Enumeration | null = isSmall ? await enumerationOf(goal, H, weight, framesPerShard) : null;
     isSmall = enumerate !== null;
     const plan = enumerate
       ? { stage: 0, frames: 0, enumerate, stream: 'all' }
@@ -64,7 +65,12 @@ export async function firstStage(
   return { radius, points };
 }
 
-async function enumerationOf(goal: GoalOfLimit, H: SparseMatrix, weight: number, framesPerShard: number) {
+async function enumerationOf(
+  goal: GoalOfLimit,
+  H: SparseMatrix,
+  weight: number,
+  framesPerShard: number,
+): Promise<Enumeration | null> {
   const channel = { kind: 'bsc' as const, p: goal.p };
   const spec = { H, channel, decoder: goal.decoder, seed: '', framesPerShard };
   try {
