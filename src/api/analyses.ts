@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { codeQuestionIds } from '@/core/codes/questions/index.ts';
+import { codeQuestionIds } from '@/core/codes/questions/question-ids.ts';
 import { propertySchema } from './codes.ts';
 
 export const newAnalysisSchema = z.strictObject({

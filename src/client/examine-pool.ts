@@ -1,7 +1,7 @@
 import type { ExamineAnswer, ExamineApi } from '@workers/examine/api.ts';
 import { proxy } from 'comlink';
 import type { AnalysableCode } from '@/core/codes/analyse-ldpc.ts';
-import type { CodeQuestionId } from '@/core/codes/questions/index.ts';
+import type { CodeQuestionId } from '@/core/codes/questions/question-ids.ts';
 import { createWorkerPool, type WorkerPool } from './worker-pool.ts';
 
 let pool: WorkerPool<ExamineApi> | undefined;

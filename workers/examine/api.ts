@@ -1,6 +1,6 @@
 import type { AnalysableCode } from '@/core/codes/analyse-ldpc.ts';
-import type { CodeQuestionId } from '@/core/codes/questions/index.ts';
 import type { CodeAnswer } from '@/core/codes/questions/question.ts';
+import type { CodeQuestionId } from '@/core/codes/questions/question-ids.ts';
 import type { WorkerFailure } from '../failure.ts';
 
 export type ExamineAnswer = { ok: true; answer: CodeAnswer; elapsedMs: number } | { ok: false; failure: WorkerFailure };

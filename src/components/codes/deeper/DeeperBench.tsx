@@ -1,27 +1,30 @@
-import { lazy, Suspense, useState } from 'react';
-import type { Code } from '@/api/codes.ts';
-import { saveFile } from '@/components/runs/save-file.ts';
+import { useState } from 'react';
+import type { Analysis } from '@/api/analyses.ts';
 import { Button } from '@/components/ui/Button.tsx';
 import { SelectField } from '@/components/ui/fields.tsx';
 import { duration } from '@/components/ui/numbers.ts';
 import { Progress } from '@/components/ui/Progress.tsx';
-import { TitleBlock } from '@/components/ui/TitleBlock.tsx';
 import { type CodeQuestionId, codeQuestionIds, codeQuestions } from '@/core/codes/questions/index.ts';
-import type { CodeAnswer, CodeOutline } from '@/core/codes/questions/question.ts';
+import type { CodeOutline } from '@/core/codes/questions/question.ts';
 import { RefusalNotice } from '../RefusalNotice.tsx';
-import { useExamination } from './use-examination.ts';
-
-const WeightBars = lazy(() => import('../WeightBars.tsx'));
+import { AnswerBlock } from './AnswerBlock.tsx';
+import { EarlierAnalysis, KeptAnalysis } from './KeptAnalysis.tsx';
+import { type Examined, useExamination } from './use-examination.ts';
+import { useKeptAnalysis } from './use-kept-analysis.ts';
 
 interface Props {
-  code: Pick<Code, 'id' | 'fingerprint' | 'design' | 'derivation'>;
+  code: Examined;
   outline: CodeOutline;
+  /** Engineers and owners keep what is found; it is then computed on the server. */
+  mayKeep: boolean;
+  /** What was asked before, newest first. */
+  earlier: readonly Analysis[];
 }
 
 const BUDGETS = [1, 10, 60, 600];
 
 /** What more can be found out about a code, each asked for, with a budget, a progress and a way out. */
-export default function DeeperBench({ code, outline }: Props) {
+export default function DeeperBench({ code, outline, mayKeep, earlier }: Props) {
   const [seconds, setSeconds] = useState(10);
   return (
     <div className="grid gap-4">
@@ -34,7 +37,15 @@ export default function DeeperBench({ code, outline }: Props) {
         onChange={(event) => setSeconds(Number(event.target.value))}
       />
       {codeQuestionIds.map((id) => (
-        <Question key={id} id={id} code={code} outline={outline} seconds={seconds} />
+        <Question
+          key={id}
+          id={id}
+          code={code}
+          outline={outline}
+          mayKeep={mayKeep}
+          earlier={earlier.filter(({ question }) => question === id)}
+          seconds={seconds}
+        />
       ))}
     </div>
   );
@@ -45,21 +56,34 @@ interface QuestionProps extends Props {
   seconds: number;
 }
 
-function Question({ id, code, outline, seconds }: QuestionProps) {
+function Question({ id, code, outline, mayKeep, earlier, seconds }: QuestionProps) {
   const { examination, ask, cancel } = useExamination(code, id);
+  const [open] = useState(() => earlier.find(({ state }) => state === 'working'));
+  const server = useKeptAnalysis(code.id, id, open);
   const { title, searches, obstacle } = codeQuestions[id];
   const unfit = obstacle(outline);
+  const told = earlier.find(({ lines }) => lines.length > 0);
+  const isIdle = examination.state !== 'working' && server.kept.state !== 'working';
   return (
     <section aria-label={title} className="grid gap-2 border-rule border-t pt-3">
       <div className="flex flex-wrap items-center justify-between gap-3">
         <h3 className="font-semibold">{title}</h3>
-        {!unfit && examination.state !== 'working' && (
-          <Button size="small" onClick={() => void ask(seconds)} aria-label={`Compute: ${title}`}>
-            {examination.state === 'answered' ? (searches ? 'Search again' : 'Compute again') : 'Compute'}
-          </Button>
+        {!unfit && isIdle && (
+          <span className="flex flex-wrap gap-2">
+            <Button size="small" onClick={() => void ask(seconds)} aria-label={`Compute: ${title}`}>
+              {examination.state === 'answered' ? (searches ? 'Search again' : 'Compute again') : 'Compute'}
+            </Button>
+            {mayKeep && (
+              <Button size="small" onClick={() => server.start(seconds)} aria-label={`Compute and keep: ${title}`}>
+                Compute and keep
+              </Button>
+            )}
+          </span>
         )}
       </div>
       {unfit && <p className="text-quiet text-tiny">{unfit}.</p>}
+      {told && <EarlierAnalysis analysis={told} searches={searches} />}
+      <KeptAnalysis title={title} kept={server.kept} onCancel={() => void server.cancel()} />
       {examination.state === 'working' && (
         <div className="flex flex-wrap items-center gap-3">
           <div className="w-60 max-w-full">
@@ -72,46 +96,8 @@ function Question({ id, code, outline, seconds }: QuestionProps) {
       )}
       {examination.state === 'refused' && <RefusalNotice refusal={examination.refusal} />}
       {examination.state === 'answered' && (
-        <Answer title={title} answer={examination.answer} elapsedMs={examination.elapsedMs} />
+        <AnswerBlock title={title} answer={examination.answer} elapsedMs={examination.elapsedMs} />
       )}
     </section>
-  );
-}
-
-function Answer({ title, answer, elapsedMs }: { title: string; answer: CodeAnswer; elapsedMs: number }) {
-  const { lines, list, histogram } = answer;
-  return (
-    <div className="grid gap-2" role="status">
-      <TitleBlock
-        title={title}
-        rows={lines.map(({ label, text, grade, method, source }) => ({
-          label,
-          value: text,
-          grade,
-          note: source ? `${method}; ${source}` : method,
-        }))}
-      />
-      {histogram && histogram.bars.length > 1 && (
-        <figure className="min-w-0">
-          <figcaption className="text-tiny">{histogram.of}</figcaption>
-          <Suspense fallback={null}>
-            <WeightBars of="column" weights={histogram.bars} axis={histogram.of} />
-          </Suspense>
-        </figure>
-      )}
-      {histogram?.bars.length === 1 && (
-        <p className="text-tiny">
-          {histogram.of}: {histogram.bars[0]![0]}, the same through every bit.
-        </p>
-      )}
-      <p className="flex flex-wrap items-center gap-x-4 text-quiet text-tiny">
-        <span>Took {duration(elapsedMs)}.</span>
-        {list && (
-          <Button size="small" onClick={() => saveFile(list.fileName, 'text/csv', list.text)}>
-            Download the list
-          </Button>
-        )}
-      </p>
-    </div>
   );
 }

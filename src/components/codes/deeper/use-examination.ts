@@ -1,8 +1,8 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
 import type { Code } from '@/api/codes.ts';
 import type { AnalysableCode } from '@/core/codes/analyse-ldpc.ts';
-import type { CodeQuestionId } from '@/core/codes/questions/index.ts';
 import type { CodeAnswer } from '@/core/codes/questions/question.ts';
+import type { CodeQuestionId } from '@/core/codes/questions/question-ids.ts';
 import type { DesignSpec } from '@/core/designs/block-design.ts';
 import { type Refusal, refusalFrom, refusalOf } from '../refusal.ts';
 

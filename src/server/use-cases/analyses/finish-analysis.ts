@@ -1,8 +1,8 @@
 import type { ExamineAnswer } from '@workers/examine/api.ts';
 import type { Analysis } from '@/api/analyses.ts';
-import type { CodeQuestionId } from '@/core/codes/questions/index.ts';
 import { mergeLines } from '@/core/codes/questions/merge-lines.ts';
 import type { CodeAnswer } from '@/core/codes/questions/question.ts';
+import type { CodeQuestionId } from '@/core/codes/questions/question-ids.ts';
 import { nowText } from '../../context.ts';
 import { type Database, inTransaction } from '../../db/database.ts';
 import { refusalOfFailure } from '../../jobs/worker-refusal.ts';
