@@ -6,7 +6,6 @@ import {
   acknowledge,
   fractionDone,
   framesLeft,
-  nextShard,
   type PointProgress,
   progressOf,
   reachedStop,
@@ -34,9 +33,18 @@ interface ShardResult {
   tally: Tally;
 }
 
+/** Shards that are this page's to compute, or word that there will be no more. */
+export interface Leases {
+  leases: { pointId: string; index: number }[];
+  points: Point[];
+  over: Run['state'] | null;
+}
+
 /** What the driver needs from outside: workers, the server, a clock. */
 export interface DriverPorts {
   workers: number;
+  lease(count: number): Promise<Leases>;
+  failed(failure: { pointId: string; index: number; message: string }): Promise<unknown>;
   compute(point: Point, index: number, signal: AbortSignal): Promise<ShardAnswer>;
   post(shards: ShardResult[]): Promise<{ conflicts: { pointId: string; index: number }[] }>;
   setState(state: 'running' | 'paused' | 'stopped'): Promise<void>;
@@ -49,12 +57,20 @@ const flushAfterMs = 400;
 const batchLimit = 100;
 /** Computed shards waiting for the server at which workers stand still, so that little is lost with a closed tab. */
 const backlogLimit = 200;
+/** While other workers have all that is left, this often it is asked whether something has come back. */
+const askAgainMs = 1500;
+/** So many failures in a row are not one shard's fault. */
+const failuresInARow = 3;
 
 /** Works off one run in this page: hands out shards, posts results in batches, and counts only what the server has
  *  acknowledged. A server that cannot write makes it wait, not fail. */
 export class RunDriver {
   private readonly points: PointProgress[];
-  private readonly pointById: ReadonlyMap<string, Point>;
+  private readonly pointById: Map<string, Point>;
+  private readonly leased: { point: PointProgress; index: number }[] = [];
+  private leasing: Promise<void> | null = null;
+  private over: Run['state'] | null = null;
+  private failures = 0;
   private readonly backlog: ShardResult[] = [];
   private readonly rates: { at: number; frames: number }[] = [];
   private lastRate = 0;
@@ -96,6 +112,8 @@ export class RunDriver {
     if (this.isActive() || this.status === 'finished' || this.status === 'stopped') return;
     if (!(await this.tellServer('running'))) return;
     this.abort = new AbortController();
+    this.over = null;
+    this.failures = 0;
     this.become('running');
     this.handOut();
   }
@@ -128,13 +146,55 @@ export class RunDriver {
     // Between the word to stop and the server's answer the status still says running; nothing new may start then.
     if (this.abort.signal.aborted) return;
     while (this.status === 'running' && this.inFlight < this.ports.workers && this.backlog.length < backlogLimit) {
-      const next = nextShard(this.points, this.run.stopping, this.run.framesPerShard);
-      if (!next) break;
+      const next = this.leased.shift();
+      if (!next) {
+        if (this.over === null) void this.lease();
+        break;
+      }
       next.point.out.add(next.index);
       this.inFlight++;
       void this.computeOne(next.point, next.index);
     }
-    if (this.status === 'running' && this.inFlight === 0) void this.settle();
+    if (this.status === 'running' && this.over !== null && this.inFlight === 0) void this.settle();
+  }
+
+  /** Asks the server for shards that nobody else has. */
+  private lease(): Promise<void> {
+    this.leasing ??= this.leaseOnce().finally(() => {
+      this.leasing = null;
+      this.handOut();
+    });
+    return this.leasing;
+  }
+
+  private async leaseOnce(): Promise<void> {
+    try {
+      // What is computed counts before more is asked for: the point may be done.
+      if (this.inFlight === 0) await this.flush();
+      const { leases, points, over } = await this.ports.lease(2 * this.ports.workers);
+      for (const point of points) this.meet(point);
+      for (const { pointId, index } of leases) {
+        this.leased.push({ point: this.points.find((known) => known.pointId === pointId)!, index });
+      }
+      if (this.status === 'waiting-for-server') this.become('running', null);
+      if (over === 'paused') this.become('pausing');
+      this.over = over;
+      if (over === 'paused') void this.settle();
+      else if (leases.length === 0 && over === null) await this.ports.wait(askAgainMs);
+    } catch (error) {
+      if (!(error instanceof ApiFailure) || !error.passing) return this.refuse(error);
+      if (this.status === 'running') this.become('waiting-for-server', error.message);
+      await this.ports.wait(askAgainMs);
+      if (this.status === 'waiting-for-server') this.become('running');
+    }
+  }
+
+  /** A point that the planner has added since, or one that others work on too. */
+  private meet(point: Point): void {
+    const known = this.points.find(({ pointId }) => pointId === point.id);
+    this.pointById.set(point.id, point);
+    if (!known) this.points.push(progressOf(point));
+    else if (point.tally.frames > known.tally.frames) known.tally = point.tally;
   }
 
   private async computeOne(point: PointProgress, index: number): Promise<void> {
@@ -143,7 +203,8 @@ export class RunDriver {
       if (answer.ok) {
         this.backlog.push({ pointId: point.pointId, index, tally: answer.tally });
         this.noteRate(answer.tally.frames);
-      } else this.fail(answer.failure.message);
+        this.failures = 0;
+      } else await this.noteFailure(point, index, answer.failure.message);
     } catch (error) {
       point.out.delete(index);
       if (!this.abort.signal.aborted) this.fail(error instanceof Error ? error.message : String(error));
@@ -151,6 +212,14 @@ export class RunDriver {
     this.inFlight--;
     void this.flush();
     this.handOut();
+  }
+
+  /** The server counts it; a shard that fails here may succeed elsewhere. */
+  private async noteFailure(point: PointProgress, index: number, message: string): Promise<void> {
+    point.out.delete(index);
+    this.failures++;
+    await this.ports.failed({ pointId: point.pointId, index, message }).catch(() => {});
+    if (this.failures >= failuresInARow) this.fail(message);
   }
 
   /** Posts what is computed, in batches, until nothing is left; waits as long as the server cannot take it. */
@@ -209,7 +278,7 @@ export class RunDriver {
   private async settleOnce(): Promise<void> {
     while (this.inFlight > 0) await this.ports.wait(20);
     await this.flush();
-    if (this.points.every((point) => point.done)) this.become('finished');
+    if (this.over === 'finished' || this.over === 'stopped') this.become(this.over);
     else if (this.status === 'pausing' && (await this.tellServer('paused'))) this.become('paused');
   }
 
@@ -225,7 +294,7 @@ export class RunDriver {
   }
 
   private refuse(error: unknown): void {
-    const stoppedElsewhere = error instanceof ApiFailure && error.status === 409;
+    const stoppedElsewhere = error instanceof ApiFailure && error.code === 'run-closed';
     this.backlog.length = 0;
     this.abort.abort(error);
     this.become(stoppedElsewhere ? 'stopped' : 'failed', error instanceof Error ? error.message : String(error));

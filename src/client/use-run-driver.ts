@@ -50,10 +50,13 @@ async function createDriver(run: Run, points: Point[], onView: (view: DriverView
   const ids = [...new Set(points.map((point) => point.codeId))];
   const codes = await Promise.all(ids.map((id) => call(endpoints.getCode, { params: { id } })));
   const pool = createSimulationPool(run, new Map(codes.map(({ code }): [string, Code] => [code.id, code])));
+  const source = { name: tabName(), label: browserLabel() };
   const driver = new RunDriver(run, points, {
     workers: pool.size,
     compute: (point, index, signal) => pool.shard(point, index, signal),
-    post: (shards) => call(endpoints.postShards, { params: { id: run.id }, body: { shards } }),
+    lease: (count) => call(endpoints.leaseShards, { params: { id: run.id }, body: { count, source } }),
+    failed: (failure) => call(endpoints.failShards, { params: { id: run.id }, body: { failures: [failure], source } }),
+    post: (shards) => call(endpoints.postShards, { params: { id: run.id }, body: { shards, source } }),
     setState: async (state) => void (await call(endpoints.patchRun, { params: { id: run.id }, body: { state } })),
     now: () => performance.now(),
     wait: (ms) => new Promise((done) => setTimeout(done, ms)),
@@ -68,6 +71,24 @@ async function createDriver(run: Run, points: Point[], onView: (view: DriverView
   };
 }
 
+/** This tab's name as a source, the same as long as it lives. */
+function tabName(): string {
+  const known = sessionStorage.getItem('source');
+  if (known) return known;
+  const name = `tab ${crypto.randomUUID()}`;
+  sessionStorage.setItem('source', name);
+  return name;
+}
+
+/** "Firefox 140 on Linux", as far as the browser says. */
+function browserLabel(): string {
+  const agent = navigator.userAgent;
+  const [, name = 'a browser', version = ''] = /(Firefox|Edg|Chrome|Version)\/(\d+)/.exec(agent) ?? [];
+  const [system = ''] = /Windows|Android|iPhone|iPad|Mac OS X|Linux/.exec(agent) ?? [];
+  const shown = { Edg: 'Edge', Version: 'Safari', Chrome: 'Chromium' }[name] ?? name;
+  return [shown, version, system && `on ${system}`].filter(Boolean).join(' ');
+}
+
 /** A run that this page is not working on is stopped by a word to the server. */
 async function stopRun(driver: RunDriver | null, runId: string): Promise<void> {
   if (driver) await driver.stop();
@@ -78,6 +99,8 @@ function idleView(run: Run, points: Point[]): DriverView {
   const never = () => Promise.reject(new Error('not started'));
   const ports = {
     workers: defaultPoolSize(),
+    lease: never,
+    failed: never,
     compute: never,
     post: never,
     setState: never,

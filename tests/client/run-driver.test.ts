@@ -2,7 +2,8 @@ import { expect, test } from 'vitest';
 import type { Point, Run } from '@/api/runs.ts';
 import { ApiFailure } from '@/client/api.ts';
 import { type DriverPorts, type DriverView, RunDriver } from '@/client/run-driver.ts';
-import { emptyTally, type Tally } from '@/core/simulation/tally.ts';
+import { acknowledge, nextShard, progressOf, reachedStop, shardCap } from '@/client/run-plan.ts';
+import { emptyTally, mergeTallies, type Tally } from '@/core/simulation/tally.ts';
 
 const framesPerShard = 100;
 const n = 7;
@@ -75,6 +76,8 @@ function aPoint(id: string, over: Partial<Point> = {}): Point {
 /** A server and workers that live in memory, with faults that a test can switch on. */
 function world(run: Run, points: Point[]) {
   const stored = new Map<string, Tally>();
+  const progress = points.map(progressOf);
+  const failures: string[] = [];
   const states: string[] = [];
   const views: DriverView[] = [];
   const faults = { serverDown: 0, computeFails: false };
@@ -82,6 +85,19 @@ function world(run: Run, points: Point[]) {
   let clock = 0;
   const ports: DriverPorts = {
     workers: 3,
+    async lease(count) {
+      const leases: { pointId: string; index: number }[] = [];
+      while (leases.length < count) {
+        const next = nextShard(progress, run.stopping, run.framesPerShard);
+        if (!next) break;
+        next.point.out.add(next.index);
+        leases.push({ pointId: next.point.pointId, index: next.index });
+      }
+      return { leases, points: [], over: progress.every((point) => point.done) ? 'finished' : null };
+    },
+    async failed({ pointId, index, message }) {
+      failures.push(`${pointId}/${index}: ${message}`);
+    },
     async compute(_point, _index, signal) {
       signal.throwIfAborted();
       computed.count++;
@@ -95,7 +111,14 @@ function world(run: Run, points: Point[]) {
         faults.serverDown--;
         throw new ApiFailure(503, 'storage', 'The database cannot be written just now.');
       }
-      for (const shard of shards) stored.set(`${shard.pointId}/${shard.index}`, shard.tally);
+      for (const { pointId, index, tally } of shards) {
+        stored.set(`${pointId}/${index}`, tally);
+        const point = progress.find((one) => one.pointId === pointId)!;
+        acknowledge(point, index);
+        point.tally = mergeTallies(point.tally, tally);
+        point.done ||=
+          reachedStop(point.tally, run.stopping) || point.nextIndex >= shardCap(run.stopping, run.framesPerShard);
+      }
       return { conflicts: [] };
     },
     async setState(state) {
@@ -108,7 +131,7 @@ function world(run: Run, points: Point[]) {
     },
     onView: (view) => views.push(view),
   };
-  return { driver: new RunDriver(run, points, ports), stored, states, views, faults, computed };
+  return { driver: new RunDriver(run, points, ports), failures, stored, states, views, faults, computed };
 }
 
 async function until(condition: () => boolean): Promise<void> {
@@ -191,11 +214,13 @@ test('a run that is stopped, or whose page is left, hands out nothing more', asy
 });
 
 test('a worker that refuses its spec fails the run with the reason', async () => {
-  const { driver, faults } = world(aRun(), [aPoint('a')]);
+  const { driver, faults, failures } = world(aRun(), [aPoint('a')]);
   faults.computeFails = true;
   await driver.start();
   await until(() => driver.view().status === 'failed');
   expect(driver.view().message).toBe('threshold: too large');
+  // Each was told to the server, which sets a shard aside at the third.
+  expect(failures.length).toBeGreaterThanOrEqual(3);
 });
 
 test('time left falls as errors come in, and is unknown before the first shard', async () => {
