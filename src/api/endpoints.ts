@@ -12,6 +12,7 @@ import {
 } from './catalogue.ts';
 import { codeSchema, jobSchema, matrixFormatSchema, newCodeSchema } from './codes.ts';
 import { endpoint } from './endpoint.ts';
+import { fleetSchema } from './fleet.ts';
 import { measurementSchema, newMeasurementSchema } from './measurements.ts';
 import {
   deadLetterSchema,
@@ -226,6 +227,9 @@ export const endpoints = {
   runProvenance: endpoint('GET', '/runs/:id/provenance', 'Where shards were computed, and which contradict or failed', {
     query: provenanceQueryParams,
     response: provenanceSchema,
+  }),
+  getFleet: endpoint('GET', '/fleet', 'Where shards can be computed besides browsers, and who has joined', {
+    response: fleetSchema,
   }),
   projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, for charts', {
     query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),

@@ -2,6 +2,7 @@ import { expect, vi } from 'vitest';
 import type { NewRun, Point, Run } from '@/api/runs.ts';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import { runShard } from '@/core/simulation/shard.ts';
+import { countedShards } from '@/core/simulation/stopping.ts';
 import type { Context } from '@/server/context.ts';
 import { ServerRuns } from '@/server/jobs/server-runs.ts';
 import { createSimulationPool } from '@/server/jobs/simulation-pool.ts';
@@ -67,6 +68,16 @@ export async function openBench(dataDir?: string) {
         points: points.map((point) => ({ codeId, ...point })),
         ...over,
       }),
+    /** What one worker that does a point's shards one after the other comes to. */
+    async quietTally(run: Stated, position: number) {
+      const { channel, decoder } = run.points[position]!;
+      const spec = { H: built.H, channel, decoder, seed: run.seed, framesPerShard: run.framesPerShard };
+      let counted = countedShards([], run.stopping);
+      while (!counted.reason) {
+        counted = countedShards([await runShard(spec, counted.count)], run.stopping, counted);
+      }
+      return counted.tally;
+    },
     /** The shards of leases, as an honest worker computes them. */
     computed: (run: Stated, leases: readonly { pointId: string; index: number }[]) =>
       Promise.all(

@@ -1,7 +1,5 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { NewRun } from '@/api/runs.ts';
-import { runShard } from '@/core/simulation/shard.ts';
-import { countedShards } from '@/core/simulation/stopping.ts';
 import { getRun } from '@/server/use-cases/runs/get-run.ts';
 import { leaseShards } from '@/server/use-cases/runs/lease-shards.ts';
 import { patchRun } from '@/server/use-cases/runs/patch-run.ts';
@@ -29,18 +27,6 @@ const stated = (over: Partial<Omit<NewRun, 'points'>> = {}) =>
     ...over,
   });
 
-/** What one worker that does a point's shards one after the other comes to. */
-async function quietTally(run: Awaited<ReturnType<typeof stated>>, position: number) {
-  const { channel, decoder } = run.points[position]!;
-  const spec = { H: at.H, channel, decoder, seed: run.seed, framesPerShard: run.framesPerShard };
-  const shards = [];
-  for (let index = 0; ; index++) {
-    shards.push(await runShard(spec, index));
-    const { reason, tally } = countedShards(shards, run.stopping);
-    if (reason) return tally;
-  }
-}
-
 describe('a run of the server', () => {
   it('begins by itself and ends with the tallies of one quiet worker, to the integer', async () => {
     const run = await stated();
@@ -48,7 +34,7 @@ describe('a run of the server', () => {
     at.startServer(2);
     const { points } = await at.finished(run.id);
     for (const [position, point] of points.entries()) {
-      expect(point.tally).toEqual(await quietTally(run, position));
+      expect(point.tally).toEqual(await at.quietTally(run, position));
     }
     expect(points.map((point) => point.stopReason)).toEqual(['errors', 'errors', 'errors']);
     const [first] = points;
@@ -79,7 +65,7 @@ describe('a run of the server', () => {
     expect(left.run.state).toBe('running');
     at.startServer(1);
     const { points } = await at.finished(run.id);
-    for (const [position, point] of points.entries()) expect(point.tally).toEqual(await quietTally(run, position));
+    for (const [position, point] of points.entries()) expect(point.tally).toEqual(await at.quietTally(run, position));
   });
 
   it('moves to the browser and back between two shards', async () => {
@@ -93,6 +79,6 @@ describe('a run of the server', () => {
     expect((await getRun(at.context, run.id)).run.frames).toBe(3 * run.framesPerShard);
     await patchRun(at.context, run.id, { place: 'server' });
     const { points } = await at.finished(run.id);
-    for (const [position, point] of points.entries()) expect(point.tally).toEqual(await quietTally(run, position));
+    for (const [position, point] of points.entries()) expect(point.tally).toEqual(await at.quietTally(run, position));
   });
 });

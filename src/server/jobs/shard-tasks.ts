@@ -7,11 +7,15 @@ import { matrixOf } from '../repositories/codes.ts';
 import type { StoredPoint } from '../repositories/points.ts';
 import { sharedMatrix } from './simulation-pool.ts';
 
+/** The run's own seed, so that two decoders at the same channel point meet the same patterns; in a stratified run one
+ *  for each stage, whose frames must be its own. */
+export const seedOf = (run: Pick<Run, 'seed'>, { plan }: Pick<StoredPoint, 'plan'>): string =>
+  plan ? `${run.seed} ${plan.stream}` : run.seed;
+
 /** All that a shard of a point depends on, besides the matrix. */
 export function specOf(run: Pick<Run, 'seed' | 'framesPerShard'>, point: StoredPoint, H: SparseMatrix) {
-  const { channel, decoder, k, n, plan } = point;
-  const seed = plan ? `${run.seed} ${plan.stream}` : run.seed;
-  return { H, channel, decoder, seed, framesPerShard: run.framesPerShard, rate: k / n };
+  const { channel, decoder, k, n } = point;
+  return { H, channel, decoder, seed: seedOf(run, point), framesPerShard: run.framesPerShard, rate: k / n };
 }
 
 const matrices = new Recent<SparseMatrix>(32);
