@@ -77,7 +77,9 @@ describe('the combined curve', () => {
       expect(grade).toBe('bounded');
       expect(fer.lower).toBeLessThanOrEqual(fer.value!);
       expect(fer.value!).toBeLessThanOrEqual(fer.upper);
-      expect(ber.upper).toBeLessThanOrEqual(fer.upper);
+      // Half of the allowance of each weight limits its failing share, the other half its wrong bits.
+      expect(ber.upper).toBeLessThanOrEqual(stratifiedRate(strata, 273, p, 0.995).upper * (1 + 1e-12));
+      expect(ber.value!).toBeLessThanOrEqual(fer.value!);
       if (i > 0) expect(fer.value!).toBeLessThan(curve.points[i - 1]!.fer.value! * (1 + 1e-9));
       const engine = stratifiedRate(strata, 273, p, 0.99);
       expect(fer).toEqual({ value: engine.estimate, lower: engine.lower, upper: engine.upper });

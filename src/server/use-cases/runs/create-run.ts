@@ -55,7 +55,7 @@ export async function plannedRun(
   }
   const code = await codeById(db, goal.codeId);
   const H = await matrixOf(db, goal.codeId);
-  if (!code || !H) throw badFields({ 'goal.codeId': 'the id of a code of this project' });
+  if (!code || !H) throw badFields({ 'goal.codeId': 'the id of a code of this project, with parity checks' });
   const first = await firstStage(goal, { H, n: code.n, k: code.k }, input);
   return { goal: { ...goal, radius: first.radius }, points: first.points };
 }

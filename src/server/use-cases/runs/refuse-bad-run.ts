@@ -27,7 +27,7 @@ export function refuseBadRun(run: NewRun, lengths: ReadonlyMap<string, number>):
   run.points.forEach((point, i) => {
     const n = lengths.get(point.codeId);
     if (n === undefined) {
-      fields[`points.${i}.codeId`] = 'the id of a code of this project';
+      fields[`points.${i}.codeId`] = 'the id of a code of this project, with parity checks';
       return;
     }
     if (point.channel.kind === 'stratum' && point.channel.weight > n) {
@@ -48,7 +48,7 @@ export function refuseBadRun(run: NewRun, lengths: ReadonlyMap<string, number>):
 
 function refuseBadGoal({ goal }: NewRun, lengths: ReadonlyMap<string, number>, fields: Record<string, string>): void {
   if (goal?.kind === 'limit') {
-    if (!lengths.has(goal.codeId)) fields['goal.codeId'] = 'the id of a code of this project';
+    if (!lengths.has(goal.codeId)) fields['goal.codeId'] = 'the id of a code of this project, with parity checks';
     const stages = goal.decoder.kind === 'two-stage' ? goal.decoder.stages : [goal.decoder];
     if (stages.some((stage) => stage.kind === 'sum-product' && stage.designP === undefined)) {
       fields['goal.decoder.designP'] = 'a fixed p for sum-product to assume, since what fails must not depend on p';
@@ -56,6 +56,6 @@ function refuseBadGoal({ goal }: NewRun, lengths: ReadonlyMap<string, number>, f
     return;
   }
   goal?.curves.forEach(({ codeId }, i) => {
-    if (!lengths.has(codeId)) fields[`goal.curves.${i}.codeId`] = 'the id of a code of this project';
+    if (!lengths.has(codeId)) fields[`goal.curves.${i}.codeId`] = 'the id of a code of this project, with parity checks';
   });
 }
