@@ -23,8 +23,8 @@ const allowed: Record<string, readonly string[]> = {
   db: ['src/core', 'src/api', 'src/server', 'workers'],
 };
 
-/** Packages the engine may use: schemas, small mathematics, and the unpacking that two file formats need. */
-const enginePackages = [/^zod$/, /^@stdlib\//, /^fflate$/];
+/** Packages the engine may use: schemas and the unpacking that file formats need. */
+const enginePackages = [/^zod$/, /^fflate$/];
 
 const files = ['src', 'workers', 'db'].flatMap((folder) =>
   readdirSync(join(root, folder), { recursive: true, encoding: 'utf8' })
