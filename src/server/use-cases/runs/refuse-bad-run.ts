@@ -56,6 +56,7 @@ function refuseBadGoal({ goal }: NewRun, lengths: ReadonlyMap<string, number>, f
     return;
   }
   goal?.curves.forEach(({ codeId }, i) => {
-    if (!lengths.has(codeId)) fields[`goal.curves.${i}.codeId`] = 'the id of a code of this project, with parity checks';
+    if (!lengths.has(codeId))
+      fields[`goal.curves.${i}.codeId`] = 'the id of a code of this project, with parity checks';
   });
 }
