@@ -31,7 +31,8 @@ describe('the far end of every family of geometries', () => {
     ['projective-spread', { m: 11, q: 2, flat: 1 }],
     ['projective-spread', { m: 11, q: 2, flat: 5 }],
     ['hadamard', { order: 1024, t: 2 }],
-    ['hadamard', { order: 256, t: 3 }],
+    ['hadamard', { order: 1024, t: 3 }],
+    ['hadamard', { order: 1020, t: 3 }],
     ['transversal', { k: 256, g: 256 }],
   ])('%s %o', { timeout: 600_000 }, (family, params) => {
     const { t, v, b, k, lambda } = predictDesign({ family, params });

@@ -1,6 +1,7 @@
 import { LimitError, ParamError } from '../errors.ts';
 import { type BlockDesign, blockOf } from './block-design.ts';
 import { mapsBlocksOntoThemselves, orbitRepresentatives } from './block-symmetry.ts';
+import { isSelfComplementary } from './self-complementary.ts';
 import { binomial, type SubsetRanking, subsetOfRank, subsetRanking } from './subset-rank.ts';
 
 /** Counters one verification may hold: 2^28, that is 256 MiB at one byte a t-subset. */
@@ -34,6 +35,8 @@ export interface DesignCertificate {
  *  Counts every t-subset where that fits. A larger design with known symmetry has its generators verified first
  *  (each must map the blocks onto themselves); then only subsets through one point of every orbit are counted, which
  *  reaches every t-subset because each contains a point and some group element takes that point to its representative.
+ *  Failing that, blocks that are half the points and closed under complement need their (t − 1)-subsets counted only,
+ *  when t is odd (W. O. Alltop 1975, "Extending t-designs", J. Combin. Theory A 18).
  *  @throws ParamError for t outside 1..5 or lambda not a positive integer.
  *  @throws LimitError when more counters are needed than MAX_COUNTED_SUBSETS and no symmetry helps. */
 export function verifyDesign(design: BlockDesign, claim: { t: number; lambda: number }): DesignCertificate {
@@ -49,6 +52,8 @@ export function verifyDesign(design: BlockDesign, claim: { t: number; lambda: nu
   if (fits && b * binomial(k, t) <= MAX_DIRECT_INCREMENTS) return { ...base, ...countAll(design, t, lambda) };
   const symmetric = t >= 2 ? countThroughRepresentatives(design, t, lambda) : undefined;
   if (symmetric) return { ...base, ...symmetric };
+  const complementary = countThroughComplements(design, k, t, lambda);
+  if (complementary) return { ...base, ...complementary };
   if (!fits) throw new LimitError(`counting every ${t}-subset`, binomial(v, t), MAX_COUNTED_SUBSETS, 'counters');
   return { ...base, ...countAll(design, t, lambda) };
 }
@@ -105,6 +110,19 @@ function countThroughRepresentatives(design: BlockDesign, t: number, lambda: num
     `${generators.length} symmetry generator(s) verified to map the blocks onto themselves; then every ${t}-subset ` +
     `through one point of each of ${representatives.length} orbit(s) counted`;
   return verdict(design, lambda, failed, subsetsCounted, method);
+}
+
+/** With every complement of a block a block, as many blocks miss a set of t points as contain it; by inclusion and
+ *  exclusion the former, for odd t, is a sum over smaller subsets less the latter: so each is half of that sum. */
+function countThroughComplements(design: BlockDesign, k: number, t: number, lambda: number): Verdict | undefined {
+  const { v } = design;
+  const lower = (lambda * (v - t + 1)) / (k - t + 1);
+  if (t % 2 === 0 || t < 3 || 2 * k !== v || !Number.isInteger(lower) || !isSelfComplementary(design)) return undefined;
+  const { method, ...counted } = countAll(design, t - 1, lower);
+  return {
+    ...counted,
+    method: `the complement of every block found among the blocks; then ${method}, which for odd t = ${t} suffices (Alltop 1975)`,
+  };
 }
 
 function verdict(
