@@ -11,9 +11,12 @@ export function fileStorage(): Promise<FileStorage> {
   return shared;
 }
 
+/** Where released files lie on this disk; undefined when they are in a bucket. */
+export const filesFolder = (): string | undefined => (s3Settings() ? undefined : join(dataDir(), 'files'));
+
 async function open(): Promise<FileStorage> {
   const settings = s3Settings();
-  if (!settings) return diskStorage(join(dataDir(), 'files'));
+  if (!settings) return diskStorage(filesFolder()!);
   // Loaded only where it is used: the client is large.
   const { s3Storage } = await import('./s3-storage.ts');
   return s3Storage(settings);
