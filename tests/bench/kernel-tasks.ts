@@ -100,12 +100,17 @@ async function workerRows(): Promise<Row[]> {
   });
   const bsc = { kind: 'bsc', p: 0.012 } as const;
   await workers.run([order(0, 2e6, bsc), order(1, 2e6, bsc)]);
-  const one = await timed(() => workers.run([order(0, 1e7, bsc)]));
-  const two = await timed(() => workers.run([order(1, 1e7, bsc), order(2, 1e7, bsc)]));
+  // In turn, so that whatever else the machine does meets both alike.
+  const gains: number[] = [];
+  for (let index = 0; index < 15; index += 3) {
+    const one = await timed(() => workers.run([order(index, 1e7, bsc)]));
+    const two = await timed(() => workers.run([order(index + 1, 1e7, bsc), order(index + 2, 1e7, bsc)]));
+    gains.push((2 * one) / two);
+  }
   const rows: Row[] = [
     {
-      metric: 'two workers against one, PG(2,16) bit flipping',
-      value: (2 * one) / two,
+      metric: 'two workers against one, PG(2,16) bit flipping, median of 5',
+      value: gains.sort((x, y) => x - y)[2]!,
       unit: '×',
       must: 1.7,
       aim: 1.9,
@@ -114,7 +119,7 @@ async function workerRows(): Promise<Row[]> {
   ];
   const rare = { kind: 'bsc', p: 0.0051 } as const;
   let errors = 0;
-  let index = 10;
+  let index = 20;
   const direct = await timed(async () => {
     while (errors < 100) errors += await workers.run([order(index++, 1e7, rare), order(index++, 1e7, rare)]);
   });
