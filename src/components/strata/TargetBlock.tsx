@@ -21,7 +21,7 @@ export function TargetBlock({ row: { point, heaviest }, k, requirements }: Props
   return (
     <div className="grid min-w-0 gap-5 lg:grid-cols-2">
       <TitleBlock title={`At p = ${parameterText(point.p)}`} rows={rateRowsAt(point, k, requirements)} />
-      <div className="text-tiny">
+      <div className="min-w-0 text-tiny">
         <DataTable
           caption="Weights that decide there"
           columns={COLUMNS}

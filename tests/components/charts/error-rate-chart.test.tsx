@@ -67,7 +67,7 @@ describe('the error-rate chart', () => {
     const { svg } = show(threePoints);
     expect(svg.querySelector('title')?.textContent).toBe('Frame error rate, planes of order 16');
     expect(svg.querySelector('desc')?.textContent).toMatch(
-      /\(273,191\) Gallager B \(solid\): 3 points, from 3\.0.×.10⁻¹ at p = 0\.03 to <.4\.6.×.10⁻⁶ at p = 0\.01/,
+      /\(273,191\) Gallager B \(solid\): 3 points, from 0\.30 at p = 0\.03 to <.4\.6.×.10⁻⁶ at p = 0\.01/,
     );
   });
 
@@ -100,7 +100,7 @@ describe('the error-rate chart', () => {
     show(threePoints, { onChoose });
     const chart = screen.getByRole('group', { name: /Arrow keys/ });
     fireEvent.keyDown(chart, { key: 'ArrowRight' });
-    expect(screen.getByRole('status').textContent).toMatch(/p = 0\.03, FER 3\.00.×.10⁻¹.*3000 frame errors/);
+    expect(screen.getByRole('status').textContent).toMatch(/p = 0\.03, FER 0\.300.*3000 frame errors/);
     fireEvent.keyDown(chart, { key: 'ArrowRight' });
     expect(screen.getByRole('status').textContent).toMatch(/p = 0\.02.*50 frame errors in 10.000 frames, thin/);
     fireEvent.keyDown(chart, { key: 'End' });

@@ -8,6 +8,15 @@ describe('a rate in words', () => {
     expect(scientific(1e-15, 1)).toBe('10⁻¹⁵');
   });
 
+  it('of a hundredth and more is plain, its limits rounded outward all the same', () => {
+    expect(rateText({ value: 0.98886, lower: 0.98, upper: 0.99 }, 3)).toBe('0.989');
+    expect(rateText({ value: 1, lower: 0.99, upper: 1 })).toBe('1');
+    expect(rateText({ value: 0.0123, lower: 0.01, upper: 0.02 })).toBe('0.012');
+    expect(intervalText({ value: 0.9, lower: 0.8912, upper: 0.9112 })).toBe('0.89 – 0.92');
+    expect(intervalText({ value: 1, lower: 0.9997, upper: 1 })).toBe('0.99 – 1');
+    expect(intervalText({ value: 0.0101, lower: 0.0092, upper: 0.0112 })).toBe('9.2\u202f×\u202f10⁻³ – 0.012');
+  });
+
   it('with no error seen reads as a bound and never as 0', () => {
     expect(rateText({ value: null, lower: 0, upper: 2.9957e-6 })).toBe('<\u202f3.0\u202f×\u202f10⁻⁶');
     expect(intervalText({ value: null, lower: 0, upper: 2.9957e-6 })).toBe('<\u202f3.0\u202f×\u202f10⁻⁶');
