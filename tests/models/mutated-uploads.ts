@@ -96,19 +96,29 @@ export function readMutated(seed: string, count: number): Outcome {
     const { format, bytes } = sound[random.below(sound.length)]!;
     const file = mutate(bytes, random);
     const stated = random.below(3) === 0 ? undefined : format;
-    const from = performance.now();
-    try {
-      readUpload(file, stated);
-      outcome.read++;
-    } catch (error) {
+    const [elapsedMs, error] = readOnce(file, stated);
+    if (error === undefined) outcome.read++;
+    else {
       outcome.refused++;
       if (![FormatError, LimitError, ParamError].some((kind) => error instanceof kind))
         outcome.crashes.push(`${stated ?? 'any'} ${i}: ${String(error)}`);
     }
-    const elapsedMs = performance.now() - from;
     if (elapsedMs <= outcome.slowestMs) continue;
-    outcome.slowestMs = elapsedMs;
+    // Other programs can only lengthen an answer, so the quickest of three is what the file takes of itself.
+    const ownMs = Math.min(elapsedMs, readOnce(file, stated)[0], readOnce(file, stated)[0]);
+    if (ownMs <= outcome.slowestMs) continue;
+    outcome.slowestMs = ownMs;
     outcome.slowest = `${stated ?? 'any'} ${i}: ${Buffer.from(file).toString('latin1').slice(0, 300)}`;
   }
   return outcome;
+}
+
+function readOnce(file: Uint8Array, stated: UploadFormat | undefined): [elapsedMs: number, error?: unknown] {
+  const from = performance.now();
+  try {
+    readUpload(file, stated);
+    return [performance.now() - from];
+  } catch (error) {
+    return [performance.now() - from, error];
+  }
 }
