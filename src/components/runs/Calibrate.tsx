@@ -13,7 +13,7 @@ import type { Calibration } from '@/core/simulation/calibrate.ts';
 import { binomialInterval } from '@/core/statistics/binomial-interval.ts';
 import { Figure } from '../charts/Figure.tsx';
 import { intervalText, parameterText, rateText } from '../charts/rate-text.ts';
-import { numberOf } from './run-draft.ts';
+import { numberOf } from './number-of.ts';
 
 interface Props {
   codes: readonly Code[];

@@ -5,7 +5,8 @@ import { decoderCard } from '@/core/decoders/catalogue.ts';
 import { Calibrate } from './Calibrate.tsx';
 import { takenOver } from './calibrated.ts';
 import { MinSumFields } from './MinSumFields.tsx';
-import { type DecoderDraft, decoderOf, type FieldErrors, type OfferedDecoder } from './run-draft.ts';
+import type { FieldErrors } from './run-accepted.ts';
+import { type DecoderDraft, decoderOf, type OfferedDecoder } from './run-draft.ts';
 
 interface Props {
   kind: OfferedDecoder;

@@ -1,5 +1,6 @@
 import { NumberField, SelectField } from '@/components/ui/fields.tsx';
-import { type DecoderDraft, type FieldErrors, MIN_SUM_SCALES } from './run-draft.ts';
+import type { FieldErrors } from './run-accepted.ts';
+import { type DecoderDraft, MIN_SUM_SCALES } from './run-draft.ts';
 
 interface Props {
   draft: DecoderDraft;

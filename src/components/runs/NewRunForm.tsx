@@ -9,8 +9,11 @@ import { counted } from '@/components/ui/numbers.ts';
 import { WeightFields } from '../strata/WeightFields.tsx';
 import { CodeChoice } from './CodeChoice.tsx';
 import { DecoderFields } from './DecoderFields.tsx';
+import { CurveGoalFields, LimitGoalFields } from './GoalFields.tsx';
 import { PartError } from './PartError.tsx';
-import { type Judged, OFFERED_DECODERS } from './run-draft.ts';
+import { PlaceField } from './PlaceField.tsx';
+import type { FieldErrors } from './run-accepted.ts';
+import { type Judged, OFFERED_DECODERS, type RunDraft } from './run-draft.ts';
 import { StoppingFields } from './StoppingFields.tsx';
 import { SweepFields } from './SweepFields.tsx';
 import { useRunDraft } from './use-run-draft.ts';
@@ -26,11 +29,12 @@ export function NewRunForm({ projectId }: Props) {
   const requirements = useApi(endpoints.getRequirements, { params: { id: projectId } });
   const { draft, chosen, name, judged, change } = useRunDraft(codes.data?.codes, requirements.data?.requirements);
   const form = useRef<HTMLFormElement>(null);
+  const areStrata = draft.points === 'strata' || draft.points === 'limit';
   const { errors, refusal, isBusy, onSubmit } = useRunSubmission(
     projectId,
     judged,
     form,
-    draft.points === 'strata' ? draft.targetP : null,
+    areStrata ? draft.targetP : null,
   );
 
   return (
@@ -56,8 +60,8 @@ export function NewRunForm({ projectId }: Props) {
             draft={draft.decoders[kind]}
             errors={errors}
             codes={chosen}
-            trialP={draft.points === 'strata' ? draft.targetP : draft.from}
-            areStrata={draft.points === 'strata'}
+            trialP={areStrata ? draft.targetP : draft.from}
+            areStrata={areStrata}
             onChange={(part) =>
               change({ decoders: { ...draft.decoders, [kind]: { ...draft.decoders[kind], ...part } } })
             }
@@ -72,21 +76,25 @@ export function NewRunForm({ projectId }: Props) {
           onChange={(points) => change({ points })}
           choices={[
             { value: 'sweep', label: 'Sweep of p', note: 'frames as the channel sends them' },
-            {
-              value: 'strata',
-              label: 'Weight strata',
-              note: 'by number of errors: the whole curve, with rigorous limits',
-            },
+            { value: 'curve', label: 'Planned curve', note: 'points placed as results come in' },
+            { value: 'strata', label: 'Weight strata', note: 'by number of errors: the whole curve, rigorous limits' },
+            { value: 'limit', label: 'Show a limit', note: 'such as UBER ≤ 1e-15 at one p' },
           ]}
         />
-        {draft.points === 'sweep' ? (
-          <SweepFields draft={draft} errors={errors} sweep={judged.sweep} onChange={change} />
-        ) : (
-          <WeightFields draft={draft} errors={errors} weights={judged.weights} onChange={change} />
-        )}
+        <PointFields draft={draft} errors={errors} judged={judged} onChange={change} />
       </Part>
       <Part title="Stopping, shards and seed">
         <StoppingFields draft={draft} errors={errors} onChange={change} />
+      </Part>
+      <Part title="Place">
+        <div className="max-w-md">
+          <PlaceField
+            label="Computed"
+            value={draft.place}
+            error={errors.place}
+            onChange={(place) => change({ place })}
+          />
+        </div>
       </Part>
       <Part title="Name">
         <TextField
@@ -107,15 +115,36 @@ export function NewRunForm({ projectId }: Props) {
         <Button kind="primary" type="submit" busy={isBusy}>
           State the run
         </Button>
-        <p className="text-quiet">{countText(judged, draft.codeIds.length)} It is computed in this browser.</p>
+        <p className="text-quiet">{countText(judged, draft)}</p>
       </div>
     </form>
   );
 }
 
+interface PointProps {
+  draft: RunDraft;
+  errors: FieldErrors;
+  judged: Judged;
+  onChange: (change: Partial<RunDraft>) => void;
+}
+
+function PointFields({ draft, errors, judged, onChange }: PointProps) {
+  switch (draft.points) {
+    case 'sweep':
+      return <SweepFields draft={draft} errors={errors} sweep={judged.sweep} onChange={onChange} />;
+    case 'strata':
+      return <WeightFields draft={draft} errors={errors} weights={judged.weights} onChange={onChange} />;
+    case 'curve':
+      return <CurveGoalFields draft={draft} errors={errors} onChange={onChange} />;
+    case 'limit':
+      return <LimitGoalFields draft={draft} errors={errors} onChange={onChange} />;
+  }
+}
+
 /** "12 points, at most 6 000 shards." */
-function countText({ points, mostShards }: Judged, codes: number): string {
-  if (points === 0) return `${counted(codes, 'code')} chosen, no points yet.`;
+function countText({ points, mostShards }: Judged, draft: RunDraft): string {
+  if (draft.points === 'curve' || draft.points === 'limit') return 'The planner places the points.';
+  if (points === 0) return `${counted(draft.codeIds.length, 'code')} chosen, no points yet.`;
   const shards = mostShards === null ? '' : `, at most ${counted(mostShards, 'shard')}`;
   return `${counted(points, 'point')}${shards}.`;
 }

@@ -1,7 +1,8 @@
 import { ChoiceGroup } from '@/components/ui/ChoiceGroup.tsx';
 import { NumberField, TextAreaField } from '@/components/ui/fields.tsx';
 import { parameterText } from '../charts/rate-text.ts';
-import type { FieldErrors, RunDraft } from './run-draft.ts';
+import type { FieldErrors } from './run-accepted.ts';
+import type { RunDraft } from './run-draft.ts';
 
 interface Props {
   draft: RunDraft;

@@ -1,7 +1,10 @@
-import { type NewRun, newRunSchema } from '@/api/runs.ts';
+import { type Goal, type NewRun, newRunSchema, type Place } from '@/api/runs.ts';
 import { logSweep, parseList } from '@/client/curves/sweep.ts';
 import type { Channel } from '@/core/channels/channel.ts';
 import type { DecoderSpec } from '@/core/decoders/decoder-spec.ts';
+import { goalErrors, goalField, goalOf } from './goal-draft.ts';
+import { numberOf } from './number-of.ts';
+import { ACCEPTED, type FieldErrors } from './run-accepted.ts';
 
 /** The decoders offered, in the order of the form. */
 export const OFFERED_DECODERS = [
@@ -41,8 +44,8 @@ export interface RunDraft {
   name: string;
   codeIds: readonly string[];
   decoders: Record<OfferedDecoder, DecoderDraft>;
-  /** What the points are: values of p, or numbers of errors. */
-  points: 'sweep' | 'strata';
+  /** What the points are: values of p, or numbers of errors; stated one by one, or left to the planner. */
+  points: 'sweep' | 'curve' | 'strata' | 'limit';
   sweep: 'spaced' | 'listed';
   from: string;
   to: string;
@@ -51,12 +54,21 @@ export interface RunDraft {
   weightFrom: string;
   weightTo: string;
   framesPerWeight: string;
-  /** At which p the curve of the strata is to be read first. */
+  /** At which p the curve of the strata is to be read first, or the limit to be shown. */
   targetP: string;
+  /** Of a planned curve. */
+  mostPoints: string;
+  /** Of a limit to be shown: which rate keeps it, and with which confidence. */
+  limitRate: 'fer' | 'uber';
+  limitTarget: string;
+  limitLevel: string;
+  place: Place;
   seed: string;
   framesPerShard: string;
   frameErrors: string;
   maxFrames: string;
+  /** Seconds of work on the whole run; empty: as long as it takes. */
+  seconds: string;
 }
 
 export const MOST_SWEEP_POINTS = 200;
@@ -97,38 +109,17 @@ export const emptyDraft = (): RunDraft => ({
   weightTo: '20',
   framesPerWeight: '100000',
   targetP: '0.01',
+  mostPoints: '12',
+  limitRate: 'fer',
+  limitTarget: '1e-9',
+  limitLevel: '0.95',
+  place: 'browser',
   seed: '',
   framesPerShard: '2000',
   frameErrors: '100',
   maxFrames: '1000000',
+  seconds: '',
 });
-
-/** What each field would accept, by its path in the form. */
-export const ACCEPTED = {
-  name: 'a name of 1 to 120 characters',
-  codeIds: 'at least one code',
-  decoders: 'at least one decoder',
-  from: 'a crossover probability above 0 and at most 0.5',
-  to: 'a crossover probability above 0 and at most 0.5',
-  count: `a whole number of points from 1 to ${MOST_SWEEP_POINTS}`,
-  list: 'crossover probabilities above 0 and at most 0.5, parted by spaces or commas',
-  weightFrom: 'a whole number of errors from 0, not above the last weight',
-  weightTo: `a whole number of errors up to the shortest code’s length, at most ${MOST_WEIGHTS} weights in all`,
-  framesPerWeight: 'a whole number of frames from 1 to 1 000 000 000 000',
-  targetP: 'a crossover probability above 0 and at most 0.5',
-  seed: 'a text of 1 to 200 characters',
-  framesPerShard: 'a whole number of frames from 1 to 10 000 000',
-  frameErrors: 'a whole number of frame errors from 1 to 1 000 000',
-  maxFrames: 'a whole number of frames from 1 to 1 000 000 000 000',
-  iterations: 'a whole number of iterations from 1 to 1000',
-  threshold: 'a whole number of checks from 1, or nothing for the default',
-  designP: 'a probability above 0 and below 0.5, or nothing for the channel’s own',
-  statedP: 'a stated p above 0 and below 0.5: what fails at one weight must not depend on the channel’s own',
-  c: 'a whole number from 1 to 126, or nothing for the default',
-  rMax: 'a whole number from 1 to 126, or nothing for the largest that cannot saturate',
-} as const;
-
-export type FieldErrors = Partial<Record<string, string>>;
 
 export interface Judged {
   /** Ready to send; null while something is not accepted. */
@@ -150,29 +141,32 @@ export function judgeDraft(draft: RunDraft, proposedName: string, shortest = Num
   const areStrata = draft.points === 'strata';
   const { channels, sweep, weights, errors: channelErrors } = channelsOf(draft, shortest);
   const chosen = OFFERED_DECODERS.filter((kind) => draft.decoders[kind].isChosen);
+  const decoders = chosen.map((kind) => decoderOf(kind, draft.decoders[kind]));
+  const goal = goalOf(draft, draft.codeIds, decoders);
   const candidate = {
     name: draft.name.trim() || proposedName,
     seed: draft.seed,
     framesPerShard: numberOf(draft.framesPerShard),
     stopping: stoppingOf(draft),
-    place: 'browser',
+    place: draft.place,
+    ...(goal && { goal }),
     points: draft.codeIds.flatMap((codeId) =>
-      chosen.flatMap((kind) =>
-        channels.map((channel) => ({ codeId, channel, decoder: decoderOf(kind, draft.decoders[kind]) })),
-      ),
+      decoders.flatMap((decoder) => channels.map((channel) => ({ codeId, channel, decoder }))),
     ),
   };
   const errors: FieldErrors = { ...channelErrors };
-  if (draft.codeIds.length === 0) errors.codeIds = ACCEPTED.codeIds;
-  if (chosen.length === 0) errors.decoders = ACCEPTED.decoders;
   const parsed = newRunSchema.safeParse(candidate);
   for (const issue of parsed.error?.issues ?? [])
-    Object.assign(errors, errorAt(issue.path.map(String), candidate.points));
-  if (areStrata) {
-    if (errors.maxFrames) errors.framesPerWeight = ACCEPTED.framesPerWeight;
+    Object.assign(errors, errorAt(issue.path.map(String), candidate.points, goal));
+  if (draft.codeIds.length === 0) errors.codeIds = ACCEPTED.codeIds;
+  if (chosen.length === 0) errors.decoders = ACCEPTED.decoders;
+  Object.assign(errors, goalErrors(draft, decoders));
+  if (areStrata && errors.maxFrames) {
+    errors.framesPerWeight = ACCEPTED.framesPerWeight;
     delete errors.maxFrames;
-    if (chosen.includes('sum-product') && draft.decoders['sum-product'].designP.trim() === '')
-      errors['sum-product.designP'] = ACCEPTED.statedP;
+  }
+  if ((areStrata || draft.points === 'limit') && chosen.includes('sum-product')) {
+    if (draft.decoders['sum-product'].designP.trim() === '') errors['sum-product.designP'] = ACCEPTED.statedP;
   }
   // Without codes there is no proposed name yet; that is told at the codes.
   if (draft.codeIds.length === 0 && draft.name.trim() === '') delete errors.name;
@@ -187,10 +181,14 @@ export function judgeDraft(draft: RunDraft, proposedName: string, shortest = Num
   };
 }
 
-/** Strata end at a set number of frames: their limits are exact for such samples, not for those that stop on errors. */
-function stoppingOf(draft: RunDraft): { frameErrors?: number; maxFrames: number } {
-  if (draft.points === 'strata') return { maxFrames: numberOf(draft.framesPerWeight) };
-  return { frameErrors: numberOf(draft.frameErrors), maxFrames: numberOf(draft.maxFrames) };
+/** Strata end at a set number of frames: their limits are exact for such samples, not for those that stop on errors.
+ *  The planner of a limit sets the frames of each stage itself, up to the cap. */
+function stoppingOf(draft: RunDraft): NewRun['stopping'] {
+  const seconds = draft.seconds.trim() === '' ? {} : { seconds: numberOf(draft.seconds) };
+  if (draft.points === 'strata') return { maxFrames: numberOf(draft.framesPerWeight), ...seconds };
+  const frameErrors =
+    draft.points === 'limit' || draft.frameErrors.trim() === '' ? {} : { frameErrors: numberOf(draft.frameErrors) };
+  return { ...frameErrors, maxFrames: numberOf(draft.maxFrames), ...seconds };
 }
 
 interface DraftChannels {
@@ -201,6 +199,8 @@ interface DraftChannels {
 }
 
 function channelsOf(draft: RunDraft, shortest: number): DraftChannels {
+  // The planner chooses them.
+  if (draft.points === 'curve' || draft.points === 'limit') return { channels: [], sweep: [], weights: [], errors: {} };
   if (draft.points === 'sweep') {
     const { sweep, errors } = readSweep(draft);
     return { channels: sweep.map((p) => ({ kind: 'bsc', p })), sweep, weights: [], errors };
@@ -223,7 +223,8 @@ function readWeights(draft: RunDraft, shortest: number): { weights: readonly num
 /** Puts a refusal of the server, "points.3.decoder.threshold" or "framesPerShard", at the field it belongs to. */
 export function serverErrors(fields: Readonly<Record<string, string>>, run: NewRun): FieldErrors {
   const errors: FieldErrors = {};
-  for (const [path, accepted] of Object.entries(fields)) errors[fieldOf(path.split('.'), run.points ?? [])] = accepted;
+  for (const [path, accepted] of Object.entries(fields))
+    errors[fieldOf(path.split('.'), run.points ?? [], run.goal)] = accepted;
   return errors;
 }
 
@@ -231,16 +232,17 @@ interface Pointed {
   decoder: { kind: string };
 }
 
-function errorAt(path: readonly string[], points: readonly Pointed[]): FieldErrors {
-  const field = fieldOf(path, points);
+function errorAt(path: readonly string[], points: readonly Pointed[], goal: Goal | null): FieldErrors {
+  const field = fieldOf(path, points, goal);
   const last = field.split('.').at(-1)!;
   const accepted = ACCEPTED[last as keyof typeof ACCEPTED];
   // An empty list of points is told at the codes, the decoders or the sweep that left it empty.
   return accepted === undefined ? {} : { [field]: accepted };
 }
 
-function fieldOf(path: readonly string[], points: readonly Pointed[]): string {
+function fieldOf(path: readonly string[], points: readonly Pointed[], goal: Goal | null | undefined): string {
   const [head, index, part, inner] = path;
+  if (head === 'goal') return goalField(goal, path.slice(1));
   if (head === 'stopping' && index !== undefined) return index;
   if (head !== 'points' || index === undefined) return head ?? '';
   if (part === 'decoder') return `${points[Number(index)]?.decoder.kind}.${inner ?? ''}`;
@@ -264,12 +266,6 @@ export function decoderOf(kind: OfferedDecoder, draft: DecoderDraft): DecoderSpe
 
 const optional = <K extends string>(key: K, text: string): { [P in K]?: number } =>
   text.trim() === '' ? {} : ({ [key]: numberOf(text) } as { [P in K]: number });
-
-/** A number as people type it: spaces between groups and 1e6 are fine; anything else is no number. */
-export const numberOf = (text: string): number => {
-  const plain = text.replaceAll(/[\s\u2009\u202f]/g, '');
-  return plain === '' ? Number.NaN : Number(plain);
-};
 
 function readSweep(draft: RunDraft): { sweep: readonly number[]; errors: FieldErrors } {
   const inRange = (p: number) => p > 0 && p <= 0.5;

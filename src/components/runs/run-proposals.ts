@@ -28,6 +28,15 @@ export function proposedSweep(requirements: Requirements | null | undefined): { 
   return { from: String(Number(Math.min(0.5, channel.p * 3).toPrecision(3))), to: String(channel.p) };
 }
 
+/** The required rate: UBER where one is stated, else FER. */
+export function proposedLimit(
+  requirements: Requirements | null | undefined,
+): Pick<RunDraft, 'limitRate' | 'limitTarget'> | null {
+  const { targetUber, targetFer } = requirements ?? {};
+  if (targetUber !== undefined) return { limitRate: 'uber', limitTarget: String(targetUber) };
+  return targetFer === undefined ? null : { limitRate: 'fer', limitTarget: String(targetFer) };
+}
+
 /** Weights from the first that a decoder of large column weights may fail at up to where hardly a frame of p is
  *  heavier; the chosen codes' own limits where they differ. */
 export function proposedWeights(
@@ -51,6 +60,6 @@ export function proposedName(draft: RunDraft, codes: readonly Pick<Code, 'id' | 
     decoderShortName({ kind }),
   );
   if (names.length === 0) return '';
-  const strata = draft.points === 'strata' ? ', strata' : '';
-  return `${names.join('; ')}: ${decoders.join(', ')}`.slice(0, 120 - strata.length) + strata;
+  const what = { sweep: '', curve: ', planned', strata: ', strata', limit: ', limit' }[draft.points];
+  return `${names.join('; ')}: ${decoders.join(', ')}`.slice(0, 120 - what.length) + what;
 }

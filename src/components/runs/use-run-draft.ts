@@ -1,8 +1,16 @@
 import { useEffect, useMemo, useState } from 'react';
 import type { Code } from '@/api/codes.ts';
 import type { Requirements } from '@/api/projects.ts';
-import { emptyDraft, judgeDraft, numberOf, OFFERED_DECODERS, type RunDraft } from './run-draft.ts';
-import { freshSeed, proposedFramesPerShard, proposedName, proposedSweep, proposedWeights } from './run-proposals.ts';
+import { numberOf } from './number-of.ts';
+import { emptyDraft, judgeDraft, OFFERED_DECODERS, type RunDraft } from './run-draft.ts';
+import {
+  freshSeed,
+  proposedFramesPerShard,
+  proposedLimit,
+  proposedName,
+  proposedSweep,
+  proposedWeights,
+} from './run-proposals.ts';
 
 /** The form's state, its proposals and its verdict. A proposal gives way to what was typed. */
 export function useRunDraft(codes: readonly Code[] | undefined, requirements: Requirements | null | undefined) {
@@ -20,10 +28,11 @@ export function useRunDraft(codes: readonly Code[] | undefined, requirements: Re
     const sweep = proposedSweep(requirements);
     const chosen = chosenOf(codes, typed.codeIds ?? base.codeIds);
     const targetP = sweep ? { targetP: sweep.to } : {};
+    const limit = { ...proposedLimit(requirements), ...(typed.points === 'limit' && { maxFrames: '1e8' }) };
     const frames = chosen.length > 0 ? { framesPerShard: String(proposedFramesPerShard(chosen)) } : {};
     const known = codes && { codeIds: chosen.map((code) => code.id) };
     const weights = proposedWeights(chosen, numberOf(typed.targetP ?? sweep?.to ?? base.targetP));
-    return { ...base, ...sweep, ...targetP, ...frames, ...weights, ...addressed, ...typed, ...known };
+    return { ...base, ...sweep, ...targetP, ...limit, ...frames, ...weights, ...addressed, ...typed, ...known };
   }, [base, addressed, typed, codes, requirements]);
 
   const name = proposedName(draft, codes ?? []);

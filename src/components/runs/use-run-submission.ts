@@ -2,7 +2,9 @@ import { type FormEvent, type RefObject, useState } from 'react';
 import { endpoints } from '@/api/endpoints.ts';
 import { ApiFailure, call } from '@/client/api.ts';
 import { paths } from '@/paths.ts';
-import { type FieldErrors, type Judged, numberOf, serverErrors } from './run-draft.ts';
+import { numberOf } from './number-of.ts';
+import type { FieldErrors } from './run-accepted.ts';
+import { type Judged, serverErrors } from './run-draft.ts';
 
 /** Sends the run when the form is accepted and goes to its page; otherwise goes to the first field that is not. Errors
  *  are shown from the first try on and vanish as they are mended.

@@ -10,7 +10,7 @@ import { wholeNumber } from '@/components/ui/numbers.ts';
 import { type Allocation, allocateShards } from '@/core/simulation/stratum-planning.ts';
 import { paths } from '@/paths.ts';
 import { parameterText } from '../charts/rate-text.ts';
-import { numberOf } from '../runs/run-draft.ts';
+import { numberOf } from '../runs/number-of.ts';
 
 interface Props {
   evidence: StrataEvidence;

@@ -5,7 +5,7 @@ import type { StrataEvidence } from '@/client/strata/use-strata-evidence.ts';
 import { NumberField, SelectField } from '@/components/ui/fields.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
 import { useUrlParam } from '../charts/url-state.ts';
-import { numberOf } from '../runs/run-draft.ts';
+import { numberOf } from '../runs/number-of.ts';
 import { NextFrames } from './NextFrames.tsx';
 import { RateTable } from './RateTable.tsx';
 import { rateRows } from './rate-rows.ts';

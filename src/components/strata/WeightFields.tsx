@@ -1,6 +1,7 @@
 import { NumberField } from '@/components/ui/fields.tsx';
 import { counted } from '@/components/ui/numbers.ts';
-import type { FieldErrors, RunDraft } from '../runs/run-draft.ts';
+import type { FieldErrors } from '../runs/run-accepted.ts';
+import type { RunDraft } from '../runs/run-draft.ts';
 
 interface Props {
   draft: RunDraft;

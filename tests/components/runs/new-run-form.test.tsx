@@ -2,6 +2,7 @@ import { cleanup, fireEvent, render, screen, waitFor } from '@testing-library/re
 import { SWRConfig } from 'swr';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import type { Code } from '@/api/codes.ts';
+import type { Fleet } from '@/api/fleet.ts';
 import { type NewRun, newRunSchema } from '@/api/runs.ts';
 import { NewRunForm } from '@/components/runs/NewRunForm.tsx';
 
@@ -25,6 +26,8 @@ const code: Code = {
   createdBy: 'engineer',
 };
 
+const noFleet: Fleet = { redis: 'off', release: '0.1.0', serverThreads: 2, machines: [] };
+
 /** A server that holds one code and answers a posted run as told. */
 function server(answer: (run: NewRun) => Response) {
   const posted: NewRun[] = [];
@@ -34,6 +37,7 @@ function server(answer: (run: NewRun) => Response) {
       return answer(posted.at(-1)!);
     }
     if (address.includes('/codes')) return Response.json({ codes: [code] });
+    if (address.includes('/fleet')) return Response.json(noFleet);
     return Response.json({ requirements: { targetFer: 1e-6, channel: { kind: 'bsc', p: 0.004 } }, updatedAt: null });
   });
   return posted;
@@ -93,8 +97,30 @@ describe('the form of a new run', () => {
     expect(document.body.textContent).toContain('Nothing was stored.');
   });
 
+  it('states a limit to be shown on the server, in place of points', async () => {
+    const posted = server(() => refusal({ 'goal.p': 'a smaller p' }));
+    fireEvent.click(await show());
+    fireEvent.click(screen.getByLabelText(/Show a limit/));
+    await waitFor(() => expect((screen.getByLabelText('At p') as HTMLInputElement).value).toBe('0.004'));
+    expect((screen.getByLabelText('Limit') as HTMLInputElement).value).toBe('0.000001');
+    const place = screen.getByLabelText('Computed') as HTMLSelectElement;
+    await waitFor(() => expect(place.textContent).toContain('on a fleet (the server has no REDIS_URL)'));
+    fireEvent.change(place, { target: { value: 'server' } });
+    state();
+    await waitFor(() => expect(posted).toHaveLength(1));
+    expect(posted[0]).toMatchObject({
+      goal: { kind: 'limit', codeId: 'c1', decoder: { kind: 'gallager-b' }, p: 0.004, rate: 'fer', target: 1e-6 },
+      place: 'server',
+      points: [],
+      stopping: { maxFrames: 1e8 },
+    });
+    await screen.findByText('a smaller p', { exact: false });
+    expect(screen.getByLabelText('At p').getAttribute('aria-invalid')).toBe('true');
+  });
+
   it('offers the way to a first code where there is none', async () => {
-    vi.stubGlobal('fetch', async () => Response.json({ codes: [], requirements: null, updatedAt: null }));
+    const nothing = { codes: [], requirements: null, updatedAt: null };
+    vi.stubGlobal('fetch', async (address: string) => Response.json(address.includes('/fleet') ? noFleet : nothing));
     render(
       <SWRConfig value={{ provider: () => new Map() }}>
         <NewRunForm projectId="p1" />

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { emptyDraft, judgeDraft, numberOf, type RunDraft, serverErrors } from '@/components/runs/run-draft.ts';
+import { numberOf } from '@/components/runs/number-of.ts';
+import { emptyDraft, judgeDraft, type RunDraft, serverErrors } from '@/components/runs/run-draft.ts';
 import { proposedFramesPerShard, proposedName, proposedSweep } from '@/components/runs/run-proposals.ts';
 import { prefilled } from '@/components/runs/use-run-draft.ts';
 
@@ -35,7 +36,8 @@ describe('a run in the form', () => {
   it.each([
     ['framesPerShard', '0', 'framesPerShard'],
     ['framesPerShard', '1.5', 'framesPerShard'],
-    ['frameErrors', '', 'frameErrors'],
+    ['frameErrors', '0', 'frameErrors'],
+    ['seconds', '0.5', 'seconds'],
     ['maxFrames', '1e13', 'maxFrames'],
     ['from', '0.6', 'from'],
     ['to', '0', 'to'],
@@ -46,6 +48,11 @@ describe('a run in the form', () => {
     const { run, errors } = judgeDraft(draft({ [field]: text }), 'x');
     expect(run).toBeNull();
     expect(errors[at]).toMatch(/^(a|at|crossover) /);
+  });
+
+  it('without a number of errors ends its points at their frames, and with seconds the run in time', () => {
+    const { run } = judgeDraft(draft({ frameErrors: '', seconds: '60' }), 'x');
+    expect(run?.stopping).toEqual({ maxFrames: 1e6, seconds: 60 });
   });
 
   it('names a bad parameter of a decoder at that decoder', () => {
@@ -111,5 +118,36 @@ describe('what the form proposes', () => {
     const { decoders } = prefilled('?decoder=sum-product,majority-logic');
     expect(decoders?.['sum-product'].isChosen).toBe(true);
     expect(decoders?.['gallager-b'].isChosen).toBe(false);
+  });
+});
+
+describe('a goal in the form', () => {
+  it('of a curve is every code with every decoder, its points left to the planner', () => {
+    const chosen = draft({ points: 'curve', from: '0.02', to: '0.004', mostPoints: '9' });
+    chosen.decoders['sum-product'].isChosen = true;
+    const { run, points, errors } = judgeDraft(chosen, 'x');
+    expect([points, errors]).toEqual([0, {}]);
+    expect(run).toMatchObject({ goal: { kind: 'curve', from: 0.02, to: 0.004, points: 9 }, points: [] });
+    expect(run?.goal?.kind === 'curve' && run.goal.curves).toHaveLength(4);
+    expect(judgeDraft(draft({ points: 'curve', from: '0.001', to: '0.004' }), 'x').errors.from).toMatch(
+      /above the last/,
+    );
+    expect(judgeDraft(draft({ points: 'curve', mostPoints: '1' }), 'x').errors.mostPoints).toMatch(/from 2 to 200/);
+  });
+
+  it('of a limit is for one code and one decoder, that does not know p', () => {
+    const limit = (change: Partial<RunDraft> = {}) => draft({ points: 'limit', codeIds: ['c1'], ...change });
+    expect(judgeDraft(limit(), 'x').run?.goal).toEqual({
+      kind: 'limit',
+      codeId: 'c1',
+      decoder: { kind: 'gallager-b', iterations: 20 },
+      ...{ p: 0.01, rate: 'fer', target: 1e-9, level: 0.95 },
+    });
+    const { errors } = judgeDraft(draft({ points: 'limit', limitTarget: '2', limitLevel: '1' }), 'x');
+    expect(Object.keys(errors).sort()).toEqual(['codeIds', 'limitLevel', 'limitTarget']);
+    const soft = limit();
+    soft.decoders['gallager-b'].isChosen = false;
+    soft.decoders['sum-product'].isChosen = true;
+    expect(judgeDraft(soft, 'x').errors['sum-product.designP']).toMatch(/stated p/);
   });
 });
