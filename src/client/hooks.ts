@@ -3,7 +3,11 @@ import useSWR, { type SWRConfiguration, type SWRResponse, useSWRConfig } from 's
 import type { z } from 'zod';
 import type { Endpoint } from '@/api/endpoint.ts';
 import { endpoints } from '@/api/endpoints.ts';
+import { runEventSchema } from '@/api/runs.ts';
 import { type ApiFailure, addressOf, type CallInput, call } from './api.ts';
+import { mergeRunEvent, type RunEvent } from './merge-run-event.ts';
+
+const askEveryMs = 5000;
 
 /** The answer of a GET endpoint, cached by address and refreshed on focus; `null` input waits. */
 export function useApi<E extends Endpoint>(
@@ -18,13 +22,26 @@ export function useApi<E extends Endpoint>(
   );
 }
 
-/** Refreshes a run's cached answer whenever the server says that it changed. */
+/** Keeps a run's cached answer up to date by the server's word; while that does not come, by asking. */
 export function useRunEvents(runId: string): void {
   const { mutate } = useSWRConfig();
   useEffect(() => {
+    const key = addressOf(endpoints.getRun, { params: { id: runId } });
     const source = new EventSource(`/api/v1/runs/${encodeURIComponent(runId)}/events`);
-    const refresh = () => void mutate(addressOf(endpoints.getRun, { params: { id: runId } }));
-    source.addEventListener('run', refresh);
-    return () => source.close();
+    const take = ({ data }: MessageEvent<string>) => {
+      const event = runEventSchema.safeParse(JSON.parse(data));
+      if (!event.success) return void mutate(key);
+      // What is not fetched yet comes whole.
+      const merge = (known: RunEvent | undefined) => known && mergeRunEvent(known, event.data);
+      void mutate(key, merge, { revalidate: false });
+    };
+    source.addEventListener('run', take);
+    const asking = setInterval(() => {
+      if (source.readyState !== EventSource.OPEN) void mutate(key);
+    }, askEveryMs);
+    return () => {
+      clearInterval(asking);
+      source.close();
+    };
   }, [runId, mutate]);
 }

@@ -20,9 +20,12 @@ import { useUrlParam } from '../charts/url-state.ts';
 import { useChartAddress } from '../charts/use-chart-address.ts';
 import { StrataBench } from '../strata/StrataBench.tsx';
 import { Caution } from './Caution.tsx';
+import { GoalBlock } from './GoalBlock.tsx';
 import { PointDetail } from './PointDetail.tsx';
 import { PointsTable } from './PointsTable.tsx';
+import { RestOfRun } from './RestOfRun.tsx';
 import { RunTitleBlock } from './RunTitleBlock.tsx';
+import { SourceTables } from './SourceTables.tsx';
 import { fileStem, saveFile } from './save-file.ts';
 
 interface Props {
@@ -84,7 +87,9 @@ export function RunBench({ projectId, run, points, canRun, panel }: Props) {
         />
       </div>
       <div className="grid min-w-0 content-start gap-5 wide:row-span-2">
+        <GoalBlock run={run} />
         {panel}
+        {canRun && <RestOfRun run={run} />}
         {requirement && <RequirementTable curves={curves} requirement={requirement} />}
         <RunTitleBlock run={run} points={points} />
         <Caution />
@@ -118,6 +123,9 @@ export function RunBench({ projectId, run, points, canRun, panel }: Props) {
           <ButtonLink kind="quiet" size="small" href={`${paths.compare(projectId)}?run=${run.id}`}>
             Compare these curves
           </ButtonLink>
+        </div>
+        <div className="mt-7">
+          <SourceTables run={run} points={points} />
         </div>
       </div>
     </div>

@@ -8,6 +8,7 @@ import { RunBench } from './RunBench.tsx';
 import { RunPanel } from './RunPanel.tsx';
 import { percentText, storedFraction } from './run-progress.ts';
 import { useDocumentTitle } from './use-document-title.ts';
+import { useProgressIcon } from './use-progress-icon.ts';
 import { WatchPanel } from './WatchPanel.tsx';
 
 interface Props {
@@ -48,14 +49,21 @@ function DrivenRun({ projectId, run, points }: BenchProps) {
   const driver = useRunDriver(run, points);
   const isAtWork = driver.status === 'running' || driver.status === 'pausing';
   useDocumentTitle(
-    driver.status === 'waiting-for-server' ? 'waiting' : isAtWork ? percentText(driver.fractionDone) : null,
+    driver.status === 'waiting-for-server'
+      ? 'waiting'
+      : isAtWork
+        ? percentText(driver.fractionDone)
+        : titleText(storedShare(run, points)),
   );
+  useProgressIcon(isAtWork ? driver.fractionDone : storedShare(run, points));
   const panel = <RunPanel run={run} points={points} driver={driver} />;
   return <RunBench projectId={projectId} run={run} points={points} canRun panel={panel} />;
 }
 
 function WatchedRun({ projectId, run, points }: BenchProps) {
-  useDocumentTitle(run.state === 'running' ? percentText(storedFraction(run, points)) : null);
+  const share = storedShare(run, points);
+  useDocumentTitle(titleText(share));
+  useProgressIcon(share);
   return (
     <RunBench
       projectId={projectId}
@@ -66,3 +74,9 @@ function WatchedRun({ projectId, run, points }: BenchProps) {
     />
   );
 }
+
+/** Of a run that others work on, as its title and icon show it. */
+const storedShare = (run: Run, points: readonly Point[]): number | null =>
+  run.state === 'running' ? storedFraction(run, points) : null;
+
+const titleText = (share: number | null): string | null => (share === null ? null : percentText(share));

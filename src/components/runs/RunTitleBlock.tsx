@@ -3,7 +3,7 @@ import { counted } from '@/components/ui/numbers.ts';
 import { TitleBlock, type TitleRow } from '@/components/ui/TitleBlock.tsx';
 import { INTERVAL_METHOD } from '../charts/interval-method.ts';
 import { levelText } from '../charts/rate-text.ts';
-import { STATE_WORD } from './run-progress.ts';
+import { PLACE, STATE_WORD } from './run-progress.ts';
 import { stoppingRules } from './stopping-text.ts';
 
 interface Props {
@@ -47,12 +47,6 @@ export function RunTitleBlock({ run, points }: Props) {
   ];
   return <TitleBlock title="Run" rows={rows} />;
 }
-
-const PLACE: Record<Run['place'], string> = {
-  browser: 'in the browser',
-  server: 'on the server',
-  fleet: 'on the fleet',
-};
 
 /** The same on the server and in every browser: "2026-12-01 05:00 UTC". */
 export const dateText = (iso: string): string => `${iso.slice(0, 10)} ${iso.slice(11, 16)} UTC`;

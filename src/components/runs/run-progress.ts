@@ -63,3 +63,9 @@ export const STATE_WORD: Record<Run['state'], string> = {
   stopped: 'Stopped',
   finished: 'Finished',
 };
+
+export const PLACE: Record<Run['place'], string> = {
+  browser: 'in the browser',
+  server: 'on the server',
+  fleet: 'on the fleet',
+};
