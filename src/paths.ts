@@ -6,6 +6,7 @@ export const paths = {
   notices: '/account/notices',
   mailOff: '/account/mail-off',
   mailbox: '/mailbox',
+  fleet: '/fleet',
   openApi: '/api/v1/openapi.json',
   letter: (id: string) => `/mailbox/${id}`,
   project: (id: string) => `/projects/${id}`,

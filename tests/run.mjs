@@ -71,11 +71,12 @@ function install(packages) {
   spawnSync('apt-get', ['install', '-y', '-qq', '--no-install-recommends', ...packages], options);
 }
 
-function ensureChromium() {
-  if (existsSync('/usr/bin/chromium')) return true;
-  install(['chromium']);
-  if (existsSync('/usr/bin/chromium')) return true;
-  console.error('The browser tests need Chromium: apt-get install chromium');
+/** A program without which some tests cannot run: what is missing counts as a failure. */
+function ensure(packageName, path, what) {
+  if (existsSync(path)) return true;
+  install([packageName]);
+  if (existsSync(path)) return true;
+  console.error(`${what}: apt-get install ${packageName}`);
   totals.failed += 1;
   return false;
 }
@@ -101,10 +102,11 @@ await check('types', process.execPath, ['node_modules/astro/astro.js', 'check', 
 await check('lint', process.execPath, ['node_modules/@biomejs/biome/bin/biome', 'ci', '.']);
 await check('build', process.execPath, ['src/server/start/start.mjs', '--build-only']);
 await vitest('engine', 'core');
+ensure('redis-server', '/usr/bin/redis-server', 'The tests of the fleet need Redis');
 await vitest('server and client', 'server');
 await vitest('components', 'components');
 if (ensureClients()) await vitest('programs that load our files', 'clients');
-if (ensureChromium()) await vitest('browser', 'browser');
+if (ensure('chromium', '/usr/bin/chromium', 'The browser tests need Chromium')) await vitest('browser', 'browser');
 
 rmSync(reports, { recursive: true, force: true });
 console.log(`\n${totals.passed} passed, ${totals.failed} failed`);

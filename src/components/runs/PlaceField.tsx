@@ -4,6 +4,7 @@ import type { Place } from '@/api/runs.ts';
 import { useApi } from '@/client/hooks.ts';
 import { SelectField } from '@/components/ui/fields.tsx';
 import { counted } from '@/components/ui/numbers.ts';
+import { paths } from '@/paths.ts';
 
 interface Props {
   label: string;
@@ -22,7 +23,14 @@ export function PlaceField({ label, value, error, disabled, onChange }: Props) {
       value={value}
       error={error}
       disabled={disabled}
-      hint={PLACE_HINT[value]}
+      hint={
+        <>
+          {PLACE_HINT[value]};{' '}
+          <a className="link" href={paths.fleet}>
+            places
+          </a>
+        </>
+      }
       choices={[
         { value: 'browser', label: 'in this browser' },
         {
