@@ -40,7 +40,8 @@ const telling = [
   '\u00ff',
 ];
 
-function mutate(bytes: Uint8Array, random: SeededRandom): Uint8Array {
+/** A file damaged in one to four places. */
+export function mutate(bytes: Uint8Array, random: SeededRandom): Uint8Array {
   let out: Uint8Array = bytes.slice();
   for (let times = 1 + random.below(4); times > 0; times--) {
     const at = random.below(out.length + 1);

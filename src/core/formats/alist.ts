@@ -1,4 +1,4 @@
-import { type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
+import { rowOf, type SparseMatrix, transpose } from '../codes/sparse-matrix.ts';
 import { type FileBytes, sizeOf } from './byte-source.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
 import { TextScanner } from './text-scanner.ts';
@@ -45,10 +45,9 @@ export function readAlist(file: FileBytes): SparseMatrix {
     throw scan.error(`row weights that sum to ${ones}, as the column weights do`, String(sum(rowWeights)));
   refuseBeyondLimits(rows, cols, ones);
   if (4 * ones > sizeOf(file)) throw scan.error('as many ones as the file has room for', String(ones));
-  const columns = readLists(scan, columnWeights, maxColumnWeight, rows, 'column');
-  const matrix = readLists(scan, rowWeights, maxRowWeight, cols, 'row');
+  const matrix = transpose(readColumns(scan, columnWeights, maxColumnWeight, rows));
+  compareRows(scan, matrix, rowWeights, maxRowWeight);
   if (!scan.atEnd()) throw scan.error('the end of the file', scan.tokenAt());
-  refuseDifference(scan, transpose(columns), matrix);
   return matrix;
 }
 
@@ -107,40 +106,55 @@ function readWeights(
   return weights;
 }
 
-/** One list a line. A line holds exactly the weight's entries, or as many more zeros as pad it to the largest weight. */
-function readLists(scan: TextScanner, weights: Uint32Array, width: number, limit: number, what: string): SparseMatrix {
+/** The columns as rows of a matrix. */
+function readColumns(scan: TextScanner, weights: Uint32Array, width: number, limit: number): SparseMatrix {
   const rowStart = new Uint32Array(weights.length + 1);
   for (let i = 0; i < weights.length; i++) rowStart[i + 1] = rowStart[i]! + weights[i]!;
   const colIndex = new Uint32Array(rowStart[weights.length]!);
-  for (let i = 0; i < weights.length; i++) {
-    if (weights[i]! > 0) scan.atEnd();
-    else scan.nextLineIfAtEnd();
-    const entries = colIndex.subarray(rowStart[i], rowStart[i + 1]);
-    const anEntry = `one of ${entries.length} entries of ${what} ${i + 1}, from 1 to ${limit}`;
-    for (let j = 0; j < entries.length; j++) {
-      const entry = scan.number(anEntry, false);
-      if (entry < 1 || entry > limit)
-        throw scan.error(`an index from 1 to ${limit} in ${what} ${i + 1}; indices count from 1`, String(entry));
-      entries[j] = entry - 1;
-    }
-    for (let pad = entries.length; !scan.atLineEnd(); pad++) {
-      const entry = scan.number('padding with 0', false);
-      if (entry !== 0 || pad >= width)
-        throw scan.error(`${entries.length} entries in ${what} ${i + 1}, then zeros up to ${width}`, String(entry));
-    }
-    entries.sort();
-    for (let j = 1; j < entries.length; j++)
-      if (entries[j] === entries[j - 1])
-        throw scan.error(`distinct indices in ${what} ${i + 1}`, `${entries[j]! + 1} twice`);
-  }
+  for (let i = 0; i < weights.length; i++)
+    readList(scan, colIndex.subarray(rowStart[i], rowStart[i + 1]), width, limit, 'column', i);
   return { rows: weights.length, cols: limit, rowStart, colIndex };
 }
 
-function refuseDifference(scan: TextScanner, byColumns: SparseMatrix, byRows: SparseMatrix): void {
-  for (let e = 0; e < byRows.colIndex.length; e++) {
-    if (byColumns.colIndex[e] !== byRows.colIndex[e])
-      throw scan.error('row lists that say the same ones as the column lists', 'lists that disagree');
+/** Reads the row lists, which say again what the column lists said, and holds them against the matrix one by one. */
+function compareRows(scan: TextScanner, H: SparseMatrix, weights: Uint32Array, width: number): void {
+  const scratch = new Uint32Array(Math.min(width, H.cols));
+  for (let i = 0; i < H.rows; i++) {
+    const entries = scratch.subarray(0, weights[i]!);
+    readList(scan, entries, width, H.cols, 'row', i);
+    const row = rowOf(H, i);
+    if (row.length !== entries.length || row.some((column, j) => column !== entries[j]))
+      throw scan.error('row lists that say the same ones as the column lists', `others in row ${i + 1}`);
   }
+}
+
+/** One list a line, which holds exactly the weight's entries, or as many more zeros as pad it to the largest weight. */
+function readList(
+  scan: TextScanner,
+  entries: Uint32Array,
+  width: number,
+  limit: number,
+  what: string,
+  i: number,
+): void {
+  if (entries.length > 0) scan.atEnd();
+  else scan.nextLineIfAtEnd();
+  const anEntry = `one of ${entries.length} entries of ${what} ${i + 1}, from 1 to ${limit}`;
+  for (let j = 0; j < entries.length; j++) {
+    const entry = scan.number(anEntry, false);
+    if (entry < 1 || entry > limit)
+      throw scan.error(`an index from 1 to ${limit} in ${what} ${i + 1}; indices count from 1`, String(entry));
+    entries[j] = entry - 1;
+  }
+  for (let pad = entries.length; !scan.atLineEnd(); pad++) {
+    const entry = scan.number('padding with 0', false);
+    if (entry !== 0 || pad >= width)
+      throw scan.error(`${entries.length} entries in ${what} ${i + 1}, then zeros up to ${width}`, String(entry));
+  }
+  entries.sort();
+  for (let j = 1; j < entries.length; j++)
+    if (entries[j] === entries[j - 1])
+      throw scan.error(`distinct indices in ${what} ${i + 1}`, `${entries[j]! + 1} twice`);
 }
 
 const sum = (weights: Uint32Array) => weights.reduce((total, w) => total + w, 0);

@@ -1,9 +1,10 @@
 import { type BlockDesign, blockOf } from '../designs/block-design.ts';
-import { FormatError } from '../errors.ts';
-import type { BlockList } from './block-list.ts';
-import { decodeText } from './decode-text.ts';
-import { parseJson } from './json.ts';
-import { refuseBeyondLimits } from './matrix-limits.ts';
+import type { FileBytes } from './byte-source.ts';
+import { readLists } from './json.ts';
+import { JsonScanner } from './json-scanner.ts';
+import { keepLists, ListCount, type ListVisitor } from './lists-read-twice.ts';
+import { matrixLimits, refuseBeyondLimits } from './matrix-limits.ts';
+import type { ScanMark } from './text-scanner.ts';
 
 /** The design as `{points, countedFrom: 0, blockCount, blocks: [[…], …], classes?}`, one block a line, after anything
  *  that says where it comes from. */
@@ -24,38 +25,59 @@ export function writeBlockListJson(
   return new TextEncoder().encode(text);
 }
 
-/** Reads such a file; other keys are passed over. `points` may be left out when counting starts at 0.
- *  @throws FormatError with the place of a syntax error or the name of a wrong key; LimitError on size. */
-export function readBlockListJson(bytes: Uint8Array): BlockList {
-  const text = decodeText(bytes);
-  const value = (parseJson(text) ?? {}) as Record<'points' | 'blocks' | 'classes' | 'countedFrom', unknown>;
-  const { points, blocks, classes, countedFrom = 0 } = value;
-  const wrong = (key: string, expected: string, found: unknown) => {
-    const line = text.slice(0, Math.max(0, text.indexOf(`"${key}"`))).split('\n').length;
-    return new FormatError(line, 1, `"${key}" to be ${expected}`, (JSON.stringify(found) ?? 'nothing').slice(0, 40));
-  };
-  if (countedFrom !== 0 && countedFrom !== 1) throw wrong('countedFrom', '0 or 1', countedFrom);
-  if (!Array.isArray(blocks) || blocks.length === 0) throw wrong('blocks', 'a list of lists of points', blocks);
-  if (points !== undefined && !isIndex(points)) throw wrong('points', 'a whole number', points);
-  refuseBeyondLimits(blocks.length, (points as number | undefined) ?? 0, 0);
-  let incidences = 0;
-  let largest = -1;
-  const lists = blocks.map((block: unknown, i) => {
-    if (!Array.isArray(block) || !block.every((p) => isIndex(p) && p >= countedFrom))
-      throw wrong('blocks', `lists of points from ${countedFrom} (block ${i})`, block);
-    const list = Uint32Array.from(block as number[], (p) => p - countedFrom).sort();
-    if (list.some((p, j) => j > 0 && p === list[j - 1])) throw wrong('blocks', `distinct points (block ${i})`, block);
-    incidences += list.length;
-    largest = Math.max(largest, list.at(-1) ?? -1);
-    refuseBeyondLimits(0, largest + 1, incidences);
-    return list;
+/** Reads such a file where it lies; other keys are passed over. `points` may be left out when counting starts at 0.
+ *  @throws FormatError with the place of what is wrong; LimitError on size. */
+export function readBlockListJson(file: FileBytes): BlockDesign {
+  const scan = new JsonScanner(file);
+  const stated: Record<string, { value: number; line: number }> = {};
+  const count = new ListCount();
+  const classes: number[] = [];
+  let place: ScanMark | undefined;
+  let classLine = 0;
+  scan.object((key) => {
+    const { line } = scan.text;
+    if (key === 'points' || key === 'countedFrom')
+      stated[key] = { value: scan.wholeNumber(`"${key}" to be a whole number`), line };
+    else if (key === 'blocks') {
+      place = scan.text.mark();
+      readBlocks(scan, count);
+    } else if (key === 'classes') {
+      classLine = line;
+      readClasses(scan, classes);
+    } else scan.skipValue();
   });
-  if (points !== undefined && largest >= (points as number))
-    throw wrong('blocks', `lists of points below ${points}`, largest + countedFrom);
-  if (classes !== undefined && (!Array.isArray(classes) || classes.length !== lists.length || !classes.every(isIndex)))
-    throw wrong('classes', `${lists.length} class numbers, one a block`, classes);
-  const v = (points as number | undefined) ?? largest + 1;
-  return { v, blocks: lists, ...(classes !== undefined && { classes: Uint32Array.from(classes as number[]) }) };
+  const wrong = (key: string, expected: string, found: unknown) =>
+    scan.text.errorAtLine(stated[key]?.line ?? place?.line ?? 1, `"${key}" to be ${expected}`, String(found));
+  const points = stated.points?.value;
+  const base = stated.countedFrom?.value ?? 0;
+  if (base > 1) throw wrong('countedFrom', '0 or 1', base);
+  if (!place || count.lists === 0) throw wrong('blocks', 'a list of lists of points', place ? '[]' : 'nothing');
+  if (count.least < base) throw wrong('blocks', `lists of points from ${base}`, count.least);
+  const v = points ?? count.largest - base + 1;
+  refuseBeyondLimits(count.lists, v, count.items);
+  if (count.largest - base >= v) throw wrong('blocks', `lists of points below ${v + base}`, count.largest);
+  if (classLine > 0 && classes.length !== count.lists)
+    throw scan.text.errorAtLine(
+      classLine,
+      `"classes" to be ${count.lists} class numbers, one a block`,
+      String(classes.length),
+    );
+  scan.text.reset(place);
+  const { start, items } = keepLists(
+    count,
+    base,
+    (visit) => readBlocks(scan, visit),
+    (expected, found, block) => scan.text.error(`"blocks" to be ${expected} points (block ${block})`, found),
+  );
+  const design = { v, b: count.lists, blockStart: start, blockPoints: items };
+  return classLine > 0 ? { ...design, classes: Uint32Array.from(classes) } : design;
 }
 
-const isIndex = (x: unknown): x is number => Number.isInteger(x) && (x as number) >= 0 && (x as number) < 2 ** 32;
+const readBlocks = (scan: JsonScanner, visit: ListVisitor) => readLists(scan, visit, 'blocks', 'points');
+
+function readClasses(scan: JsonScanner, classes: number[]): void {
+  scan.list('"classes" to be a list of class numbers', () => {
+    if (classes.length === matrixLimits.rows) refuseBeyondLimits(classes.length + 1, 0, 0);
+    classes.push(scan.wholeNumber('"classes" to be whole numbers from 0'));
+  });
+}

@@ -1,14 +1,18 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { ParamError } from '../errors.ts';
 import { readAlist, writeAlist } from './alist.ts';
-import { readCHeader, writeCHeader } from './c-header.ts';
+import type { FileBytes } from './byte-source.ts';
+import { writeCHeader } from './c-header.ts';
+import { readCHeader } from './c-header-read.ts';
 import { readCsv, writeCsv } from './csv.ts';
 import { readJson, writeJson } from './json.ts';
-import { readMat, writeMat } from './mat.ts';
+import { writeMat } from './mat.ts';
+import { readMat } from './mat-read.ts';
 import { readMatrixMarket, writeMatrixMarket } from './matrix-market.ts';
 import { maxDenseCells, readNpy, writeNpy } from './npy.ts';
 import { readNpz, writeNpz } from './npz.ts';
-import { circulantBlockSize, readQuasiCyclic, writeQuasiCyclic } from './quasi-cyclic.ts';
+import { circulantBlockSize, writeQuasiCyclic } from './quasi-cyclic.ts';
+import { readQuasiCyclic } from './quasi-cyclic-read.ts';
 
 /** One file format of a parity-check matrix, both ways. */
 export interface MatrixFormatCodec {
@@ -19,7 +23,8 @@ export interface MatrixFormatCodec {
   /** Whether this matrix can be written so; left out when every matrix can. */
   writes?(H: SparseMatrix): boolean;
   write(H: SparseMatrix): Uint8Array;
-  read(bytes: Uint8Array): SparseMatrix;
+  /** From a file in memory, or from one that is read piece by piece where it lies. */
+  read(file: FileBytes): SparseMatrix;
 }
 
 /** Every format, in the order shown. A format is added by one file here and one entry below. */
@@ -97,4 +102,4 @@ export const exportMatrix = (H: SparseMatrix, format: string): Uint8Array => mat
 
 /** The matrix out of a file. @throws ParamError on an unknown format, FormatError with the place of what is wrong,
  *  LimitError on a size that passes what is read here. */
-export const importMatrix = (bytes: Uint8Array, format: string): SparseMatrix => matrixFormat(format).read(bytes);
+export const importMatrix = (file: FileBytes, format: string): SparseMatrix => matrixFormat(format).read(file);

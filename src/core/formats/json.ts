@@ -1,7 +1,9 @@
-import { matrixFromRows, type SparseMatrix } from '../codes/sparse-matrix.ts';
-import { FormatError, ParamError } from '../errors.ts';
-import { decodeText } from './decode-text.ts';
+import type { SparseMatrix } from '../codes/sparse-matrix.ts';
+import type { FileBytes } from './byte-source.ts';
+import { JsonScanner } from './json-scanner.ts';
+import { keepLists, ListCount, type ListVisitor } from './lists-read-twice.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
+import type { ScanMark } from './text-scanner.ts';
 
 /** The matrix as `{rows, columns, ones, countedFrom: 0, onesByRow: [[…], …]}`, one row a line, after anything that says
  *  where it comes from. */
@@ -15,54 +17,54 @@ export function writeJson(H: SparseMatrix, provenance: Readonly<Record<string, u
   return new TextEncoder().encode(text);
 }
 
-/** Reads such a file; other keys are passed over.
- *  @throws FormatError with the place of a syntax error or the name of a wrong key; LimitError on size. */
-export function readJson(bytes: Uint8Array): SparseMatrix {
-  const text = decodeText(bytes);
-  const value = parseJson(text) as { columns?: unknown; rows?: unknown; countedFrom?: unknown; onesByRow?: unknown };
-  const { columns, rows, onesByRow, countedFrom = 0 } = value ?? {};
-  const lineOf = (key: string) => text.slice(0, Math.max(0, text.indexOf(`"${key}"`))).split('\n').length;
+/** Reads such a file where it lies; other keys are passed over, and keys may stand in any order.
+ *  @throws FormatError with the place of what is wrong; LimitError on size. */
+export function readJson(file: FileBytes): SparseMatrix {
+  const scan = new JsonScanner(file);
+  const stated: Record<string, { value: number; line: number }> = {};
+  const count = new ListCount();
+  let place: ScanMark | undefined;
+  scan.object((key) => {
+    const { line } = scan.text;
+    if (key === 'columns' || key === 'rows' || key === 'countedFrom')
+      stated[key] = { value: scan.wholeNumber(`"${key}" to be a whole number`), line };
+    else if (key === 'onesByRow') {
+      place = scan.text.mark();
+      readRows(scan, count);
+    } else scan.skipValue();
+  });
   const wrong = (key: string, expected: string, found: unknown) =>
-    new FormatError(lineOf(key), 1, `"${key}" to be ${expected}`, (JSON.stringify(found) ?? 'nothing').slice(0, 40));
-  if (!isCount(columns)) throw wrong('columns', 'a whole number from 1', columns);
-  if (!Array.isArray(onesByRow)) throw wrong('onesByRow', 'a list of lists of columns', onesByRow);
-  if (rows !== undefined && rows !== onesByRow.length)
-    throw wrong('rows', `${onesByRow.length}, the lists given`, rows);
-  if (countedFrom !== 0 && countedFrom !== 1) throw wrong('countedFrom', '0 or 1', countedFrom);
-  if (onesByRow.length === 0) throw wrong('onesByRow', 'at least one row', onesByRow);
-  const isList = (row: unknown): row is number[] =>
-    Array.isArray(row) && row.every((c) => Number.isInteger(c) && c >= countedFrom);
-  const bad = onesByRow.findIndex((row) => !isList(row));
-  if (bad >= 0) throw wrong('onesByRow', `lists of columns from ${countedFrom} (row ${bad})`, onesByRow[bad]);
-  const lists = onesByRow as number[][];
-  refuseBeyondLimits(
-    lists.length,
-    columns,
-    lists.reduce((sum, row) => sum + row.length, 0),
+    scan.text.errorAtLine(stated[key]?.line ?? place?.line ?? 1, `"${key}" to be ${expected}`, String(found));
+  const { columns, rows, countedFrom } = stated;
+  const base = countedFrom?.value ?? 0;
+  if (!columns || columns.value < 1) throw wrong('columns', 'a whole number from 1', columns?.value ?? 'nothing');
+  if (!place) throw wrong('onesByRow', 'a list of lists of columns', 'nothing');
+  if (rows && rows.value !== count.lists) throw wrong('rows', `${count.lists}, the lists given`, rows.value);
+  if (base > 1) throw wrong('countedFrom', '0 or 1', base);
+  if (count.lists === 0) throw wrong('onesByRow', 'at least one row', '[]');
+  refuseBeyondLimits(count.lists, columns.value, count.items);
+  if (count.least < base) throw wrong('onesByRow', `lists of columns from ${base}`, count.least);
+  if (count.largest >= columns.value + base)
+    throw wrong('onesByRow', `lists of columns up to ${columns.value - 1 + base}`, count.largest);
+  scan.text.reset(place);
+  const { start, items } = keepLists(
+    count,
+    base,
+    (visit) => readRows(scan, visit),
+    (expected, found, row) => scan.text.error(`"onesByRow" to be ${expected} columns in rows[${row}]`, found),
   );
-  try {
-    return matrixFromRows(columns, countedFrom === 0 ? lists : lists.map((row) => row.map((c) => c - 1)));
-  } catch (error) {
-    if (error instanceof ParamError) throw wrong('onesByRow', `${error.accepted} in ${error.param}`, error.given);
-    throw error;
-  }
+  return { rows: count.lists, cols: columns.value, rowStart: start, colIndex: items };
 }
 
-const isCount = (x: unknown): x is number => Number.isInteger(x) && (x as number) >= 1;
-
-/** @throws FormatError with the place of a syntax error. */
-export function parseJson(text: string): unknown {
-  try {
-    return JSON.parse(text.replace(/^\uFEFF/, ''));
-  } catch (error) {
-    const message = (error as Error).message;
-    const at = Number(/position (\d+)/.exec(message)?.[1] ?? text.length);
-    const before = text.slice(0, at).split('\n');
-    throw new FormatError(
-      before.length,
-      before.at(-1)!.length + 1,
-      'JSON',
-      JSON.stringify(text.slice(at, at + 12)) || 'the end',
-    );
-  }
+/** A list of lists of whole numbers. */
+export function readLists(scan: JsonScanner, visit: ListVisitor, key: string, what: string): void {
+  const item = `"${key}" to be lists of ${what}, whole numbers from 0`;
+  const readItem = () => visit.item(scan.wholeNumber(item));
+  scan.list(`"${key}" to be a list of lists of ${what}`, () => {
+    visit.begin();
+    scan.list(item, readItem);
+    visit.end();
+  });
 }
+
+const readRows = (scan: JsonScanner, visit: ListVisitor) => readLists(scan, visit, 'onesByRow', 'columns');

@@ -1,6 +1,10 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { FormatError, LimitError } from '../errors.ts';
+import { type FileBytes, sizeOf } from './byte-source.ts';
+import { type ByteStream, fileStream, readFully } from './byte-stream.ts';
+import { matrixFromEntries } from './matrix-from-entries.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
+import { isNumberKind, NumberStream } from './number-stream.ts';
 
 /** Cells that a dense file may have: 2^28, one byte each. */
 export const maxDenseCells = 2 ** 28;
@@ -25,17 +29,29 @@ export function encodeNpy(array: NpyArray): Uint8Array {
   return bytes;
 }
 
-/** @throws FormatError on anything that is not a version 1 to 3 .npy file. */
-export function decodeNpy(bytes: Uint8Array, name = 'the file'): NpyArray {
+/** What stands before the elements of an array. */
+export interface NpyHead {
+  shape: number[];
+  descr: string;
+  fortranOrder: boolean;
+}
+
+/** Bytes that the header may have; the arrays read here say little. */
+const LONGEST_HEADER = 1 << 16;
+
+/** Reads magic, version and header, and leaves the stream at the first element.
+ *  @throws FormatError on anything that is not a version 1 to 3 .npy file. */
+export function readNpyHead(stream: ByteStream, name = 'the file'): NpyHead {
   const wrong = (expected: string, found: string) => new FormatError(1, 1, `${name}: ${expected}`, found);
-  if (bytes.length < 12 || bytes[0] !== 0x93 || String.fromCharCode(...bytes.subarray(1, 6)) !== 'NUMPY')
-    throw wrong('the magic bytes of a .npy file', bytes.length === 0 ? 'an empty file' : 'other bytes');
-  const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.length);
-  const longHeader = bytes[6]! >= 2;
-  const from = longHeader ? 12 : 10;
-  const to = from + (longHeader ? view.getUint32(8, true) : view.getUint16(8, true));
-  if (to > bytes.length) throw wrong('a whole header', 'the end of the file');
-  const header = new TextDecoder().decode(bytes.subarray(from, to));
+  const begun = readFully(stream, 8);
+  if (begun[0] !== 0x93 || String.fromCharCode(...begun.subarray(1, 6)) !== 'NUMPY')
+    throw wrong('the magic bytes of a .npy file', begun.length === 0 ? 'an empty file' : 'other bytes');
+  const lengthBytes = readFully(stream, begun[6]! >= 2 ? 4 : 2);
+  const length = lengthBytes.reduceRight((sum, byte) => 256 * sum + byte, 0);
+  if (length > LONGEST_HEADER) throw new LimitError(`header of ${name}`, length, LONGEST_HEADER, 'bytes');
+  const bytes = readFully(stream, length);
+  if (bytes.length < length || length === 0) throw wrong('a whole header', 'the end of the file');
+  const header = new TextDecoder().decode(bytes);
   const descr = /'descr'\s*:\s*'([^']{1,8})'/.exec(header)?.[1];
   const order = /'fortran_order'\s*:\s*(True|False)/.exec(header)?.[1];
   const shape = /'shape'\s*:\s*\(([\d,\sL]*)\)/.exec(header)?.[1];
@@ -46,34 +62,19 @@ export function decodeNpy(bytes: Uint8Array, name = 'the file'): NpyArray {
     .map((part) => part.trim())
     .filter((part) => part !== '')
     .map((part) => Number.parseInt(part, 10));
-  return { shape: sizes, descr, fortranOrder: order === 'True', data: bytes.subarray(to) };
+  return { shape: sizes, descr, fortranOrder: order === 'True' };
 }
 
-const readers: Record<string, { size: number; get(view: DataView, at: number): number }> = {
-  b1: { size: 1, get: (v, at) => v.getUint8(at) },
-  u1: { size: 1, get: (v, at) => v.getUint8(at) },
-  i1: { size: 1, get: (v, at) => v.getInt8(at) },
-  u2: { size: 2, get: (v, at) => v.getUint16(at, true) },
-  i2: { size: 2, get: (v, at) => v.getInt16(at, true) },
-  u4: { size: 4, get: (v, at) => v.getUint32(at, true) },
-  i4: { size: 4, get: (v, at) => v.getInt32(at, true) },
-  u8: { size: 8, get: (v, at) => Number(v.getBigUint64(at, true)) },
-  i8: { size: 8, get: (v, at) => Number(v.getBigInt64(at, true)) },
-  f4: { size: 4, get: (v, at) => v.getFloat32(at, true) },
-  f8: { size: 8, get: (v, at) => v.getFloat64(at, true) },
-};
-
-/** Reads element i of an array. @throws FormatError on a type other than little-endian numbers and booleans, or when the
- *  data is shorter than the shape says. */
-export function npyElements(array: NpyArray, name = 'the file'): { count: number; at(i: number): number } {
-  const reader = /^[<|]/.test(array.descr) ? readers[array.descr.slice(1)] : undefined;
-  if (!reader) throw new FormatError(1, 1, `${name}: little-endian numbers or booleans`, `type ${array.descr}`);
-  const count = array.shape.reduce((product, size) => product * size, 1);
-  if (array.data.length < count * reader.size)
-    throw new FormatError(1, 1, `${name}: ${count * reader.size} bytes of data`, `${array.data.length} bytes`);
-  const view = new DataView(array.data.buffer, array.data.byteOffset, array.data.length);
-  return { count, at: (i) => reader.get(view, i * reader.size) };
+/** The elements that follow a header, in the order of the file.
+ *  @throws FormatError on a type other than little-endian numbers and booleans. */
+export function npyNumbers(stream: ByteStream, { descr }: NpyHead, name = 'the file'): NumberStream {
+  const kind = descr.slice(1) === 'b1' ? 'u1' : descr.slice(1);
+  if (!/^[<|]/.test(descr) || !isNumberKind(kind))
+    throw new FormatError(1, 1, `${name}: little-endian numbers or booleans`, `type ${descr}`);
+  return new NumberStream(stream, kind);
 }
+
+export const npyCount = ({ shape }: NpyHead): number => shape.reduce((product, size) => product * size, 1);
 
 /** The matrix as a dense array of bytes 0 and 1, row by row. @throws LimitError when it has more than 2^28 cells. */
 export function writeNpy(H: SparseMatrix): Uint8Array {
@@ -85,27 +86,39 @@ export function writeNpy(H: SparseMatrix): Uint8Array {
   return encodeNpy({ shape: [H.rows, H.cols], descr: '|u1', fortranOrder: false, data });
 }
 
-/** Reads a two-dimensional array of zeros and ones of any number type, in either order.
+/** Reads a two-dimensional array of zeros and ones of any number type, in either order, where it lies.
  *  @throws FormatError naming the cell that is neither; LimitError on size. */
-export function readNpy(bytes: Uint8Array): SparseMatrix {
-  const array = decodeNpy(bytes);
-  const [rows, cols] = array.shape;
-  if (array.shape.length !== 2 || !rows || !cols)
-    throw new FormatError(1, 1, 'an array with two dimensions, both at least 1', `shape (${array.shape.join(', ')})`);
+export function readNpy(file: FileBytes): SparseMatrix {
+  const open = () => fileStream(file, 0, sizeOf(file));
+  const head = readNpyHead(open());
+  const [rows, cols] = head.shape;
+  if (head.shape.length !== 2 || !rows || !cols)
+    throw new FormatError(1, 1, 'an array with two dimensions, both at least 1', `shape (${head.shape.join(', ')})`);
   refuseDense(rows, cols);
-  const elements = npyElements(array);
-  const rowStart = new Uint32Array(rows + 1);
-  const colIndex: number[] = [];
-  for (let i = 0; i < rows; i++) {
-    for (let j = 0; j < cols; j++) {
-      const value = elements.at(array.fortranOrder ? j * rows + i : i * cols + j);
-      if (value === 1) colIndex.push(j);
-      else if (value !== 0) throw new FormatError(i + 1, j + 1, 'a cell that is 0 or 1', String(value));
+  const lines = head.fortranOrder ? cols : rows;
+  const cells = head.fortranOrder ? rows : cols;
+  const each = (visit: (row: number, col: number) => void) => {
+    const stream = open();
+    readNpyHead(stream);
+    const numbers = npyNumbers(stream, head);
+    for (let line = 0; line < lines; line++) {
+      for (let cell = 0; cell < cells; cell++) {
+        const value = numbers.next();
+        if (value === 0) continue;
+        const [row, col] = head.fortranOrder ? [cell, line] : [line, cell];
+        if (value !== 1) throw notACell(row, col, value, numbers.given, rows * cols);
+        visit(row, col);
+      }
     }
-    rowStart[i + 1] = colIndex.length;
-  }
-  refuseBeyondLimits(rows, cols, colIndex.length);
-  return { rows, cols, rowStart, colIndex: Uint32Array.from(colIndex) };
+  };
+  const place = { error: (expected: string, found: string) => new FormatError(1, 1, expected, found) };
+  return matrixFromEntries(rows, cols, { each }, place);
+}
+
+function notACell(row: number, col: number, value: number, given: number, cells: number): FormatError {
+  if (Number.isNaN(value) && given < cells)
+    return new FormatError(1, 1, `${cells} elements`, `the end of the file after ${given}`);
+  return new FormatError(row + 1, col + 1, 'a cell that is 0 or 1', String(value));
 }
 
 function refuseDense(rows: number, cols: number): void {

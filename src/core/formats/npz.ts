@@ -1,13 +1,20 @@
-import { unzipSync, zipSync } from 'fflate';
+import { zipSync } from 'fflate';
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
-import { FormatError, LimitError } from '../errors.ts';
-import { pairedEntries } from './entries.ts';
+import { FormatError } from '../errors.ts';
+import type { FileBytes } from './byte-source.ts';
+import { type ByteStream, readFully } from './byte-stream.ts';
+import type { Entries } from './entries.ts';
 import { matrixFromEntries } from './matrix-from-entries.ts';
 import { matrixLimits, refuseBeyondLimits } from './matrix-limits.ts';
-import { decodeNpy, encodeNpy, npyElements } from './npy.ts';
+import { encodeNpy, npyCount, npyNumbers, readNpyHead } from './npy.ts';
+import type { NumberStream } from './number-stream.ts';
+import { type ZipMember, zipMembers } from './zip-archive.ts';
 
 /** Bytes that one array inside the archive may unpack to. */
 const maxMemberBytes = 8 * matrixLimits.ones + 4096;
+const names: ReadonlySet<string> = new Set(
+  ['format', 'shape', 'data', 'indices', 'indptr', 'row', 'col'].map((name) => `${name}.npy`),
+);
 /** The one time written into archives, so that the same matrix has the same bytes: the first a zip can hold. */
 const fixedTime = new Date(1980, 0, 1);
 
@@ -29,86 +36,136 @@ export function writeNpz(H: SparseMatrix): Uint8Array {
   );
 }
 
-/** Reads compressed rows, compressed columns and coordinate lists whose stored values are 0 or 1.
+/** Reads compressed rows, compressed columns and coordinate lists whose stored values are 0 or 1, member by member where
+ *  they lie.
  *  @throws FormatError saying what is missing or wrong; LimitError on a member or a matrix beyond the limits. */
-export function readNpz(bytes: Uint8Array): SparseMatrix {
-  const members = unpack(bytes);
-  const member = (name: string) => {
-    const data = members[`${name}.npy`];
-    if (!data)
-      throw new FormatError(
-        1,
-        1,
-        `a member ${name}.npy in the archive`,
-        `only ${Object.keys(members).join(', ') || 'none'}`,
-      );
-    return decodeNpy(data, `${name}.npy`);
-  };
-  const list = (name: string) => npyElements(member(name), `${name}.npy`);
-  const kind = new TextDecoder().decode(member('format').data).replace(/\0/g, '');
-  const shape = list('shape');
-  const [rows, cols] = [shape.at(0), shape.at(1)];
-  if (shape.count !== 2 || !(rows >= 1) || !(cols >= 1))
-    throw new FormatError(1, 1, 'a shape of two sizes from 1', 'another');
-  const data = list('data');
-  refuseBeyondLimits(rows, cols, data.count);
-  const pairs =
-    kind === 'coo'
-      ? { a: list('row'), b: list('col') }
-      : { a: expandPointers(kind, list('indptr'), data.count, kind === 'csc' ? cols : rows), b: list('indices') };
-  const swap = kind === 'csc';
-  const rowOf = new Uint32Array(data.count);
-  const colOf = new Uint32Array(data.count);
-  let count = 0;
-  for (let e = 0; e < data.count; e++) {
-    const value = data.at(e);
-    if (value !== 0 && value !== 1) throw new FormatError(1, 1, 'stored values 0 or 1', String(value));
-    const row = (swap ? pairs.b : pairs.a).at(e);
-    const col = (swap ? pairs.a : pairs.b).at(e);
-    if (!(row >= 0 && row < rows && col >= 0 && col < cols))
-      throw new FormatError(1, 1, `entries inside ${rows} × ${cols}`, `row ${row}, column ${col}`);
-    if (value === 0) continue;
-    rowOf[count] = row;
-    colOf[count++] = col;
-  }
-  const place = { error: (expected: string, found: string) => new FormatError(1, 1, expected, found) };
-  return matrixFromEntries(rows, cols, pairedEntries(rowOf, colOf, count), place);
-}
-
-/** The row (or column) of each stored entry, from the pointers of a compressed layout. */
-function expandPointers(kind: string, pointers: { count: number; at(i: number): number }, ones: number, lines: number) {
-  if (kind !== 'csr' && kind !== 'csc') throw new FormatError(1, 1, 'a format csr, csc or coo', JSON.stringify(kind));
-  if (pointers.count !== lines + 1 || pointers.at(0) !== 0 || pointers.at(lines) !== ones)
-    throw new FormatError(1, 1, `indptr with ${lines + 1} entries from 0 to ${ones}`, 'others');
-  const lineOf = new Uint32Array(ones);
-  for (let i = 0; i < lines; i++) {
-    if (pointers.at(i + 1) < pointers.at(i))
-      throw new FormatError(1, 1, 'indptr that never falls', `a fall at entry ${i + 1}`);
-    lineOf.fill(i, pointers.at(i), pointers.at(i + 1));
-  }
-  return { count: ones, at: (e: number) => lineOf[e]! };
-}
-
-/** Members by name. Sizes are looked at before anything is unpacked, and names are only ever compared, never used as
- *  paths. */
-function unpack(bytes: Uint8Array): Record<string, Uint8Array> {
-  const wanted = new Set(['format', 'shape', 'data', 'indices', 'indptr', 'row', 'col'].map((name) => `${name}.npy`));
-  try {
-    return unzipSync(bytes, {
-      filter: ({ name, originalSize }) => {
-        if (!wanted.has(name)) return false;
-        if (originalSize > maxMemberBytes)
-          throw new LimitError(`member ${name}`, originalSize, maxMemberBytes, 'bytes');
-        return true;
-      },
+export function readNpz(file: FileBytes): SparseMatrix {
+  const archive = new NpzArchive(file);
+  const kind = archive.text('format');
+  const shape = archive.list('shape');
+  const [rows, cols] = [shape.next(), shape.next()];
+  if (shape.count !== 2 || !isSize(rows) || !isSize(cols)) throw wrong('a shape of two sizes from 1', 'another');
+  refuseBeyondLimits(rows, cols, archive.list('data').count);
+  const entries = kind === 'coo' ? coordinates(archive) : compressed(archive, kind, kind === 'csc' ? cols : rows);
+  const isInside = (row: number, col: number) => isBelow(row, rows) && isBelow(col, cols);
+  const each = (visit: (row: number, col: number) => void) =>
+    entries.each((row, col) => {
+      if (!isInside(row, col)) throw wrong(`entries inside ${rows} × ${cols}`, `row ${row}, column ${col}`);
+      visit(row, col);
     });
-  } catch (error) {
-    if (error instanceof LimitError) throw error;
-    throw new FormatError(
-      1,
-      1,
-      'a zip archive',
-      bytes.length === 0 ? 'an empty file' : 'bytes that do not unpack as one',
-    );
+  return matrixFromEntries(rows, cols, { each }, { error: wrong });
+}
+
+const wrong = (expected: string, found: string) => new FormatError(1, 1, expected, found);
+const isSize = (value: number) => Number.isInteger(value) && value >= 1;
+const isBelow = (value: number, limit: number) => Number.isInteger(value) && value >= 0 && value < limit;
+
+/** Numbers of one member, and how many it says it has. */
+class MemberNumbers {
+  private passed = 0;
+
+  constructor(
+    private readonly name: string,
+    private readonly stream: ByteStream,
+    private readonly numbers: NumberStream,
+    readonly count: number,
+  ) {}
+
+  /** @throws FormatError when the member ends before its count, or does not end after it. */
+  next(): number {
+    const value = this.numbers.next();
+    if (this.numbers.given <= this.passed) throw wrong(`${this.name}: ${this.count} numbers`, String(this.passed));
+    this.passed++;
+    if (this.passed === this.count) this.end();
+    return value;
   }
+
+  private end(): void {
+    if (this.numbers.given > this.count || this.stream.read(new Uint8Array(1)) > 0)
+      throw wrong(`${this.name}: ${this.count} numbers`, 'more');
+  }
+}
+
+class NpzArchive {
+  private readonly members: Map<string, ZipMember>;
+
+  constructor(file: FileBytes) {
+    this.members = zipMembers(file, names, maxMemberBytes);
+  }
+
+  list(name: string): MemberNumbers {
+    const { stream, head } = this.open(name);
+    return new MemberNumbers(`${name}.npy`, stream, npyNumbers(stream, head, `${name}.npy`), npyCount(head));
+  }
+
+  /** A few letters, such as the format. */
+  text(name: string): string {
+    return new TextDecoder().decode(readFully(this.open(name).stream, 64)).replace(/\0/g, '');
+  }
+
+  private open(name: string) {
+    const member = this.members.get(`${name}.npy`);
+    if (!member)
+      throw wrong(`a member ${name}.npy in the archive`, `only ${[...this.members.keys()].join(', ') || 'none'}`);
+    const stream = member.open();
+    return { stream, head: readNpyHead(stream, `${name}.npy`) };
+  }
+}
+
+function coordinates(archive: NpzArchive): Entries {
+  return {
+    each(visit) {
+      const [row, col, data] = [archive.list('row'), archive.list('col'), archive.list('data')];
+      sameCount([row, col], data.count);
+      for (let e = 0; e < data.count; e++) {
+        const [r, c] = [row.next(), col.next()];
+        if (isOne(data)) visit(r, c);
+      }
+    },
+  };
+}
+
+/** Rows (or columns) by their pointers, of which a matrix has few enough to hold. */
+function compressed(archive: NpzArchive, kind: string, lines: number): Entries {
+  if (kind !== 'csr' && kind !== 'csc') throw wrong('a format csr, csc or coo', JSON.stringify(kind));
+  const pointers = pointersOf(archive.list('indptr'), lines, archive.list('data').count);
+  return {
+    each(visit) {
+      const [index, data] = [archive.list('indices'), archive.list('data')];
+      sameCount([index], data.count);
+      for (let line = 0; line < lines; line++) {
+        for (let e = pointers[line]!; e < pointers[line + 1]!; e++) {
+          const at = index.next();
+          if (!isOne(data)) continue;
+          if (kind === 'csr') visit(line, at);
+          else visit(at, line);
+        }
+      }
+    },
+  };
+}
+
+function pointersOf(list: MemberNumbers, lines: number, ones: number): Uint32Array {
+  const expected = `indptr with ${lines + 1} entries from 0 to ${ones}`;
+  if (list.count !== lines + 1) throw wrong(expected, `${list.count} entries`);
+  const pointers = new Uint32Array(lines + 1);
+  for (let i = 0; i <= lines; i++) {
+    const pointer = list.next();
+    if (!isBelow(pointer, ones + 1) || (i === 0 && pointer !== 0)) throw wrong(expected, String(pointer));
+    if (i > 0 && pointer < pointers[i - 1]!) throw wrong('indptr that never falls', `a fall at entry ${i}`);
+    pointers[i] = pointer;
+  }
+  if (pointers[lines] !== ones) throw wrong(expected, String(pointers[lines]));
+  return pointers;
+}
+
+function isOne(data: MemberNumbers): boolean {
+  const value = data.next();
+  if (value !== 0 && value !== 1) throw wrong('stored values 0 or 1', String(value));
+  return value === 1;
+}
+
+function sameCount(lists: readonly MemberNumbers[], count: number): void {
+  for (const list of lists)
+    if (list.count !== count) throw wrong(`as many indices as the ${count} stored values`, String(list.count));
 }

@@ -7,6 +7,13 @@ const KEPT = 1 << 12;
 /** Characters of a line of text that are looked at. */
 const LONGEST_TEXT = 1 << 16;
 
+/** A place in a file to come back to. */
+export interface ScanMark {
+  readonly position: number;
+  readonly line: number;
+  readonly lineStart: number;
+}
+
 /** Reads whitespace-separated whole numbers out of a file, line by line, and knows where it is. Accepts CR, LF and
  *  CRLF, a UTF-8 byte order mark, and a missing last newline. Lines and columns count from 1. */
 export class TextScanner {
@@ -44,17 +51,45 @@ export class TextScanner {
     if (this.atLineEnd()) this.skipLineBreak();
   }
 
-  /** The rest of this line as text, without its break; no more of it than anyone would read. */
+  mark(): ScanMark {
+    return { position: this.base + this.at, line: this.line, lineStart: this.lineStart };
+  }
+
+  /** Goes back (or on) to a marked place. */
+  reset({ position, line, lineStart }: ScanMark): void {
+    if (!(this.file instanceof Uint8Array)) {
+      this.bytes = this.bytes.subarray(0, 0);
+      this.base = position;
+    }
+    this.at = position - this.base;
+    this.line = line;
+    this.lineStart = lineStart;
+  }
+
+  /** The rest of this line as text, without its break; no more of it than anyone would read.
+   *  @throws FormatError at a NUL byte, which no text holds. */
   restOfLine(): string {
     const found: number[] = [];
-    for (; this.hasByte() && !isLineBreak(this.bytes[this.at]!); this.at++)
+    for (; this.hasByte() && !isLineBreak(this.bytes[this.at]!); this.at++) {
+      if (this.bytes[this.at] === 0) throw this.nulByte();
       if (found.length < LONGEST_TEXT) found.push(this.bytes[this.at]!);
+    }
     this.skipLineBreak();
     return new TextDecoder().decode(Uint8Array.from(found));
   }
 
   peek(): number {
     return this.hasByte() ? this.bytes[this.at]! : -1;
+  }
+
+  /** The next byte, and past it; −1 at the end.
+   *  @throws FormatError at a NUL byte, which no text holds. */
+  take(): number {
+    const byte = this.peek();
+    if (byte === 0) throw this.nulByte();
+    if (isLineBreak(byte)) this.skipLineBreak();
+    else if (byte !== -1) this.at++;
+    return byte;
   }
 
   /** Skips one byte if it is `char`, with blanks around it. */
@@ -96,6 +131,10 @@ export class TextScanner {
   /** What stands at the present place, for messages. */
   tokenAt(): string {
     return this.tokenFrom(this.base + this.at);
+  }
+
+  private nulByte(): FormatError {
+    return this.errorAt(this.base + this.at, 'text', 'a NUL byte');
   }
 
   private errorAt(position: number, expected: string, found: string): FormatError {

@@ -1,4 +1,4 @@
-import { zipSync, zlibSync } from 'fflate';
+import { unzipSync, zipSync, zlibSync } from 'fflate';
 import { describe, expect, test } from 'vitest';
 import { FormatError, LimitError } from '@/core/errors.ts';
 import { exportMatrix, importMatrix } from '@/core/formats/index.ts';
@@ -35,16 +35,60 @@ describe('an archive', () => {
     expect(() => importMatrix(bytes, 'npz')).toThrow(FormatError);
   });
 
-  test('of one element that unpacks a thousandfold is refused at the limit', () => {
-    const packed = zlibSync(new Uint8Array(60_000_000), { level: 9 });
+  /** A level-5 file of one compressed element. */
+  const packedElement = (content: Uint8Array) => {
+    const packed = zlibSync(content, { level: 9 });
     const bytes = new Uint8Array(136 + packed.length);
-    const head = exportMatrix(H, 'mat').subarray(0, 128);
-    bytes.set(head);
+    bytes.set(exportMatrix(H, 'mat').subarray(0, 128));
     new DataView(bytes.buffer).setUint32(128, 15, true);
     new DataView(bytes.buffer).setUint32(132, packed.length, true);
     bytes.set(packed, 136);
     expect(bytes.length).toBeLessThan(1_000_000);
+    return bytes;
+  };
+
+  test('of one array that unpacks a thousandfold is refused at the limit', () => {
+    // The sound array, but for its row indices, which are sixty million bytes of zeros.
+    const sound = exportMatrix(H, 'mat').subarray(128);
+    const view = new DataView(sound.buffer, sound.byteOffset, sound.length);
+    const rows = 8 + 16 + 16 + 16;
+    expect([view.getUint32(rows, true), view.getUint32(rows + 4, true)]).toEqual([5, 4 * H.colIndex.length]);
+    const bomb = new Uint8Array(60_000_000);
+    bomb.set(sound.subarray(0, rows + 8));
+    new DataView(bomb.buffer).setUint32(4, bomb.length - 8, true);
+    new DataView(bomb.buffer).setUint32(rows + 4, bomb.length - 1000, true);
+    const bytes = packedElement(bomb);
+    const from = performance.now();
     expect(() => importMatrix(bytes, 'mat')).toThrow(LimitError);
+    expect(performance.now() - from).toBeLessThan(1000);
+  });
+
+  test('of one element of zeros has no array, which takes no unpacking to see', () => {
+    const bytes = packedElement(new Uint8Array(60_000_000));
+    const from = performance.now();
+    expect(() => importMatrix(bytes, 'mat')).toThrow(/a sparse array/);
+    expect(performance.now() - from).toBeLessThan(100);
+  });
+
+  test('whose bytes were altered is refused by the checksum in its directory', () => {
+    const bytes = exportMatrix(H, 'npz');
+    const stored = zipSync(unzipSync(bytes), { level: 0 });
+    const view = new DataView(stored.buffer, stored.byteOffset, stored.length);
+    // Behind the first member's header of 30 bytes, its name, and an .npy header of 128 bytes: the first column.
+    const first = 30 + view.getUint16(26, true) + view.getUint16(28, true) + 128;
+    expect(importMatrix(stored, 'npz')).toEqual(H);
+    stored[first]! ^= 1;
+    expect(() => importMatrix(stored, 'npz')).toThrow(/indices.npy as its CRC-32 says/);
+  });
+
+  test('that ends within a member, or says more than it holds, is refused', () => {
+    const whole = exportMatrix(H, 'npz');
+    expect(() => importMatrix(whole.subarray(0, whole.length - 30), 'npz')).toThrow(FormatError);
+    const members = unzipSync(whole);
+    const short = { ...members, 'data.npy': members['data.npy']!.subarray(0, -1) };
+    expect(() => importMatrix(zipSync(short), 'npz')).toThrow(/data.npy: \d+ numbers/);
+    const long = { ...members, 'data.npy': Uint8Array.of(...members['data.npy']!, 1) };
+    expect(() => importMatrix(zipSync(long), 'npz')).toThrow(/data.npy: \d+ numbers, found more/);
   });
 
   test('with a torn array of numbers is refused', () => {
