@@ -46,8 +46,9 @@ export class InflatedStream implements ByteStream {
     const got = this.source.read(this.packed.subarray(0, this.pieceBytes));
     this.isOver = got === 0;
     try {
-      // A copy, since what is not used up yet stays with the unpacker.
-      this.inflate.push(this.packed.slice(0, got), this.isOver);
+      // A short piece is copied, since the unpacker waits with it until the header is whole.
+      const piece = this.packed.subarray(0, got);
+      this.inflate.push(got < LEAST_PIECE ? piece.slice() : piece, this.isOver);
     } catch {
       throw this.wrong();
     }

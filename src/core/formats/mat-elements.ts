@@ -1,6 +1,6 @@
 import { FormatError, LimitError } from '../errors.ts';
 import { bytesFrom, type FileBytes, sizeOf } from './byte-source.ts';
-import { type ByteStream, fileStream, readFully } from './byte-stream.ts';
+import { type ByteStream, fileStream, readFully, skipByReading } from './byte-stream.ts';
 import { InflatedStream } from './inflated-stream.ts';
 import { matrixLimits } from './matrix-limits.ts';
 import { type NumberKind, NumberStream } from './number-stream.ts';
@@ -35,36 +35,42 @@ export interface MatPart {
   /** Bytes of its data, and where they begin inside the array. */
   size: number;
   at: number;
+  /** Whether its data lie inside its tag. */
+  isSmall: boolean;
 }
 
 const wrong = (expected: string, found: string) => new FormatError(1, 1, expected, found);
 
-/** One array of the file, compressed or not: its parts, each read from its place as often as wanted. */
+/** One array of the file, compressed or not. Its parts are passed in their order; the numbers of one can be read in passing,
+ *  which unpacks nothing twice, or from its place as often as wanted. */
 export class MatArray {
   readonly parts: MatPart[] = [];
-  private stream: ByteStream;
+  private readonly stream: ByteStream;
   private at = 0;
 
   constructor(
     private readonly open: () => ByteStream,
     private readonly size: number,
   ) {
-    this.stream = open();
+    const source = open();
+    this.stream = watched(source, (bytes) => {
+      this.at += bytes;
+    });
   }
 
   /** The next part, passing over what is left of the one before; undefined after the last.
    *  @throws FormatError when it is torn; LimitError when it is larger than a part of a matrix may be. */
   nextPart(): MatPart | undefined {
     const before = this.parts.at(-1);
-    if (before) this.moveTo(padded(before));
+    if (before) this.moveTo(8 * Math.ceil((before.at + before.size) / 8));
     if (this.at + 8 > this.size) {
       this.moveTo(this.size);
       return undefined;
     }
+    const from = this.at;
     const tag = tagOf(readFully(this.stream, 8));
-    const part = { type: tag.type, size: tag.size, at: this.at + (tag.isSmall ? 4 : 8) };
-    this.at += 8;
-    if (!tag.isSmall && part.at + part.size > this.size) throw wrong(`an element of ${part.size} bytes`, 'fewer');
+    const part = { ...tag, at: from + (tag.isSmall ? 4 : 8) };
+    if (part.at + part.size > this.size) throw wrong(`an element of ${part.size} bytes`, 'fewer');
     if (part.size > MOST_PART_BYTES) throw new LimitError('unpacked array', part.size, MOST_PART_BYTES, 'bytes');
     this.parts.push(part);
     return part;
@@ -74,16 +80,24 @@ export class MatArray {
   numbers(part: MatPart): NumberStream {
     const stream = this.open();
     stream.skip(part.at);
-    const kind = kinds[part.type];
-    return new NumberStream(limited(stream, kind ? part.size : 0), kind ?? 'u1');
+    return numbersOf(stream, part);
+  }
+
+  /** The same of the part just come to, once. */
+  numbersInPassing(part: MatPart): NumberStream {
+    return part.isSmall ? this.numbers(part) : numbersOf(this.stream, part);
   }
 
   /** Further in the array, at most to its end. */
   private moveTo(place: number): void {
     const count = Math.min(place, this.size) - this.at;
     if (count > 0 && this.stream.skip(count) < count) throw wrong('the whole of the array', 'the end of the file');
-    this.at = Math.max(this.at, Math.min(place, this.size));
   }
+}
+
+function numbersOf(stream: ByteStream, { type, size }: MatPart): NumberStream {
+  const kind = kinds[type];
+  return new NumberStream(limited(stream, kind ? size : 0), kind ?? 'u1');
 }
 
 export const countOf = ({ type, size }: MatPart): number => {
@@ -119,8 +133,6 @@ function tagOf(bytes: Uint8Array): { type: number; size: number; isSmall: boolea
   return { type: tag, size: view.getUint32(4, true), isSmall: false };
 }
 
-const padded = ({ at, size }: MatPart) => 8 * Math.ceil((at + size) / 8);
-
 function past(stream: ByteStream, count: number): ByteStream {
   stream.skip(count);
   return stream;
@@ -143,24 +155,31 @@ function limited(stream: ByteStream, count: number): ByteStream {
   };
 }
 
-/** Lets go of a small file that unpacks to far more than a matrix would. */
-function limitedInflate(packed: ByteStream, packedBytes: number): ByteStream {
-  const inflated = new InflatedStream(packed, 'zlib', () => wrong('a compressed element', 'bytes that do not unpack'));
-  const limit = (1 << 20) + MOST_PACKED * packedBytes;
-  let passed = 0;
-  const counted = (bytes: number) => {
-    passed += bytes;
-    if (passed > limit) throw new LimitError('unpacked array', passed, limit, 'bytes');
-  };
+function watched(stream: ByteStream, onPassed: (bytes: number) => void): ByteStream {
   return {
     read(into) {
-      const got = inflated.read(into);
-      counted(got);
+      const got = stream.read(into);
+      onPassed(got);
       return got;
     },
     skip(bytes) {
-      counted(bytes);
-      return inflated.skip(bytes);
+      const skipped = stream.skip(bytes);
+      onPassed(skipped);
+      return skipped;
     },
   };
+}
+
+/** Lets go of a small file that unpacks to far more than a matrix would. */
+function limitedInflate(packed: ByteStream, packedBytes: number): ByteStream {
+  const limit = (1 << 20) + MOST_PACKED * packedBytes;
+  let passed = 0;
+  const inflated = new InflatedStream(packed, 'zlib', () => wrong('a compressed element', 'bytes that do not unpack'));
+  const read = (into: Uint8Array) => {
+    const got = inflated.read(into);
+    passed += got;
+    if (passed > limit) throw new LimitError('unpacked array', passed, limit, 'bytes');
+    return got;
+  };
+  return { read, skip: (bytes) => skipByReading({ read }, bytes) };
 }

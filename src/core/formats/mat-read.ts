@@ -1,9 +1,10 @@
 import type { SparseMatrix } from '../codes/sparse-matrix.ts';
 import { FormatError } from '../errors.ts';
 import { bytesFrom, type FileBytes, sizeOf } from './byte-source.ts';
-import { countOf, type MatArray, type MatPart, matArrays, mxSPARSE } from './mat-elements.ts';
+import { countOf, type MatArray, matArrays, mxSPARSE } from './mat-elements.ts';
 import { matrixFromEntries } from './matrix-from-entries.ts';
 import { refuseBeyondLimits } from './matrix-limits.ts';
+import type { NumberStream } from './number-stream.ts';
 
 const HEADER_BYTES = 128;
 
@@ -37,35 +38,44 @@ function sparseFrom(array: MatArray): SparseMatrix {
   if (countOf(size) !== 2 || !isSize(rows) || !isSize(cols)) throw wrong('two dimensions from 1', 'others');
   if (countOf(jc) !== cols + 1) throw wrong(`${cols + 1} column pointers`, String(countOf(jc)));
   refuseBeyondLimits(rows, cols, 0);
-  const pointers = pointersOf(array, jc, cols);
+  const pointers = pointersOf(array.numbersInPassing(jc), cols);
   const stored = pointers[cols]!;
   refuseBeyondLimits(rows, cols, stored);
   const pr = array.nextPart();
   if (!pr) throw wrong('dimensions, ir, jc and pr', `${array.parts.length} parts`);
-  // What comes behind is not used, but a file that breaks off in it is no whole file.
-  while (array.nextPart());
   const given = Math.min(countOf(ir), countOf(pr));
   if (stored > given) throw wrong(`${stored} stored entries`, String(given));
+  const hasZeros = checkValues(array.numbersInPassing(pr), stored);
+  // What comes behind is not used, but a file that breaks off in it is no whole file.
+  while (array.nextPart());
   const each = (visit: (row: number, col: number) => void) => {
     const rowOf = array.numbers(ir);
-    const values = array.numbers(pr);
+    const values = hasZeros ? array.numbers(pr) : undefined;
     for (let c = 0; c < cols; c++) {
       for (let e = pointers[c]!; e < pointers[c + 1]!; e++) {
         const row = rowOf.next();
-        const value = values.next();
-        if (value !== 0 && value !== 1) throw wrong('stored values 0 or 1', String(value));
         if (!(Number.isInteger(row) && row >= 0 && row < rows)) throw wrong(`rows from 0 to ${rows - 1}`, String(row));
-        if (value === 1) visit(row, c);
+        if (values?.next() !== 0) visit(row, c);
       }
     }
   };
   return matrixFromEntries(rows, cols, { each }, { error: wrong });
 }
 
+/** Whether zeros are stored among the ones. */
+function checkValues(values: NumberStream, stored: number): boolean {
+  let hasZeros = false;
+  for (let e = 0; e < stored; e++) {
+    const value = values.next();
+    if (value !== 0 && value !== 1) throw wrong('stored values 0 or 1', String(value));
+    if (value === 0) hasZeros = true;
+  }
+  return hasZeros;
+}
+
 const isSize = (value: number) => Number.isInteger(value) && value >= 1;
 
-function pointersOf(array: MatArray, jc: MatPart, cols: number): Uint32Array {
-  const numbers = array.numbers(jc);
+function pointersOf(numbers: NumberStream, cols: number): Uint32Array {
   const pointers = new Uint32Array(cols + 1);
   for (let c = 0; c <= cols; c++) {
     const pointer = numbers.next();

@@ -45,8 +45,11 @@ export function readNpz(file: FileBytes): SparseMatrix {
   const shape = archive.list('shape');
   const [rows, cols] = [shape.next(), shape.next()];
   if (shape.count !== 2 || !isSize(rows) || !isSize(cols)) throw wrong('a shape of two sizes from 1', 'another');
-  refuseBeyondLimits(rows, cols, archive.list('data').count);
-  const entries = kind === 'coo' ? coordinates(archive) : compressed(archive, kind, kind === 'csc' ? cols : rows);
+  const data = archive.list('data');
+  refuseBeyondLimits(rows, cols, data.count);
+  const values = checkValues(data);
+  const entries =
+    kind === 'coo' ? coordinates(archive, values) : compressed(archive, values, kind, kind === 'csc' ? cols : rows);
   const isInside = (row: number, col: number) => isBelow(row, rows) && isBelow(col, cols);
   const each = (visit: (row: number, col: number) => void) =>
     entries.each((row, col) => {
@@ -112,31 +115,33 @@ class NpzArchive {
   }
 }
 
-function coordinates(archive: NpzArchive): Entries {
+function coordinates(archive: NpzArchive, { count, hasZeros }: Values): Entries {
   return {
     each(visit) {
-      const [row, col, data] = [archive.list('row'), archive.list('col'), archive.list('data')];
-      sameCount([row, col], data.count);
-      for (let e = 0; e < data.count; e++) {
+      const [row, col] = [archive.list('row'), archive.list('col')];
+      const values = hasZeros ? archive.list('data') : undefined;
+      sameCount([row, col], count);
+      for (let e = 0; e < count; e++) {
         const [r, c] = [row.next(), col.next()];
-        if (isOne(data)) visit(r, c);
+        if (values?.next() !== 0) visit(r, c);
       }
     },
   };
 }
 
 /** Rows (or columns) by their pointers, of which a matrix has few enough to hold. */
-function compressed(archive: NpzArchive, kind: string, lines: number): Entries {
+function compressed(archive: NpzArchive, { count, hasZeros }: Values, kind: string, lines: number): Entries {
   if (kind !== 'csr' && kind !== 'csc') throw wrong('a format csr, csc or coo', JSON.stringify(kind));
-  const pointers = pointersOf(archive.list('indptr'), lines, archive.list('data').count);
+  const pointers = pointersOf(archive.list('indptr'), lines, count);
   return {
     each(visit) {
-      const [index, data] = [archive.list('indices'), archive.list('data')];
-      sameCount([index], data.count);
+      const index = archive.list('indices');
+      const values = hasZeros ? archive.list('data') : undefined;
+      sameCount([index], count);
       for (let line = 0; line < lines; line++) {
         for (let e = pointers[line]!; e < pointers[line + 1]!; e++) {
           const at = index.next();
-          if (!isOne(data)) continue;
+          if (values?.next() === 0) continue;
           if (kind === 'csr') visit(line, at);
           else visit(at, line);
         }
@@ -159,10 +164,20 @@ function pointersOf(list: MemberNumbers, lines: number, ones: number): Uint32Arr
   return pointers;
 }
 
-function isOne(data: MemberNumbers): boolean {
-  const value = data.next();
-  if (value !== 0 && value !== 1) throw wrong('stored values 0 or 1', String(value));
-  return value === 1;
+interface Values {
+  count: number;
+  /** Whether zeros are stored among the ones; where they are, they have to be read along with the places. */
+  hasZeros: boolean;
+}
+
+function checkValues(data: MemberNumbers): Values {
+  let hasZeros = false;
+  for (let e = 0; e < data.count; e++) {
+    const value = data.next();
+    if (value !== 0 && value !== 1) throw wrong('stored values 0 or 1', String(value));
+    if (value === 0) hasZeros = true;
+  }
+  return { count: data.count, hasZeros };
 }
 
 function sameCount(lists: readonly MemberNumbers[], count: number): void {

@@ -43,8 +43,8 @@ export function FilePicker({ chosen, disabled, onChoose }: Props) {
         }}
       />
       <p id={`${id}-note`} className="mt-2 text-quiet text-tiny">
-        {chosen ? `${chosen}. ` : ''}Up to 200 MB: alist, Matrix Market, CSV, .npz, .npy, .mat; up to 64 MB: JSON, C
-        header, shift table. Or drop it here.
+        {chosen ? `${chosen}. ` : ''}Up to 200 MB: alist, Matrix Market, CSV, JSON, .npz, .npy, .mat, C header, shift
+        table, block list. Or drop it here.
       </p>
     </div>
   );
