@@ -6,11 +6,12 @@ import { diskStorage } from '@/server/files/disk-storage.ts';
 import { newId } from '@/server/ids.ts';
 import { createBuildPool } from '@/server/jobs/build-pool.ts';
 import { createFilesPool } from '@/server/jobs/files-pool.ts';
-import { matrixOf } from '@/server/repositories/codes.ts';
+import { codeById, matrixOf } from '@/server/repositories/codes.ts';
 import { insertMembership } from '@/server/repositories/memberships.ts';
 import { insertUser } from '@/server/repositories/users.ts';
 import { createCode } from '@/server/use-cases/codes/create-code.ts';
 import { deleteCode } from '@/server/use-cases/codes/delete-code.ts';
+import { createMeasurement } from '@/server/use-cases/measurements/create-measurement.ts';
 import { listNotices } from '@/server/use-cases/notices/list-notices.ts';
 import { createRelease } from '@/server/use-cases/releases/create-release.ts';
 import { getRelease, getReleaseFile } from '@/server/use-cases/releases/get-release.ts';
@@ -113,6 +114,49 @@ describe('a sign-off', () => {
     await measure(1);
     const checks = await checksOf((await ask()).id);
     expect(checks['a sample of the shards, computed again, agrees']).toBe('failed');
+  });
+
+  it('counts weight strata at the required p, with the radius that is proved', async () => {
+    await putRequirements(at.context, at.projectId, { targetFer: 1e-8, channel: { kind: 'bsc', p: 1e-4 } });
+    const channel = { kind: 'stratum' as const, weight: 3 };
+    const decoder = { kind: 'majority-logic' as const };
+    const run = await createRun(at.context, at.projectId, {
+      ...{ name: 'Weights', seed: 'weights', framesPerShard: 4000, place: 'browser' },
+      stopping: { frameErrors: 1e6, maxFrames: 4000 },
+      points: [{ codeId, channel, decoder }],
+    });
+    const H = (await matrixOf(at.db, codeId))!;
+    const tally = await runShard({ H, channel, decoder, seed: 'weights', framesPerShard: 4000 }, 0);
+    await postShards(at.context, run.id, { shards: [{ pointId: run.points[0]!.id, index: 0, tally }] });
+    const { id } = await ask();
+    const { verdicts, snapshot } = await getSignOff(reviewer, id);
+    expect(verdicts).toMatchObject([{ requirement: 'target FER', outcome: 'met', grade: 'bounded' }]);
+    expect(verdicts[0]!.method).toMatch(/weight strata of “Weights” with majority-logic: weights to 2 proved/);
+    // 3 errors or more among 21 bits at p = 10⁻⁴ come 1330 · 10⁻¹² times.
+    const [{ limits }] = JSON.parse(snapshot).strata;
+    expect(limits[0].fer.upper).toBeLessThan(1.34e-9);
+    expect(await checksOf(id)).toMatchObject({
+      'every requirement is met': 'passed',
+      'every measured point has 100 frame errors, or none': 'passed',
+      'the floor is looked for beyond the required channel': 'passed',
+      'a sample of the shards, computed again, agrees': 'passed',
+    });
+  });
+
+  it('counts data measured elsewhere on a code of its size at the required p, and there alone', async () => {
+    await putRequirements(at.context, at.projectId, { targetFer: 1e-8, channel: { kind: 'bsc', p: 1e-4 } });
+    const { n, k } = (await codeById(at.db, codeId))!;
+    const points = [{ p: 1e-4, frames: 1e9, frameErrors: 0, bitErrors: 0 }];
+    const measured = { name: 'Bench B', fileName: 'b.csv', n, k, points };
+    await createMeasurement(at.context, at.projectId, { ...measured, n: n + 1 });
+    await createMeasurement(at.context, at.projectId, { ...measured, points: [{ ...points[0]!, p: 2e-4 }] });
+    const before = await getSignOff(reviewer, (await ask()).id);
+    expect(before.verdicts[0]).toMatchObject({ outcome: 'undecided', grade: 'bounded' });
+    await createMeasurement(at.context, at.projectId, measured);
+    const after = await getSignOff(reviewer, (await ask()).id);
+    expect(after.verdicts[0]).toMatchObject({ outcome: 'met', grade: 'sampled' });
+    expect(after.verdicts[0]!.method).toMatch(/“Bench B” \(b\.csv\), whose decoder is not stated: 0 frame errors/);
+    expect(JSON.parse(after.snapshot).measuredData).toHaveLength(2);
   });
 
   it('says of a code that nobody measured what is missing', async () => {

@@ -1,5 +1,7 @@
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
+import type { DecoderSpec } from '@/core/decoders/decoder-spec.ts';
 import type { DesignSpec } from '@/core/designs/block-design.ts';
+import type { Graded } from '@/core/evidence.ts';
 import type { GeneratorForm } from '@/core/formats/generator-forms.ts';
 import type { WordForm } from '@/core/formats/word-forms.ts';
 import type { Bundle, ReleaseFacts } from '@/core/release/bundle.ts';
@@ -17,7 +19,11 @@ export type FilesRequest =
   | { kind: 'words'; words: SparseMatrix; form: WordForm['id'] }
   | { kind: 'vectors'; H: SparseMatrix; request: VectorRequest; form: VectorForm; head: VectorHead }
   | { kind: 'shards'; H: SparseMatrix; shards: (Omit<RunSpec, 'H'> & { index: number })[] }
+  | { kind: 'radius'; H: SparseMatrix; decoders: DecoderSpec[] }
   | { kind: 'bundle'; code: ReleasedCode; contents: ReleaseContents; facts: ReleaseFacts; folder: string };
 
-/** A file's bytes come in parts before the answer; a bundle, or the tallies of shards computed again, come with it. */
-export type FilesAnswer = { ok: true; bundle?: Bundle; tallies?: Tally[] } | { ok: false; failure: WorkerFailure };
+/** A file's bytes come in parts before the answer; a bundle, the tallies of shards computed again, or the radii proved for
+ *  decoders, come with it. */
+export type FilesAnswer =
+  | { ok: true; bundle?: Bundle; tallies?: Tally[]; radii?: (Graded<number> | null)[] }
+  | { ok: false; failure: WorkerFailure };

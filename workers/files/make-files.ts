@@ -2,6 +2,7 @@ import { generatorForms } from '@/core/formats/generator-forms.ts';
 import { wordForms } from '@/core/formats/word-forms.ts';
 import { bundleRelease } from '@/core/release/bundle.ts';
 import { releaseFiles, writeBlocks } from '@/core/release/release-files.ts';
+import { guaranteedRadius } from '@/core/simulation/guaranteed-radius.ts';
 import { runShard } from '@/core/simulation/shard.ts';
 import type { Tally } from '@/core/simulation/tally.ts';
 import { vectorFile } from '@/core/test-vectors/vector-files.ts';
@@ -31,6 +32,8 @@ export async function makeFiles(request: FilesRequest, onPart: (part: Uint8Array
         for (const { index, ...spec } of request.shards) tallies.push(await runShard({ ...spec, H: request.H }, index));
         return { ok: true, tallies };
       }
+      case 'radius':
+        return { ok: true, radii: request.decoders.map((decoder) => guaranteedRadius(request.H, decoder)) };
       case 'bundle': {
         const files = await releaseFiles(request.code, request.contents);
         return { ok: true, bundle: await bundleRelease(request.facts, files, request.folder) };

@@ -4,6 +4,7 @@ import type { Code } from '@/api/codes.ts';
 import { endpoints } from '@/api/endpoints.ts';
 import type { Point } from '@/api/runs.ts';
 import type { Graded } from '@/core/evidence.ts';
+import { knownStrata } from '@/core/simulation/known-strata.ts';
 import type { Stratum } from '@/core/simulation/stratified-rate.ts';
 import { call } from '../api.ts';
 import type { CombinedCurve } from '../curves/curve.ts';
@@ -15,7 +16,6 @@ import {
   onEnumerationChange,
   wholeStrata,
 } from './enumeration-store.ts';
-import { knownStrata } from './known-strata.ts';
 import { proveRadius } from './strata-pool.ts';
 import { type StratumGroup, stratumGroups } from './stratum-groups.ts';
 

@@ -1,5 +1,7 @@
 import type { Requirements } from '@/api/projects.ts';
 import type { Curve, RateKind } from '@/client/curves/curve.ts';
+import type { Enclosure } from '@/core/evidence.ts';
+import { rateVerdict } from '@/core/statistics/rate-verdict.ts';
 import type { Requirement } from './error-rate-chart/domain.ts';
 import { parameterText, scientific } from './rate-text.ts';
 
@@ -34,10 +36,6 @@ const targetText = (x: number): string => {
 
 export type Verdict = 'met' | 'above' | 'undecided' | 'no point';
 
-/** How a measured point stands to the target: met when even the upper limit is within it, above when even the lower
- *  limit passes it. */
-export function verdictOn(point: { lower: number; upper: number } | undefined, target: number): Verdict {
-  if (point === undefined) return 'no point';
-  if (point.upper <= target) return 'met';
-  return point.lower > target ? 'above' : 'undecided';
-}
+/** How a measured point stands to the target; of a curve without a point there nothing is said. */
+export const verdictOn = (point: Enclosure | undefined, target: number): Verdict =>
+  point === undefined ? 'no point' : rateVerdict(point, target);

@@ -1,12 +1,12 @@
 import { useState } from 'react';
 import type { Run } from '@/api/runs.ts';
-import { weightOf } from '@/client/strata/stratum-groups.ts';
 import type { StrataEvidence } from '@/client/strata/use-strata-evidence.ts';
 import { Button, ButtonLink } from '@/components/ui/Button.tsx';
 import { type Column, DataTable } from '@/components/ui/DataTable.tsx';
 import { NumberField } from '@/components/ui/fields.tsx';
 import { Grade } from '@/components/ui/Grade.tsx';
 import { wholeNumber } from '@/components/ui/numbers.ts';
+import { weightOf } from '@/core/simulation/known-strata.ts';
 import { type Allocation, allocateShards } from '@/core/simulation/stratum-planning.ts';
 import { paths } from '@/paths.ts';
 import { parameterText } from '../charts/rate-text.ts';

@@ -2,9 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { pointAt } from '@/client/curves/curve.ts';
 import { groupPoints } from '@/client/curves/group-points.ts';
 import { combinedCurve, LEAST_RATE } from '@/client/strata/combined-curve.ts';
-import { knownStrata } from '@/client/strata/known-strata.ts';
 import { isRound, roundCrossovers } from '@/client/strata/round-crossovers.ts';
-import { stratumGroups, weightOf } from '@/client/strata/stratum-groups.ts';
+import { stratumGroups } from '@/client/strata/stratum-groups.ts';
+import { knownStrata, weightOf } from '@/core/simulation/known-strata.ts';
 import { stratifiedRate } from '@/core/simulation/stratified-rate.ts';
 import { strataPoints, stratumPoint } from '../../components/strata/strata-points.ts';
 
@@ -22,6 +22,16 @@ describe('the weights of a run', () => {
     const stages = [1, 2].map((stage) => stratumPoint(9, stage, { id: `stage ${stage}`, plan: plan(stage) }));
     expect(stratumGroups([pilot, ...stages])[0]!.points.map(({ id }) => id)).toEqual(['stage 2']);
     expect(stratumGroups([pilot])).toEqual([]);
+  });
+
+  it('count a weight that was tried whole, whatever its stage, unless a shard of it was given up', () => {
+    const whole = { ...plan(0), enumerate: { branches: 9, branchesPerShard: 1 } };
+    const tried = stratumPoint(9, 5, { id: 'tried', done: true, plan: whole });
+    const sample = stratumPoint(9, 1, { id: 'sample', plan: plan(2) });
+    const [group] = stratumGroups([sample, tried]);
+    expect(group!.points.map(({ id }) => id)).toEqual(['tried']);
+    expect(knownStrata(group!, null)[0]!.grade).toBe('computed');
+    expect(knownStrata({ n: 273, points: [{ ...tried, setAside: 1 }] }, null)).toEqual([]);
   });
 });
 

@@ -37,7 +37,7 @@ export async function createRelease(
   const number = (await lastReleaseNumber(db, projectId)) + 1;
   const createdAt = nowText();
   const signOff = await signOffFacts(db, codeId);
-  const facts = await releaseFacts(context, project, code, { number, note, createdAt, signOff });
+  const facts = await releaseFacts(context, pool, project, code, { number, note, createdAt, signOff });
   const folder = `${stemOf(project.name)}-release-${number}`;
   const bundle = await makeBundle(db, pool, { codeId, contents, facts, folder }, signal);
   for (const file of bundle.files) await storage.put(file.sha256, file.bytes);

@@ -1,6 +1,7 @@
 import type { Code } from '@/api/codes.ts';
 import type { Project } from '@/api/projects.ts';
 import type { Context } from '../../context.ts';
+import type { FilesPool } from '../../jobs/files-pool.ts';
 import type { CodeFacts } from '../../repositories/releases.ts';
 import { programVersion } from '../../version.ts';
 import { codeEvidence } from '../sign-offs/code-evidence.ts';
@@ -29,11 +30,12 @@ export interface ReleaseHead {
  *  to meet, and every measurement of it with the seed that repeats it. */
 export async function releaseFacts(
   { db, caller }: Context,
+  pool: FilesPool,
   project: Project,
   code: Code,
   { number, note, createdAt, signOff }: ReleaseHead,
 ): Promise<CodeFacts> {
-  const evidence = await codeEvidence(db, project.id, code);
+  const evidence = await codeEvidence(db, pool, project.id, code);
   const standing = signOff && {
     ...signOff,
     restated: signOff.requirementsAt !== (evidence.requirements?.statedAt ?? null),

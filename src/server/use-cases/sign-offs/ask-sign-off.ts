@@ -31,7 +31,7 @@ export async function askSignOff(
     throw badFields({ codeId: 'the id of a code of this project, with parity checks' });
   const id = newId();
   const createdAt = nowText();
-  const evidence = await codeEvidence(db, projectId, code);
+  const evidence = await codeEvidence(db, pool, projectId, code);
   const checks = [...evidenceChecks(evidence), await recomputeSample(db, pool, code, evidence.measurements)];
   const head = {
     snapshot: 'blockwright-sign-off-1',

@@ -11,14 +11,17 @@ const patienceMs = 20_000;
 const check = 'a sample of the shards, computed again, agrees';
 
 /** Computes the first shard of some of a code's points again and compares it with the one that was handed in. Points of
- *  floating-point decoders are left out: their tallies may differ in the last frame from machine to machine. */
+ *  floating-point decoders are left out: their tallies may differ in the last frame from machine to machine; so are weights
+ *  that were tried whole, whose shards are no samples. */
 export async function recomputeSample(
   db: Database,
   pool: FilesPool,
   code: Pick<Code, 'id' | 'n' | 'k'>,
   measurements: CodeEvidence['measurements'],
 ): Promise<EvidenceCheck> {
-  const exact = measurements.filter(({ decoder, run }) => run && !JSON.stringify(decoder).includes('sum-product'));
+  const exact = measurements.filter(
+    ({ decoder, run, grade }) => run && grade === 'sampled' && !JSON.stringify(decoder).includes('sum-product'),
+  );
   const step = Math.max(1, exact.length / mostShards);
   const chosen = exact.filter((_, i) => Math.floor(i / step) !== Math.floor((i - 1) / step)).slice(0, mostShards);
   const stored = await storedTallies(

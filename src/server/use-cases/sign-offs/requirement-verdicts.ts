@@ -1,15 +1,16 @@
 import type { Code } from '@/api/codes.ts';
 import type { Requirements } from '@/api/projects.ts';
-import type { Point } from '@/api/runs.ts';
 import type { RequirementVerdict } from '@/api/sign-offs.ts';
+import { rateVerdict } from '@/core/statistics/rate-verdict.ts';
+import type { RateEvidence } from './rate-evidence.ts';
 
-/** Every stated requirement, held against the code and its measured points. A rate is met only when the upper limit of
- *  a point at the stated channel (any channel, where none is stated) is within the target; what nobody measured is
- *  undecided. */
+/** Every stated requirement, held against the code and what is known of its error rates. A rate is met only when the upper
+ *  limit of something known at the stated channel (any channel, where none is stated) is within the target; what nobody
+ *  measured or bounded is undecided. */
 export function requirementVerdicts(
   requirements: Requirements,
   code: Pick<Code, 'n' | 'k' | 'columnWeights' | 'properties'>,
-  points: readonly Point[],
+  evidence: readonly RateEvidence[],
 ): RequirementVerdict[] {
   const { n, k, columnWeights } = code;
   const r = requirements;
@@ -35,10 +36,10 @@ export function requirementVerdicts(
       `largest column weight ${columnWeights.at(-1)?.[0] ?? 0}, counted`,
     ),
     ...structureVerdict(r, code),
-    ...rateVerdict('target FER', r.targetFer, r, points, 'interval', 1),
-    ...rateVerdict('target BER', r.targetBer, r, points, 'berInterval', 1),
+    ...verdictOnRate('target FER', r.targetFer, evidence, 'fer', 1),
+    ...verdictOnRate('target BER', r.targetBer, evidence, 'ber', 1),
     // JEDEC JESD218: UBER is FER over the information bits a frame.
-    ...rateVerdict('target UBER', r.targetUber, r, points, 'interval', k),
+    ...verdictOnRate('target UBER', r.targetUber, evidence, 'fer', Math.max(1, k)),
   ];
 }
 
@@ -51,32 +52,24 @@ function structureVerdict({ structure }: Requirements, { properties }: Pick<Code
   return [{ requirement: 'structure', asked: structure, outcome, grade: known?.grade ?? 'bounded', method }];
 }
 
-function rateVerdict(
+function verdictOnRate(
   requirement: string,
   asked: number | undefined,
-  { channel, decoder }: Requirements,
-  points: readonly Point[],
-  interval: 'interval' | 'berInterval',
+  evidence: readonly RateEvidence[],
+  rate: 'fer' | 'ber',
   divisor: number,
 ): RequirementVerdict[] {
   if (asked === undefined) return [];
-  const same = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b);
-  const fitting = points.filter(
-    (point) =>
-      point.tally.frames > 0 &&
-      (channel === undefined || same(point.channel, channel)) &&
-      (decoder === undefined || same(point.decoder, decoder)),
-  );
-  const target = asked * divisor;
-  if (fitting.length === 0) {
-    const method = 'between 0 and 1: no point was measured with the channel and decoder required';
+  if (evidence.length === 0) {
+    const method = 'between 0 and 1: no point was measured with the channel and decoder required, nor weights bounded';
     return [{ requirement, asked, outcome: 'undecided', grade: 'bounded', method }];
   }
-  const best = fitting.reduce((a, b) => (b[interval].upper < a[interval].upper ? b : a));
-  const { lower, upper } = best[interval];
-  const outcome = upper <= target ? 'met' : fitting.every((p) => p[interval].lower > target) ? 'missed' : 'undecided';
-  const { frames, frameErrors } = best.tally;
+  const target = asked * divisor;
+  const best = evidence.reduce((a, b) => (b[rate].upper < a[rate].upper ? b : a));
+  const isAbove = evidence.every((known) => rateVerdict(known[rate], target) === 'above');
+  const outcome = rateVerdict(best[rate], target) === 'met' ? 'met' : isAbove ? 'missed' : 'undecided';
   const scale = (x: number) => (x / divisor).toPrecision(3);
-  const method = `${frameErrors} frame errors in ${frames} frames with ${best.decoder.kind}: ${scale(lower)} to ${scale(upper)} at level ${best.level}`;
-  return [{ requirement, asked, outcome, grade: 'sampled', method }];
+  const { lower, upper } = best[rate];
+  const method = `${best.words}: ${scale(lower)} to ${scale(upper)} at level ${best.level}`;
+  return [{ requirement, asked, outcome, grade: best.grade, method }];
 }
