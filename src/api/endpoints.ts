@@ -181,8 +181,8 @@ export const endpoints = {
     success: [201],
     scopes: ['run'],
   }),
-  getRun: endpoint('GET', '/runs/:id', 'A run with the tallies of its points', {
-    response: z.object({ run: runSchema, points: z.array(pointSchema) }),
+  getRun: endpoint('GET', '/runs/:id', 'A run with the tallies of its points, of over 2,000 those that a chart needs', {
+    response: z.object({ run: runSchema, points: z.array(pointSchema), omitted: z.number() }),
     scopes: ['read', 'run'],
   }),
   runPoints: endpoint('GET', '/runs/:id/points', 'Points of a run in their order, as JSON or CSV', {
@@ -231,9 +231,9 @@ export const endpoints = {
   getFleet: endpoint('GET', '/fleet', 'Where shards can be computed besides browsers, and who has joined', {
     response: fleetSchema,
   }),
-  projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, for charts', {
+  projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, of over 2,000 those that a chart needs', {
     query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),
-    response: z.object({ points: z.array(pointSchema) }),
+    response: z.object({ points: z.array(pointSchema), omitted: z.number() }),
   }),
   listReleases: endpoint('GET', '/projects/:id/releases', 'Releases of the project, newest first', {
     query: z.object(page),

@@ -5,7 +5,7 @@ import type { Endpoint } from '@/api/endpoint.ts';
 import { endpoints } from '@/api/endpoints.ts';
 import { runEventSchema } from '@/api/runs.ts';
 import { type ApiFailure, addressOf, type CallInput, call } from './api.ts';
-import { mergeRunEvent, type RunEvent } from './merge-run-event.ts';
+import { type KnownRun, mergeRunEvent } from './merge-run-event.ts';
 
 const askEveryMs = 5000;
 
@@ -32,7 +32,7 @@ export function useRunEvents(runId: string): void {
       const event = runEventSchema.safeParse(JSON.parse(data));
       if (!event.success) return void mutate(key);
       // What is not fetched yet comes whole.
-      const merge = (known: RunEvent | undefined) => known && mergeRunEvent(known, event.data);
+      const merge = (known: KnownRun | undefined) => known && mergeRunEvent(known, event.data);
       void mutate(key, merge, { revalidate: false });
     };
     source.addEventListener('run', take);

@@ -6,13 +6,21 @@ import { exampleRun } from '../components/example-runs.ts';
 
 describe('what an event tells of a run', () => {
   const [a, b] = [examplePoint({ id: 'a' }), examplePoint({ id: 'b' })];
-  const known = { run: exampleRun({ revision: 7 }), points: [a, b] };
+  const known = { run: exampleRun({ revision: 7 }), points: [a, b], omitted: 0 };
 
   it('replaces the points that changed, in their places, and adds those that the planner added', () => {
     const changed = { ...a, done: true };
     const added = examplePoint({ id: 'c' });
     const run = exampleRun({ revision: 8 });
-    expect(mergeRunEvent(known, { run, points: [added, changed] })).toEqual({ run, points: [changed, b, added] });
+    expect(mergeRunEvent(known, { run, points: [added, changed] })).toEqual({
+      ...{ run, points: [changed, b, added], omitted: 0 },
+    });
+  });
+
+  it('of a run of which only some points are known adds none', () => {
+    const run = exampleRun({ revision: 8 });
+    const event = { run, points: [{ ...a, done: true }, examplePoint({ id: 'c' })] };
+    expect(mergeRunEvent({ ...known, omitted: 9 }, event).points.map(({ id }) => id)).toEqual(['a', 'b']);
   });
 
   it('of a change of the run alone keeps the points as they are, so that nothing is drawn anew', () => {

@@ -47,6 +47,7 @@ export async function openBench(dataDir?: string) {
     ...scratch,
     codeId,
     H: built.H as SparseMatrix,
+    seen,
     until,
     finished: (runId: string, timeout?: number) => until(runId, ({ run }) => run.state === 'finished', timeout),
     /** Resolves once nothing has come in for a while. */

@@ -32,6 +32,8 @@ interface Props {
   projectId: string;
   run: Run;
   points: Point[];
+  /** Points of the run that are neither in the chart nor given. */
+  omitted: number;
   /** Whether the reader may state runs. */
   canRun: boolean;
   /** Progress, with or without controls. */
@@ -39,7 +41,7 @@ interface Props {
 }
 
 /** A run under way or at rest: chart and table on the left, progress and particulars on the right. */
-export function RunBench({ projectId, run, points, canRun, panel }: Props) {
+export function RunBench({ projectId, run, points, omitted, canRun, panel }: Props) {
   const evidence = useStrataEvidence(points);
   const curves = useMemo(
     () => chartCurves([...groupPoints(points), ...evidence.map(({ curve }) => curve)]),
@@ -74,7 +76,7 @@ export function RunBench({ projectId, run, points, canRun, panel }: Props) {
     <div className="grid gap-x-7 gap-y-6 wide:grid-cols-[minmax(0,1fr)_20.5rem] wide:grid-rows-[auto_1fr_auto]">
       <div className="min-w-0">
         <h1>{run.name}</h1>
-        <p className="mt-1 mb-3 text-quiet">{subtitle(curves.length, points)}</p>
+        <p className="mt-1 mb-3 text-quiet">{subtitle(curves.length, points, omitted)}</p>
         <ErrorRateChart
           {...address}
           title={`${address.kind === 'fer' ? 'Frame' : 'Bit'} error rate, ${run.name}`}
@@ -109,7 +111,9 @@ export function RunBench({ projectId, run, points, canRun, panel }: Props) {
       )}
       <div className="min-w-0 wide:col-span-2">
         <PointsTable
+          runId={run.id}
           points={points}
+          omitted={omitted}
           curves={curves}
           stopping={run.stopping}
           seed={run.seed}
@@ -133,8 +137,10 @@ export function RunBench({ projectId, run, points, canRun, panel }: Props) {
 }
 
 /** "Four curves, 22 points, every interval 99 %." in figures. */
-function subtitle(curveCount: number, points: readonly Point[]): string {
+function subtitle(curveCount: number, points: readonly Point[], omitted: number): string {
   const level = points[0]?.level;
   const intervals = level === undefined ? '' : `, every interval ${levelText(level)}`;
-  return `${counted(curveCount, 'curve')}, ${counted(points.length, 'point')}${intervals}.`;
+  const thinned =
+    omitted > 0 ? ` Of them ${counted(points.length, 'is', 'are')} drawn: ends, extremes and limits.` : '';
+  return `${counted(curveCount, 'curve')}, ${counted(points.length + omitted, 'point')}${intervals}.${thinned}`;
 }

@@ -36,16 +36,18 @@ export function RunPage({ projectId, runId, canRun }: Props) {
     );
   }
   const Bench = canRun ? DrivenRun : WatchedRun;
-  return <Bench projectId={projectId} run={data.run} points={data.points} />;
+  return <Bench projectId={projectId} run={data.run} points={data.points} omitted={data.omitted} />;
 }
 
 interface BenchProps {
   projectId: string;
   run: Run;
   points: Point[];
+  /** Points of the run that were not given, being more than a page can show at once. */
+  omitted: number;
 }
 
-function DrivenRun({ projectId, run, points }: BenchProps) {
+function DrivenRun({ projectId, run, points, omitted }: BenchProps) {
   const driver = useRunDriver(run, points);
   const isAtWork = driver.status === 'running' || driver.status === 'pausing';
   useDocumentTitle(
@@ -57,10 +59,10 @@ function DrivenRun({ projectId, run, points }: BenchProps) {
   );
   useProgressIcon(isAtWork ? driver.fractionDone : storedShare(run, points));
   const panel = <RunPanel run={run} points={points} driver={driver} />;
-  return <RunBench projectId={projectId} run={run} points={points} canRun panel={panel} />;
+  return <RunBench projectId={projectId} run={run} points={points} omitted={omitted} canRun panel={panel} />;
 }
 
-function WatchedRun({ projectId, run, points }: BenchProps) {
+function WatchedRun({ projectId, run, points, omitted }: BenchProps) {
   const share = storedShare(run, points);
   useDocumentTitle(titleText(share));
   useProgressIcon(share);
@@ -69,6 +71,7 @@ function WatchedRun({ projectId, run, points }: BenchProps) {
       projectId={projectId}
       run={run}
       points={points}
+      omitted={omitted}
       canRun={false}
       panel={<WatchPanel run={run} points={points} />}
     />

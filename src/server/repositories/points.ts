@@ -87,6 +87,59 @@ export async function pointsByIds(db: Database, runId: string, ids: readonly str
   return (await shown(db).where('points.run_id', runId).whereIn('points.id', ids)).map(toPoint);
 }
 
+/** Where a point stands in a chart, without what is shown beside it. */
+export interface PointOutline {
+  id: string;
+  /** Points of one curve have it in common. */
+  curve: string;
+  /** p, or whatever else the channel's kind is measured by; null where it has no such. */
+  x: number | null;
+  frames: number;
+  frameErrors: number;
+}
+
+export interface PointsWanted {
+  projectId?: string;
+  runId?: string;
+  codeId?: string;
+  /** Only points with frames. */
+  measured?: boolean;
+}
+
+const wantedPoints = (db: Database, { projectId, runId, codeId, measured }: PointsWanted) => {
+  const query = db('points').join('runs', 'runs.id', 'points.run_id');
+  if (projectId) query.where('runs.project_id', projectId);
+  if (runId) query.where('points.run_id', runId);
+  if (codeId) query.where('points.code_id', codeId);
+  if (measured) query.where('points.frames', '>', 0);
+  return query;
+};
+
+export async function pointCount(db: Database, wanted: PointsWanted): Promise<number> {
+  return Number((await wantedPoints(db, wanted).count({ points: '*' }).first())?.points ?? 0);
+}
+
+export async function pointOutlines(db: Database, wanted: PointsWanted): Promise<PointOutline[]> {
+  const rows = await wantedPoints(db, wanted).select(
+    'points.id',
+    'points.frames',
+    'points.frame_errors as frameErrors',
+    db.raw("points.run_id || points.code_id || points.decoder || json_extract(channel, '$.kind') AS curve"),
+    db.raw("coalesce(json_extract(channel, '$.p'), json_extract(channel, '$.weight')) AS x"),
+  );
+  return rows as PointOutline[];
+}
+
+/** Points by their ids, in the order of their runs. */
+export async function pointsWithIds(db: Database, ids: readonly string[]): Promise<StoredPoint[]> {
+  const found: StoredPoint[] = [];
+  for (let from = 0; from < ids.length; from += rowsAStatement) {
+    const rows = await shown(db).whereIn('points.id', ids.slice(from, from + rowsAStatement));
+    found.push(...rows.map(toPoint));
+  }
+  return found.sort((a, b) => (a.runId === b.runId ? a.position - b.position : a.runId < b.runId ? -1 : 1));
+}
+
 /** Points of a project that have frames, oldest run first. */
 export async function measuredPointsOf(
   db: Database,

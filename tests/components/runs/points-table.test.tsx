@@ -1,4 +1,4 @@
-import { cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { cleanup, fireEvent, render, screen, waitFor } from '@testing-library/react';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import { groupPoints } from '@/client/curves/group-points.ts';
 import { chartCurves } from '@/components/charts/chart-curve.ts';
@@ -10,11 +10,10 @@ afterEach(cleanup);
 
 const stopping = { frameErrors: 100, maxFrames: 1_000_000 };
 
-function table(points: Parameters<typeof PointsTable>[0]['points'], onSelect = vi.fn()) {
+function table(points: Parameters<typeof PointsTable>[0]['points'], onSelect = vi.fn(), omitted = 0) {
   const curves = chartCurves(groupPoints(points));
-  render(
-    <PointsTable points={points} curves={curves} stopping={stopping} seed="s" selectedId={null} onSelect={onSelect} />,
-  );
+  const rest = { curves, stopping, seed: 's', selectedId: null, onSelect };
+  render(<PointsTable runId="r" points={points} omitted={omitted} {...rest} />);
   return onSelect;
 }
 
@@ -47,6 +46,24 @@ describe('the table of points', () => {
     expect(document.querySelectorAll('tbody tr')).toHaveLength(120);
   });
 });
+
+it('the table of a run of very many points fetches its rows page by page, in the run’s order', async () => {
+  const all = Array.from({ length: 150 }, (_, i) => examplePoint({ id: `${i}`, p: 0.05 - i * 1e-4 }));
+  const asked: string[] = [];
+  vi.stubGlobal('fetch', async (address: string) => {
+    asked.push(address);
+    const from = Number(/after=(\d+)/.exec(address)?.[1] ?? -1) + 1;
+    const next = from + 100 < all.length ? { next: `${from + 99}` } : {};
+    return Response.json({ points: all.slice(from, from + 100), ...next });
+  });
+  table([all[0]!, all[149]!], vi.fn(), 148);
+  await waitFor(() => expect(document.querySelectorAll('tbody tr')).toHaveLength(100));
+  expect(document.body.textContent).toContain('The first 100 of 150 points.');
+  fireEvent.click(screen.getByText('Show more'));
+  await waitFor(() => expect(document.querySelectorAll('tbody tr')).toHaveLength(150));
+  expect(asked).toHaveLength(2);
+  vi.unstubAllGlobals();
+}, 30_000);
 
 describe('the histogram of iterations', () => {
   it('leaves empty bars out of the logarithmic axis', () => {

@@ -1,7 +1,7 @@
 import { area, line } from 'd3-shape';
 import type { Curve, CurvePoint, RateKind } from '@/client/curves/curve.ts';
 import { isThin } from '@/client/curves/curve.ts';
-import { downsample } from '@/client/curves/downsample.ts';
+import { downsample } from '@/core/statistics/downsample.ts';
 import type { ChartWindow } from './domain.ts';
 import type { Frame } from './frame.ts';
 

@@ -2,14 +2,18 @@ import type { Point } from '@/api/runs.ts';
 import type { Context } from '../../context.ts';
 import { measuredPointsOf } from '../../repositories/points.ts';
 import { projectToRead } from '../rights.ts';
+import { thinnedPoints } from './charted-points.ts';
 import { shownPoint } from './shown-point.ts';
 
-/** Every point of the project that has frames, for charts; `extra` is left empty, since nobody resumes from a chart. */
+/** The points of the project that have frames, for charts: of very many those that a chart needs. `extra` is left empty,
+ *  since nobody resumes from a chart. */
 export async function projectPoints(
   context: Context,
   projectId: string,
   only: { codeId?: string; runId?: string },
-): Promise<Point[]> {
+): Promise<{ points: Point[]; omitted: number }> {
   await projectToRead(context, projectId);
-  return (await measuredPointsOf(context.db, projectId, only)).map((point) => shownPoint(point, []));
+  const thinned = await thinnedPoints(context.db, { projectId, ...only, measured: true });
+  const points = thinned?.points ?? (await measuredPointsOf(context.db, projectId, only));
+  return { points: points.map((point) => shownPoint(point, [])), omitted: thinned?.omitted ?? 0 };
 }

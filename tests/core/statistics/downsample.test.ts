@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { downsample, type Placed } from '@/client/curves/downsample.ts';
+import { downsample, type Placed } from '@/core/statistics/downsample.ts';
 
 const arbitraryMarks = fc
   .array(

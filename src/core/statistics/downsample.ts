@@ -5,18 +5,18 @@ export interface Placed {
   isBound: boolean;
 }
 
-/** Thins marks, sorted by x, to a handful a bucket of `bucketPx`, so that a hundred thousand points draw as fast as a
+/** Thins marks, sorted by x, to a handful a bucket of `bucketWidth`, so that a hundred thousand points draw as fast as a
  *  hundred. In each bucket the first, the last, the highest and the lowest measured marks stay, and so do the highest
  *  and the lowest upper bound: no extreme and no zero-error region vanishes from the picture. Order is kept; nothing is
  *  averaged, every mark that remains is a measured one. Few marks are returned as they are. */
-export function downsample<T extends Placed>(marks: readonly T[], bucketPx: number, leaveBelow = 400): readonly T[] {
+export function downsample<T extends Placed>(marks: readonly T[], bucketWidth: number, leaveBelow = 400): readonly T[] {
   if (marks.length <= leaveBelow) return marks;
   const kept: T[] = [];
   let start = 0;
   while (start < marks.length) {
-    const bucket = Math.floor(marks[start]!.x / bucketPx);
+    const bucket = Math.floor(marks[start]!.x / bucketWidth);
     let end = start + 1;
-    while (end < marks.length && Math.floor(marks[end]!.x / bucketPx) === bucket) end++;
+    while (end < marks.length && Math.floor(marks[end]!.x / bucketWidth) === bucket) end++;
     for (const index of extremesOf(marks, start, end)) kept.push(marks[index]!);
     start = end;
   }
