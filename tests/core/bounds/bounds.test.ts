@@ -81,6 +81,15 @@ describe('channel bounds against high-precision values', () => {
     }
   });
 
+  it('converse and random-coding bound of the BSC hold 9 digits up to n = 10^6 and down to p = 10^-12', () => {
+    for (const [id, { parameters, value }] of entries(precise, 'bsc-bounds-')) {
+      const point = parameters as { n: number; k: number; p: number };
+      const { converse, rcu } = value as { converse: string; rcu: string };
+      close(bscConverse(point), converse, 1e-9, id);
+      close(bscRandomCodingUnion(point), rcu, 1e-9, id);
+    }
+  });
+
   it('the normal approximation passes the converse at n = 273, p = 0.02, so it is no bound', () => {
     const k = 198;
     expect(normalApproximation({ channel: { kind: 'bsc', p: 0.02 }, n: 273, k })).toBeLessThan(
@@ -88,12 +97,13 @@ describe('channel bounds against high-precision values', () => {
     );
   });
 
-  it('the erasure channel has its converse below its random-coding bound, both to 10 digits', () => {
+  it('the erasure channel has its converse below its random-coding bound, both to 9 digits up to n = 10^6', () => {
     for (const [id, { parameters, value }] of entries(precise, 'bec-bounds-')) {
       const point = parameters as { n: number; k: number; e: number };
       const { converse, rcu } = value as { converse: string; rcu: string };
-      close(becConverse(point), converse, 1e-10, id);
-      close(becRandomCodingUnion(point), rcu, 1e-10, id);
+      close(becConverse(point), converse, 1e-9, id);
+      close(becRandomCodingUnion(point), rcu, 1e-9, id);
+      expect(becConverse(point), id).toBeLessThanOrEqual(becRandomCodingUnion(point));
     }
   });
 });
@@ -140,6 +150,24 @@ describe('bounds on block codes', () => {
     const exact = channelBounds['E-ml-PG24'].value.ML_FER as Record<string, string>;
     for (const [p, fer] of Object.entries(exact)) expect(unionBound(weights, Number(p))).toBeGreaterThan(Number(fer));
     expect(unionBound(weights, 0.01) / Number(exact['0.01'])).toBeLessThan(2.5);
+  });
+
+  it('sphere packing and Gilbert–Varshamov equal whole-number sums up to n = 10^6', () => {
+    for (const [id, { parameters, value }] of entries(precise, 'block-bounds-')) {
+      const code = parameters as { n: number; d: number };
+      const { hamming_log2, gv_k } = value as { hamming_log2: string; gv_k: number };
+      close(hammingBound(code), hamming_log2, 1e-12, id);
+      expect(gilbertVarshamovBound(code), id).toBe(gv_k);
+    }
+  });
+
+  it('union bound and undetected errors hold 9 digits at any depth, with counts past what a double holds', () => {
+    const weightsOf = (parameters: object) =>
+      (parameters as { weights: [number, string][] }).weights.map(([w, count]) => [w, BigInt(count)] as const);
+    for (const [id, { parameters, value }] of entries(precise, 'union-bound-'))
+      close(unionBound(weightsOf(parameters), parameters.p!), value, 1e-9, id);
+    for (const [id, { parameters, value }] of entries(precise, 'undetected-'))
+      close(undetectedErrorRate(weightsOf(parameters), parameters.n!, parameters.p!), value, 1e-9, id);
   });
 
   it('undetected errors of PG(2,4) follow its weights', () => {
