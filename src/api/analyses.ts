@@ -20,6 +20,10 @@ export const analysisSchema = z.object({
   /** What it told, where that was more than was known. */
   lines: z.array(propertySchema),
   histogram: z.object({ of: z.string(), bars: z.array(z.tuple([z.number(), z.number()])) }).nullable(),
+  /** Values side by side, which the lines hold too. */
+  table: z
+    .object({ of: z.string(), columns: z.array(z.string()), rows: z.array(z.array(z.union([z.string(), z.number()]))) })
+    .nullable(),
   /** Keys of the code's properties that it added or narrowed. */
   improved: z.array(z.string()),
   /** Name of the list it found, given at /analyses/:id/list. */

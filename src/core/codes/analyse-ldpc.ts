@@ -8,8 +8,9 @@ import { type DistanceEffort, distanceOf } from './analysis/distance/distance.ts
 import { weightFourWords } from './analysis/distance/weight-four.ts';
 import { girth as girthOf } from './analysis/girth.ts';
 import { type MajoritySteps, multiStepMajority, oneStepRadius } from './analysis/majority-logic.ts';
-import { type TannerOrbits, tannerOrbits } from './analysis/tanner-orbits.ts';
+import { orbitsText, type TannerOrbits, tannerOrbits } from './analysis/tanner-orbits.ts';
 import { columnWeightProfile, rowWeightProfile, type WeightProfile } from './analysis/weights.ts';
+import { laps } from './laps.ts';
 import type { SparseMatrix } from './sparse-matrix.ts';
 
 /** What analysis needs of a code: the matrix, and its origin where that lets theorems speak. */
@@ -57,27 +58,43 @@ export interface LdpcAnalysis {
   };
 }
 
-/** Rank, weights, girth, cycles and distance of the code {c : H·c = 0}. Cycles are counted unless `cycles` is false;
- *  `distance` says how hard to look, by name or by budget; `onProgress` is told the share of that budget spent.
+export interface AnalyseOptions {
+  /** Cycles are counted unless this is false. */
+  cycles?: boolean;
+  /** How hard to look for the distance, by name or by budget. */
+  distance?: DistanceEffort;
+  /** Told the share of that budget spent. */
+  onProgress?(share: number): void;
+  /** Milliseconds; with it each value says the time spent on it. */
+  clock?(): number;
+}
+
+/** Rank, weights, girth, cycles and distance of the code {c : H·c = 0}.
  *  @throws LimitError when the matrix is too large to be ranked. */
-export function analyseLdpc(
-  code: AnalysableCode,
-  options: { cycles?: boolean; distance?: DistanceEffort; onProgress?(share: number): void } = {},
-): LdpcAnalysis {
+export function analyseLdpc(code: AnalysableCode, options: AnalyseOptions = {}): LdpcAnalysis {
   const { H } = code;
   const { onProgress } = options;
+  const lap = laps(options.clock);
   const circulant = circulantOf(H) ?? undefined;
   const cyclic = cyclicGenerators(H) !== null;
   const form = cyclic ? null : quasiCyclicForm(H);
+  const structureMs = lap();
   const { rank, method: rankMethod } = findRank(H, form);
   const k = H.cols - rank;
+  const rankMs = lap();
   const orbits = tannerOrbits(H, code.columnSymmetry);
   const girth = girthOf(H, orbits);
+  const girthMs = lap();
   const columnWeights = columnWeightProfile(H);
   const leastColumnWeight = columnWeights[0]?.[0] ?? 0;
-  const fours = (H.rows <= MOST_POINTS_AT_ONCE && weightFourWords(H, girth)) || undefined;
+  const fours = withTime((H.rows <= MOST_POINTS_AT_ONCE && weightFourWords(H, girth)) || undefined, lap());
   const counted = options.cycles === false ? undefined : countCycles(H, girth, LONGEST_COUNTED, orbits);
   const cycles: Record<string, number | bigint> = Object.fromEntries(counted?.total ?? []);
+  const cyclesMs = lap();
+  const facts = { k, girth, cyclic, leastColumnWeight, orbits, weightFourWords: fours, onProgress };
+  const distance = withTime(distanceOf(code, facts, options.distance), lap());
+  const oneStep = withTime(oneStepRadius(H, girth, orbits), lap());
+  const majority = withTime(multiStepMajority(code) ?? undefined, lap());
   return {
     n: H.cols,
     k,
@@ -87,25 +104,29 @@ export function analyseLdpc(
     columnWeights,
     girth,
     ...(counted && { cycles, cyclesPerColumn: counted.perColumn }),
-    distance: distanceOf(
-      code,
-      { k, girth, cyclic, leastColumnWeight, orbits, weightFourWords: fours, onProgress },
-      options.distance,
-    ),
-    oneStepRadius: oneStepRadius(H, girth, orbits),
-    majority: multiStepMajority(code) ?? undefined,
+    distance,
+    oneStepRadius: oneStep,
+    majority,
     weightFourWords: fours,
     cyclic,
     circulant,
     quasiCyclic: form ? { size: form.size, blocks: form.blocks } : undefined,
     evidence: {
-      rank: { value: rank, grade: 'computed', method: rankMethod },
-      k: { value: k, grade: 'computed', method: 'n − rank' },
-      girth: { value: girth, grade: 'computed', method: `breadth-first search from ${rootsOf(orbits)}` },
-      ...(counted && { cycles: { value: cycles, grade: 'computed', method: cyclesMethod(counted, orbits) } }),
-      cyclic: { value: cyclic, grade: 'computed', method: 'every row shifted is a row' },
+      rank: computed(rank, rankMethod, rankMs),
+      k: computed(k, 'n − rank'),
+      girth: computed(girth, girthMethod(girth, orbits), girthMs),
+      ...(counted && { cycles: computed(cycles, cyclesMethod(counted, orbits), cyclesMs) }),
+      cyclic: computed(cyclic, 'every row shifted is a row', structureMs),
     },
   };
+}
+
+function computed<T>(value: T, method: string, elapsedMs?: number): Graded<T> {
+  return { value, grade: 'computed', method, ...(elapsedMs !== undefined && { elapsedMs }) };
+}
+
+function withTime<T extends Graded<unknown> | undefined>(found: T, elapsedMs: number | undefined): T {
+  return found && elapsedMs !== undefined ? { ...found, elapsedMs } : found;
 }
 
 /** Triples on more points are searched for Pasch configurations only when asked. */
@@ -114,12 +135,13 @@ const MOST_POINTS_AT_ONCE = 300;
 /** Cycles up to this length are counted, where the method reaches it. */
 const LONGEST_COUNTED = 8;
 
-function rootsOf({ symmetry, columns }: TannerOrbits): string {
-  if (symmetry === 'none') return 'every column';
-  return `${columns.representatives.length} of ${columns.orbitOf.length} columns, one an orbit (${symmetry})`;
+/** Said of 4-cycles wherever the girth is told: they are allowed, and cost iterative decoders most. */
+function girthMethod(girth: number, orbits: TannerOrbits): string {
+  const search = `breadth-first search from ${orbitsText(orbits)}`;
+  return girth === 4 ? `${search}; there are 4-cycles: some two checks share two bits or more` : search;
 }
 
 function cyclesMethod({ stoppedBy }: CycleCounts, orbits: TannerOrbits): string {
   const stopped = stoppedBy ? `; longer ones not counted: ${stoppedBy}` : '';
-  return `closed walks from ${rootsOf(orbits)}${stopped}`;
+  return `closed walks from ${orbitsText(orbits)}${stopped}`;
 }

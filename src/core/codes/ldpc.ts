@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import type { BlockDesign, DesignSpec, Symmetry } from '../designs/block-design.ts';
 import { ParamError } from '../errors.ts';
+import { columnSymmetryOf } from './known-symmetry.ts';
 import { type SparseMatrix, transpose } from './sparse-matrix.ts';
 import { applyTransforms } from './transforms/registry.ts';
 
@@ -53,6 +54,6 @@ export function deriveLdpc(
     checks,
     design: design.spec,
     transforms: [...transforms],
-    columnSymmetry: checks === 'blocks' && transforms.length === 0 ? design.symmetry : undefined,
+    columnSymmetry: transforms.length === 0 ? columnSymmetryOf(design, checks) : undefined,
   };
 }

@@ -21,12 +21,7 @@ export interface Property {
 /** The lines of a code's sheet in the order shown. What a theorem says is shown as proved only where the matrix, as it was
  *  computed, agrees with it.
  *  @throws Error when a closed formula and the computed value differ: a fault of this program, never shown as a fact. */
-export function propertiesOf(
-  code: LdpcCode,
-  analysis: LdpcAnalysis,
-  prediction: DesignPrediction,
-  elapsedMs: number,
-): Property[] {
+export function propertiesOf(code: LdpcCode, analysis: LdpcAnalysis, prediction: DesignPrediction): Property[] {
   const { H } = code;
   const { evidence } = analysis;
   const predicted =
@@ -42,7 +37,7 @@ export function propertiesOf(
   });
   return [
     counted('n', 'Length n', analysis.n, 'columns counted'),
-    { ...fromGraded('k', 'Dimension k', evidence.k, spaced), elapsedMs },
+    fromGraded('k', 'Dimension k', evidence.k, spaced),
     fromGraded('rank', 'Rank over GF(2)', evidence.rank, spaced),
     { ...counted('rate', 'Rate k/n', analysis.rate, 'k divided by n'), text: analysis.rate.toFixed(4) },
     counted('checks', 'Parity checks', H.rows, 'rows counted'),
@@ -72,7 +67,8 @@ function within(found: Graded<Enclosure>, predicted: Graded<Enclosure> | undefin
   if (value.lower === a.lower && value.upper === a.upper) return found;
   if (value.lower === b.lower && value.upper === b.upper) return predicted;
   const grade = value.lower === value.upper ? 'proved' : 'bounded';
-  return { value, grade, method: `${found.method}; by formula: ${predicted.method}`, source: predicted.source };
+  const method = `${found.method}; by formula: ${predicted.method}`;
+  return { value, grade, method, source: predicted.source, elapsedMs: found.elapsedMs };
 }
 
 function refuseDisagreement(analysis: LdpcAnalysis, predicted: CodePrediction | undefined): void {
@@ -90,7 +86,7 @@ export function fromGraded(
   graded: Graded<number>,
   text: (value: number) => string,
 ): Property {
-  const { value, grade, method, source } = graded;
+  const { value, grade, method, source, elapsedMs } = graded;
   return {
     key,
     label,
@@ -99,17 +95,19 @@ export function fromGraded(
     grade,
     method,
     source: cite(source),
+    ...(elapsedMs !== undefined && { elapsedMs }),
   };
 }
 
 export function enclosureLine(
   key: string,
   label: string,
-  { value, grade, method, source }: Graded<Enclosure>,
+  { value, grade, method, source, elapsedMs }: Graded<Enclosure>,
 ): Property {
   const { lower, upper } = value;
   const text = lower === upper ? (lower === 0 ? 'none' : spaced(lower)) : `${spaced(lower)} to ${spaced(upper)}`;
-  return { key, label, text, number: lower, grade, method, source: cite(source) };
+  const time = elapsedMs !== undefined && { elapsedMs };
+  return { key, label, text, number: lower, grade, method, source: cite(source), ...time };
 }
 
 function weights(key: string, label: string, profile: readonly [number, number][]): Property {
@@ -120,14 +118,16 @@ function weights(key: string, label: string, profile: readonly [number, number][
 
 function cycleLines({ cycles, evidence }: LdpcAnalysis): Property[] {
   if (!cycles || !evidence.cycles) return [];
-  const { grade, method } = evidence.cycles;
-  return Object.entries(cycles).map(([length, count]) => ({
+  const { grade, method, elapsedMs } = evidence.cycles;
+  // All lengths were counted together, in the time told of the first.
+  return Object.entries(cycles).map(([length, count], at) => ({
     key: `cycles-${length}`,
     label: `Cycles of length ${length}`,
     text: spaced(count),
     number: Number(count),
     grade,
     method,
+    ...(at === 0 && elapsedMs !== undefined && { elapsedMs }),
   }));
 }
 
@@ -164,6 +164,7 @@ function structureLine({ cyclic, quasiCyclic, evidence }: LdpcAnalysis): Propert
     text: cyclic ? 'cyclic' : (blocks ?? 'not cyclic in this order'),
     grade: evidence.cyclic.grade,
     method: evidence.cyclic.method,
+    ...(evidence.cyclic.elapsedMs !== undefined && { elapsedMs: evidence.cyclic.elapsedMs }),
   };
 }
 

@@ -8,6 +8,7 @@ import { analyseLdpc } from './analyse-ldpc.ts';
 import { columnWeightProfile, rowWeightProfile } from './analysis/weights.ts';
 import { type ConstantWeightCode, deriveConstantWeight, wordMatrix } from './constant-weight/constant-weight-code.ts';
 import { constantWeightSheet } from './constant-weight/constant-weight-sheet.ts';
+import { laps } from './laps.ts';
 import { deriveLdpc, type LdpcCode, type Transform } from './ldpc.ts';
 import { type Property, propertiesOf } from './properties.ts';
 import type { SparseMatrix } from './sparse-matrix.ts';
@@ -69,28 +70,28 @@ export function codeSheet(
   onStep?.('derive');
   const named = { designTitle: designTitle(request.design), certificate };
   if (derivation.kind === 'constant-weight') {
+    const lap = laps(clock);
     const code = deriveConstantWeight(design, derivation);
+    const distanceMs = lap();
     onStep?.('analyse');
-    return { ...describeWords(code, clock), ...named };
+    return { ...describeWords(code, clock, distanceMs), ...named };
   }
   const code = deriveLdpc(design, derivation);
   onStep?.('analyse');
   return { ...describeCode(code, prediction, clock), ...named };
 }
 
-function describeWords(code: ConstantWeightCode, clock: () => number) {
-  const from = clock();
-  const { n, messageBits: k, properties } = constantWeightSheet(code);
-  const elapsedMs = clock() - from;
+/** The distance was computed when the words were derived. */
+function describeWords(code: ConstantWeightCode, clock: () => number, elapsedMs: number | undefined) {
+  const { n, messageBits: k, properties } = constantWeightSheet(code, { clock });
   const H = wordMatrix(code);
   const timed = properties.map((line) => (line.key === 'distance' ? { ...line, elapsedMs } : line));
   return { H, n, k, properties: timed, rowWeights: rowWeightProfile(H), columnWeights: columnWeightProfile(H) };
 }
 
 function describeCode(code: LdpcCode, prediction: DesignPrediction, clock: () => number) {
-  const from = clock();
-  const analysis = analyseLdpc(code, { cycles: true });
-  const properties = propertiesOf(code, analysis, prediction, clock() - from);
+  const analysis = analyseLdpc(code, { cycles: true, clock });
+  const properties = propertiesOf(code, analysis, prediction);
   const { H } = code;
   const { n, k, rowWeights, columnWeights } = analysis;
   return { H, n, k, properties, rowWeights, columnWeights };

@@ -100,10 +100,9 @@ function uploadedTitle({ v, b, blockStart }: BlockDesign, t: number, lambda: num
 }
 
 function described(code: LdpcCode, clock: () => number) {
-  const from = clock();
   const { H } = code;
-  const analysis = analyseLdpc(code, { cycles: H.colIndex.length <= MOST_ONES_FOR_CYCLES });
-  const properties = propertiesOf(code, analysis, nothingPredicted, clock() - from);
+  const analysis = analyseLdpc(code, { cycles: H.colIndex.length <= MOST_ONES_FOR_CYCLES, clock });
+  const properties = propertiesOf(code, analysis, nothingPredicted);
   const { n, k, rowWeights, columnWeights } = analysis;
   return { H, n, k, properties, rowWeights, columnWeights };
 }

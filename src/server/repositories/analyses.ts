@@ -95,6 +95,7 @@ function toAnalysis(row: Row): StoredAnalysis {
     state: row.state!,
     lines: answer?.lines ?? [],
     histogram: answer?.histogram ?? null,
+    table: answer?.table ?? null,
     improved: JSON.parse(row.improved!),
     listName: answer?.list?.fileName ?? null,
     error: row.error ? JSON.parse(row.error) : null,

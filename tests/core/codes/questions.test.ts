@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { deriveLdpc } from '@/core/codes/ldpc.ts';
+import { questionCards } from '@/core/codes/questions/cards.ts';
 import { type CodeQuestionId, codeQuestionIds, codeQuestions } from '@/core/codes/questions/index.ts';
 import type { CodeOutline } from '@/core/codes/questions/question.ts';
 import { buildDesign } from '@/core/designs/design.ts';
@@ -37,13 +38,37 @@ describe('questions to the (7, 3) code of the Fano plane', () => {
   });
 });
 
+describe('the encoders of the (7, 3) code', () => {
+  test('are each a line with its grade, a row of the table and a line of the list', () => {
+    const { lines, table, list } = ask('encoders');
+    const forms = lines.filter(({ key }) => /-\d$/.test(key));
+    expect(forms.map(({ label }) => label)).toEqual(table!.rows.map(([title, form]) => `${title}: ${form}`));
+    expect(list?.text.split('\n')).toHaveLength(table!.rows.length + 2);
+    // g = (x + 1)(x³ + x + 1) has four terms, its register four stages (Peterson and Weldon 1972, ch. 8).
+    expect(lines[0]).toMatchObject({
+      key: 'encoder-shift-register-1',
+      text: '3 XOR gates, 4 flip-flops, 7 clocks a word',
+      grade: 'computed',
+      method: expect.stringMatching(/generator polynomial: x\^4 \+ .*random words encoded and checked/),
+    });
+    expect(lines.find(({ key }) => key === 'encoder-circulants')).toMatchObject({ text: 'none', grade: 'proved' });
+  });
+
+  test('are told in steps', () => {
+    const shares: number[] = [];
+    codeQuestions.encoders.answer(fano, { seconds: 1, onProgress: (share) => shares.push(share) });
+    expect(shares).toEqual([...shares].sort((a, b) => a - b));
+    expect(shares.length).toBeGreaterThan(2);
+  });
+});
+
 describe('a question that does not fit', () => {
   const outline: CodeOutline = { n: 273, k: 191, ones: 4641, columnWeights: [[17, 273]] };
 
   test('says for which codes it is asked', () => {
-    expect(codeQuestions.weights.obstacle(outline)).toContain('82');
-    expect(codeQuestions.absorbingSets.obstacle(outline)).toContain('weights 3 to 5');
-    expect(codeQuestions.distance.obstacle({ ...outline, k: 0 })).toContain('besides zero');
-    expect(codeQuestions.cycles.obstacle(outline)).toBeNull();
+    expect(questionCards.weights.obstacle(outline)).toContain('82');
+    expect(questionCards.absorbingSets.obstacle(outline)).toContain('weights 3 to 5');
+    expect(questionCards.distance.obstacle({ ...outline, k: 0 })).toContain('besides zero');
+    expect(questionCards.cycles.obstacle(outline)).toBeNull();
   });
 });

@@ -1,9 +1,10 @@
 import { lazy, Suspense } from 'react';
 import { saveFile } from '@/components/runs/save-file.ts';
 import { Button } from '@/components/ui/Button.tsx';
-import { duration } from '@/components/ui/numbers.ts';
+import { DataTable } from '@/components/ui/DataTable.tsx';
+import { duration, wholeNumber } from '@/components/ui/numbers.ts';
 import { TitleBlock } from '@/components/ui/TitleBlock.tsx';
-import type { CodeAnswer } from '@/core/codes/questions/question.ts';
+import type { AnswerTable, CodeAnswer } from '@/core/codes/questions/question.ts';
 
 const WeightBars = lazy(() => import('../WeightBars.tsx'));
 
@@ -15,9 +16,10 @@ interface Props {
 
 /** What an analysis in this browser told: each value with its grade, method and source, and the list as a file. */
 export function AnswerBlock({ title, answer, elapsedMs }: Props) {
-  const { lines, list, histogram } = answer;
+  const { lines, list, histogram, table } = answer;
   return (
-    <div className="grid gap-2" role="status">
+    <div className="grid min-w-0 gap-2" role="status">
+      {table && <Compared {...table} />}
       <TitleBlock
         title={title}
         rows={lines.map(({ label, text, grade, method, source }) => ({
@@ -39,6 +41,26 @@ export function AnswerBlock({ title, answer, elapsedMs }: Props) {
     </div>
   );
 }
+
+/** Values side by side; numbers are set right so that digits line up. */
+export function Compared({ of, columns, rows }: AnswerTable) {
+  return (
+    <DataTable
+      caption={of}
+      columns={columns.map((header, at) => ({
+        key: header,
+        header,
+        kind: typeof rows[0]?.[at] === 'number' ? 'number' : 'text',
+        cell: (row: AnswerTable['rows'][number]) => cellText(row[at]),
+        sortBy: (row: AnswerTable['rows'][number]) => row[at] ?? '',
+      }))}
+      rows={rows}
+      rowKey={(row) => row.slice(0, 2).join(' ')}
+    />
+  );
+}
+
+const cellText = (value: string | number | undefined) => (typeof value === 'number' ? wholeNumber(value) : value);
 
 export function Histogram({ of, bars }: NonNullable<CodeAnswer['histogram']>) {
   if (bars.length === 1) {

@@ -4,8 +4,9 @@ import { Button } from '@/components/ui/Button.tsx';
 import { SelectField } from '@/components/ui/fields.tsx';
 import { duration } from '@/components/ui/numbers.ts';
 import { Progress } from '@/components/ui/Progress.tsx';
-import { type CodeQuestionId, codeQuestionIds, codeQuestions } from '@/core/codes/questions/index.ts';
+import { questionCards } from '@/core/codes/questions/cards.ts';
 import type { CodeOutline } from '@/core/codes/questions/question.ts';
+import type { CodeQuestionId } from '@/core/codes/questions/question-ids.ts';
 import { RefusalNotice } from '../RefusalNotice.tsx';
 import { AnswerBlock } from './AnswerBlock.tsx';
 import { EarlierAnalysis, KeptAnalysis } from './KeptAnalysis.tsx';
@@ -19,24 +20,27 @@ interface Props {
   mayKeep: boolean;
   /** What was asked before, newest first. */
   earlier: readonly Analysis[];
+  questions: readonly CodeQuestionId[];
 }
 
 const BUDGETS = [1, 10, 60, 600];
 
 /** What more can be found out about a code, each asked for, with a budget, a progress and a way out. */
-export default function DeeperBench({ code, outline, mayKeep, earlier }: Props) {
+export default function DeeperBench({ code, outline, mayKeep, earlier, questions }: Props) {
   const [seconds, setSeconds] = useState(10);
   return (
     <div className="grid gap-4">
-      <SelectField
-        className="w-56"
-        label="a search may spend"
-        hint="counted in operations: the same answer on every machine"
-        value={String(seconds)}
-        choices={BUDGETS.map((budget) => ({ value: String(budget), label: `about ${duration(budget * 1000)}` }))}
-        onChange={(event) => setSeconds(Number(event.target.value))}
-      />
-      {codeQuestionIds.map((id) => (
+      {questions.some((id) => questionCards[id].searches) && (
+        <SelectField
+          className="w-56"
+          label="a search may spend"
+          hint="counted in operations: the same answer on every machine"
+          value={String(seconds)}
+          choices={BUDGETS.map((budget) => ({ value: String(budget), label: `about ${duration(budget * 1000)}` }))}
+          onChange={(event) => setSeconds(Number(event.target.value))}
+        />
+      )}
+      {questions.map((id) => (
         <Question
           key={id}
           id={id}
@@ -51,7 +55,7 @@ export default function DeeperBench({ code, outline, mayKeep, earlier }: Props) 
   );
 }
 
-interface QuestionProps extends Props {
+interface QuestionProps extends Omit<Props, 'questions'> {
   id: CodeQuestionId;
   seconds: number;
 }
@@ -60,7 +64,7 @@ function Question({ id, code, outline, mayKeep, earlier, seconds }: QuestionProp
   const { examination, ask, cancel } = useExamination(code, id);
   const [open] = useState(() => earlier.find(({ state }) => state === 'working'));
   const server = useKeptAnalysis(code.id, id, open);
-  const { title, searches, obstacle } = codeQuestions[id];
+  const { title, searches, obstacle } = questionCards[id];
   const unfit = obstacle(outline);
   const told = earlier.find(({ lines }) => lines.length > 0);
   const isIdle = examination.state !== 'working' && server.kept.state !== 'working';

@@ -6,7 +6,7 @@ import { Notice } from '@/components/ui/Notice.tsx';
 import { counted, duration } from '@/components/ui/numbers.ts';
 import { Progress } from '@/components/ui/Progress.tsx';
 import { RefusalNotice } from '../RefusalNotice.tsx';
-import { Histogram } from './AnswerBlock.tsx';
+import { Compared, Histogram } from './AnswerBlock.tsx';
 import type { KeptState } from './use-kept-analysis.ts';
 
 interface Props {
@@ -66,7 +66,7 @@ export function KeptAnalysis({ title, kept, onCancel }: Props) {
 
 /** An earlier analysis that told something: who asked, with which budget, how long it took, and its list. */
 export function EarlierAnalysis({ analysis, searches }: { analysis: Analysis; searches: boolean }) {
-  const { createdAt, createdBy, elapsedMs, seconds, listName, histogram, id } = analysis;
+  const { createdAt, createdBy, elapsedMs, seconds, listName, histogram, table, id } = analysis;
   const parts = [
     `Kept ${createdAt.slice(0, 16).replace('T', ' ')} UTC by ${createdBy}`,
     searches && `about ${duration(seconds * 1000)} to spend`,
@@ -82,6 +82,7 @@ export function EarlierAnalysis({ analysis, searches }: { analysis: Analysis; se
           </a>
         )}
       </p>
+      {table && <Compared {...table} />}
       {histogram && <Histogram {...histogram} />}
     </>
   );

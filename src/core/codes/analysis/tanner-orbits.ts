@@ -19,6 +19,12 @@ export interface TannerOrbits {
   symmetry: 'none' | 'cyclic shift' | 'block shift' | 'given';
 }
 
+/** Which columns a count begins at, for the method that it states. */
+export function orbitsText({ symmetry, columns }: TannerOrbits): string {
+  if (symmetry === 'none') return 'every column';
+  return `${columns.representatives.length} of ${columns.orbitOf.length} columns, one an orbit (${symmetry})`;
+}
+
 /** Orbits under the permutations given, each checked here to map the set of rows onto itself (one that does not is left
  *  out); without any, under the cyclic shift of all columns, or of blocks of columns, when the rows are closed under it. */
 export function tannerOrbits(H: SparseMatrix, given: readonly Symmetry[] = []): TannerOrbits {

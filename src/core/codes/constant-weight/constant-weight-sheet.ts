@@ -2,6 +2,7 @@ import { designFromBlocks } from '../../designs/block-design.ts';
 import { mapsBlocksOntoThemselves } from '../../designs/block-symmetry.ts';
 import type { ResolutionOutcome } from '../../designs/resolve.ts';
 import type { Enclosure, Graded } from '../../evidence.ts';
+import { laps } from '../laps.ts';
 import type { Property } from '../properties.ts';
 import { type ConstantWeightCode, complementWords, wordOf } from './constant-weight-code.ts';
 import { disjunctness } from './disjunctness.ts';
@@ -41,6 +42,8 @@ export interface SheetBudget {
   resolutionNodes?: number;
   /** Steps of the search for covers of a word. */
   coverSteps?: number;
+  /** Milliseconds; with it the lines that take time say how much. */
+  clock?(): number;
 }
 
 /** Words beyond which parallel classes are not searched for unless a budget is given. */
@@ -51,22 +54,32 @@ export function constantWeightSheet(code: ConstantWeightCode, budget: SheetBudge
   const { n, w, M, distanceEvidence } = code;
   const least = distanceEvidence.value.lower;
   const { grade, method } = distanceEvidence;
+  const lap = laps(budget.clock);
+  const times = new Map<string, number | undefined>();
+  const timed = <T>(key: string, value: T): T => {
+    times.set(key, lap());
+    return value;
+  };
   const values = {
     n,
     w,
     M,
     distance: distanceEvidence,
-    size: sizeVerdict(code),
+    size: timed('optimality', sizeVerdict(code)),
     messageBits: M < 1 ? 0 : Math.floor(Math.log2(M)),
     balanced: 2 * w === n,
     correctionRadius: { value: Math.max(0, Math.floor((least - 1) / 2)), grade, method },
     detectionRadius: { value: Math.max(0, least - 1), grade, method },
-    disjunctness: disjunctness(code, budget.coverSteps),
-    wordsOnPosition: wordsOnPosition(code),
-    resolution: resolutionOf(code, budget.resolutionNodes),
-    optical: opticalOf(code),
+    disjunctness: timed('disjunct', disjunctness(code, budget.coverSteps)),
+    wordsOnPosition: timed('shortened', wordsOnPosition(code)),
+    resolution: timed('classes', resolutionOf(code, budget.resolutionNodes)),
+    optical: timed('optical', opticalOf(code)),
   };
-  return { ...values, properties: propertyLines(values, code) };
+  const properties = propertyLines(values, code).map((line) => {
+    const elapsedMs = times.get(line.key);
+    return elapsedMs === undefined ? line : { ...line, elapsedMs };
+  });
+  return { ...values, properties };
 }
 
 /** A search node of a large code is dear, so that the page is not kept waiting for what a deeper look can be asked for. */

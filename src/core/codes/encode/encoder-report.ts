@@ -44,19 +44,24 @@ const SHOWN_EXPONENTS = 24;
  *  @throws ParamError when the matrix has no columns; Error when an encoder fails a check, a fault of this program. */
 export function encoderReport(
   code: { H: SparseMatrix },
-  options: { seed?: string; words?: number } = {},
+  options: { seed?: string; words?: number; onProgress?(share: number): void } = {},
 ): EncoderReport {
   const { H } = code;
   if (H.cols < 1) throw new ParamError('H', `${H.rows} × ${H.cols}`, 'a matrix with columns');
   const words = options.words ?? 8;
   const seed = options.seed ?? 'encoders';
+  const { onProgress } = options;
   const register = shiftRegister(H);
+  onProgress?.(0.1);
   const systematic = attempt(() => {
     if (!register) refuseLong(H);
     return systematicEncoder(code);
   });
+  onProgress?.(0.3);
   const triangular = attempt(() => approximateTriangularEncoder(H));
+  onProgress?.(0.6);
   const circulants = attempt(() => systematicCirculants(H));
+  onProgress?.(0.8);
   const check = (encoder: WordEncoder) => checkWords(H, encoder, words, seed);
   const encoders = [
     registerEntry(register, systematic, check),

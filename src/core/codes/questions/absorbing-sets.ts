@@ -1,4 +1,6 @@
 import { absorbingSets as search } from '../analysis/sets/absorbing-sets.ts';
+import { tannerOrbits } from '../analysis/tanner-orbits.ts';
+import { knownSymmetry } from '../known-symmetry.ts';
 import type { CodeQuestion } from './question.ts';
 import { setList } from './set-list.ts';
 
@@ -8,16 +10,10 @@ const KEPT = 500;
 
 /** Small sets of bits that bit flipping does not leave: a bits, b checks that meet them an odd number of times. */
 export const absorbingSets: CodeQuestion = {
-  title: 'Small absorbing sets',
-  searches: true,
-  obstacle({ columnWeights }) {
-    const [least, most] = [columnWeights[0]?.[0] ?? 0, columnWeights.at(-1)?.[0] ?? 0];
-    return least >= 3 && most <= 5
-      ? null
-      : `asked of matrices whose columns have weights 3 to 5; here ${least} to ${most}`;
-  },
-  answer({ H }, { seconds, onProgress }) {
+  answer(code, { seconds, onProgress }) {
+    const { H } = code;
     const { classes, completeTo } = search(H, {
+      orbits: tannerOrbits(H, knownSymmetry(code)).columns,
       largest: LARGEST,
       nodes: seconds * BRANCHES_A_SECOND,
       keep: KEPT,

@@ -1,19 +1,18 @@
 import { countCycles } from '../analysis/cycles.ts';
 import { girth as girthOf } from '../analysis/girth.ts';
-import { tannerOrbits } from '../analysis/tanner-orbits.ts';
+import { orbitsText, tannerOrbits } from '../analysis/tanner-orbits.ts';
+import { knownSymmetry } from '../known-symmetry.ts';
 import { spaced } from '../properties.ts';
 import type { CodeQuestion } from './question.ts';
 
 /** Cycles of the Tanner graph of every length that can be counted exactly, below twice the girth, and the shortest ones
  *  through each bit. */
 export const cycles: CodeQuestion = {
-  title: 'Cycles',
-  searches: false,
-  obstacle: ({ ones }) => (ones > 0 ? null : 'asked of matrices with ones'),
-  answer({ H, columnSymmetry }) {
-    const orbits = tannerOrbits(H, columnSymmetry);
+  answer(code) {
+    const { H } = code;
+    const orbits = tannerOrbits(H, knownSymmetry(code));
     const girth = girthOf(H, orbits);
-    const method = 'closed walks that never turn back';
+    const method = `closed walks that never turn back, from ${orbitsText(orbits)}`;
     if (!Number.isFinite(girth))
       return {
         lines: [{ key: 'girth', label: 'Girth', text: 'no cycles', grade: 'computed', method: 'breadth-first search' }],

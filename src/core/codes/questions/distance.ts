@@ -1,4 +1,5 @@
 import { analyseLdpc } from '../analyse-ldpc.ts';
+import { knownSymmetry } from '../known-symmetry.ts';
 import { enclosureLine } from '../properties.ts';
 import type { CodeQuestion } from './question.ts';
 
@@ -7,12 +8,10 @@ const OPERATIONS_A_SECOND = 2e8;
 
 /** The minimum distance, between what is proved and the lightest word found. */
 export const distance: CodeQuestion = {
-  title: 'Minimum distance',
-  searches: true,
-  obstacle: ({ k }) => (k === 0 ? 'asked of codes with words besides zero' : null),
-  answer(code, { seconds }) {
+  answer(code, { seconds, onProgress }) {
     const effort = { wordOperations: seconds * OPERATIONS_A_SECOND };
-    const found = analyseLdpc(code, { cycles: false, distance: effort }).distance;
+    const known = { ...code, columnSymmetry: knownSymmetry(code) };
+    const found = analyseLdpc(known, { cycles: false, distance: effort, onProgress }).distance;
     return { lines: [enclosureLine('distance', 'Minimum distance', found)] };
   },
 };

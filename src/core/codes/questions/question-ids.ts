@@ -6,6 +6,7 @@ export const codeQuestionIds = [
   'stoppingSets',
   'absorbingSets',
   'thresholds',
+  'encoders',
 ] as const;
 
 export type CodeQuestionId = (typeof codeQuestionIds)[number];

@@ -17,6 +17,13 @@ export interface ExamineOptions {
   onProgress?(share: number): void;
 }
 
+/** Values side by side, each of which the lines hold too, with its grade. */
+export interface AnswerTable {
+  of: string;
+  columns: string[];
+  rows: (string | number)[][];
+}
+
 export interface CodeAnswer {
   /** Each with its grade, method and source. */
   lines: Property[];
@@ -24,15 +31,11 @@ export interface CodeAnswer {
   list?: { fileName: string; text: string };
   /** Pairs of a value and how many columns have it. */
   histogram?: { of: string; bars: [number, number][] };
+  table?: AnswerTable;
 }
 
-/** Something that takes time of its own to find out about a code. */
+/** Something that takes time of its own to find out about a code; cards.ts says of which codes it is asked. */
 export interface CodeQuestion {
-  title: string;
-  /** Whether more seconds find more. */
-  searches: boolean;
-  /** Why it cannot be asked of such a code, with what would be accepted; null when it can. */
-  obstacle(outline: CodeOutline): string | null;
   /** @throws LimitError when a limit is passed; ParamError when the code does not fit. */
   answer(code: AnalysableCode, options: ExamineOptions): CodeAnswer;
 }

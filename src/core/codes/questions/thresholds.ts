@@ -8,14 +8,12 @@ const asked: readonly (ThresholdQuestion & { label: string })[] = [
   { channel: 'bsc', decoder: 'min-sum', label: 'Threshold p, min-sum' },
   { channel: 'bec', decoder: 'peeling', label: 'Threshold, erasures' },
   { channel: 'awgn', decoder: 'sum-product', label: 'Threshold σ, sum-product on AWGN' },
+  { channel: 'awgn', decoder: 'min-sum', label: 'Threshold σ, min-sum on AWGN' },
 ];
 
 /** The worst channel that codes with these weights correct when they are long and without short cycles. Of this very code
  *  it says nothing certain. */
 export const thresholds: CodeQuestion = {
-  title: 'Thresholds of its ensemble',
-  searches: false,
-  obstacle: ({ columnWeights }) => (columnWeights[0]?.[0] ? null : 'asked of matrices without an empty column'),
   answer({ H }, { onProgress }) {
     const lines = asked.map(({ label, ...question }, i) => {
       const value = thresholdOfMatrix(H, question);

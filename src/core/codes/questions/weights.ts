@@ -1,16 +1,8 @@
-import { ENUMERATION_LIMIT, weightDistribution } from '../analysis/distance/weight-distribution.ts';
+import { weightDistribution } from '../analysis/distance/weight-distribution.ts';
 import type { CodeQuestion } from './question.ts';
 
 /** How many codewords have each weight. */
 export const weights: CodeQuestion = {
-  title: 'Weight distribution',
-  searches: false,
-  obstacle({ n, k }) {
-    const smaller = Math.min(k, n - k);
-    return smaller <= ENUMERATION_LIMIT
-      ? null
-      : `asked of codes with k or n − k up to ${ENUMERATION_LIMIT}; here the smaller is ${smaller}`;
-  },
   answer({ H }) {
     const { counts, method } = weightDistribution(H);
     const rows = [...counts];

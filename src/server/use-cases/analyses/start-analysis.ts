@@ -2,7 +2,7 @@ import { setTimeout as delay } from 'node:timers/promises';
 import type { Analysis, NewAnalysis } from '@/api/analyses.ts';
 import type { Code } from '@/api/codes.ts';
 import type { AnalysableCode } from '@/core/codes/analyse-ldpc.ts';
-import { codeQuestions } from '@/core/codes/questions/index.ts';
+import { questionCards } from '@/core/codes/questions/cards.ts';
 import type { DesignSpec } from '@/core/designs/block-design.ts';
 import { type Context, nowText } from '../../context.ts';
 import { newId } from '../../ids.ts';
@@ -29,7 +29,7 @@ export async function startAnalysis(
 ): Promise<Analysis> {
   const code = await codeToWrite(context, codeId);
   refuseWords(code, 'analysis of them');
-  const obstacle = codeQuestions[question].obstacle(code);
+  const obstacle = questionCards[question].obstacle(code);
   if (obstacle) throw new Refusal('param', `question: ${obstacle}.`, { fields: { question: obstacle } });
   const { db, caller } = context;
   const existing = await workingAnalysis(db, codeId, question);

@@ -2,9 +2,7 @@ import { LimitError } from '../../../errors.ts';
 import { type BitMatrix, popcount32 } from '../../../gf2/bit-matrix.ts';
 import { nullSpace, reducedEchelon } from '../../../gf2/echelon.ts';
 import type { SparseMatrix } from '../../sparse-matrix.ts';
-
-/** Largest dimension, of the code or of its dual, whose words are all visited. */
-export const ENUMERATION_LIMIT = 26;
+import { ENUMERATION_LIMIT } from './enumeration-limit.ts';
 
 export interface WeightDistribution {
   /** Weight to number of codewords, ascending; weights without words are left out. */
