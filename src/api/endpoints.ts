@@ -231,10 +231,15 @@ export const endpoints = {
   getFleet: endpoint('GET', '/fleet', 'Where shards can be computed besides browsers, and who has joined', {
     response: fleetSchema,
   }),
-  projectPoints: endpoint('GET', '/projects/:id/points', 'Measured points of the project, of over 2,000 those that a chart needs', {
-    query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),
-    response: z.object({ points: z.array(pointSchema), omitted: z.number() }),
-  }),
+  projectPoints: endpoint(
+    'GET',
+    '/projects/:id/points',
+    'Measured points of the project, of over 2,000 those that a chart needs',
+    {
+      query: z.object({ codeId: z.string().optional(), runId: z.string().optional() }),
+      response: z.object({ points: z.array(pointSchema), omitted: z.number() }),
+    },
+  ),
   listReleases: endpoint('GET', '/projects/:id/releases', 'Releases of the project, newest first', {
     query: z.object(page),
     response: z.object({ releases: z.array(releaseSchema), next: z.string().optional() }),
