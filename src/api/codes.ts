@@ -18,22 +18,40 @@ export const derivationSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('constant-weight'), complement: z.boolean().optional() }),
 ]);
 
+const fingerprintSchema = z.string().regex(/^[0-9a-f]{64}$/, '64 hexadecimal digits');
+
+/** Steps from a matrix that was uploaded to the project, named by its fingerprint; no construction gives it anew. */
+export const storedDerivationSchema = z.strictObject({
+  kind: z.literal('stored'),
+  base: fingerprintSchema,
+  transforms: z
+    .array(z.looseObject({ kind: z.string() }))
+    .min(1)
+    .max(12),
+});
+
 /** How a kept code's matrix came from its design or, of an uploaded one, from the file. */
 const keptDerivationSchema = z.discriminatedUnion('kind', [
   ...derivationSchema.options,
+  storedDerivationSchema,
   z.strictObject({ kind: z.literal('matrix'), checksAre: z.enum(['rows', 'columns']) }),
 ]);
 
-export const newCodeSchema = z.strictObject({
-  name: z.string().trim().min(1).max(120).optional(),
-  design: designSpecSchema,
-  derivation: derivationSchema,
-  /** The fingerprint the browser computed; the server refuses the code when its own differs. */
-  fingerprint: z
-    .string()
-    .regex(/^[0-9a-f]{64}$/, '64 hexadecimal digits')
-    .optional(),
-});
+export const newCodeSchema = z
+  .strictObject({
+    name: z.string().trim().min(1).max(120).optional(),
+    /** Left out for a stored derivation, whose base names it. */
+    design: designSpecSchema.optional(),
+    derivation: z.discriminatedUnion('kind', [...derivationSchema.options, storedDerivationSchema]),
+    /** The fingerprint the browser computed; the server refuses the code when its own differs. */
+    fingerprint: fingerprintSchema.optional(),
+  })
+  .superRefine(({ design, derivation }, context) => {
+    const isStored = derivation.kind === 'stored';
+    if (isStored === (design === undefined)) return;
+    const message = isStored ? 'none: derivation.base names the matrix' : 'a design: {"family", "params"}';
+    context.addIssue({ code: 'custom', path: ['design'], message });
+  });
 export type NewCode = z.infer<typeof newCodeSchema>;
 
 const gradeSchema = z.enum(['proved', 'computed', 'bounded', 'sampled']);

@@ -61,6 +61,7 @@ export { fingerprint } from './codes/fingerprint.ts';
 export { deriveLdpc, type LdpcCode, type Transform } from './codes/ldpc.ts';
 export { type CodeSheet, codeSheet, type SheetRequest } from './codes/sheet.ts';
 export { type SparseMatrix, syndrome } from './codes/sparse-matrix.ts';
+export { type StoredRequest, storedSheet } from './codes/stored-sheet.ts';
 export { exactFit, rankFits } from './codes/transforms/exact-fit.ts';
 export { transformKinds } from './codes/transforms/registry.ts';
 export { decoderCard, decoderCards, edgeVisitsPerBit } from './decoders/catalogue.ts';

@@ -1,4 +1,4 @@
-import type { NewCode } from '@/api/codes.ts';
+import type { Code, NewCode } from '@/api/codes.ts';
 import type { ProjectRole, Requirements } from '@/api/projects.ts';
 import type { Stopping } from '@/api/runs.ts';
 import type { Channel } from '@/core/channels/channel.ts';
@@ -21,7 +21,7 @@ export const demoAccounts: readonly {
 export interface DemoCode {
   key: string;
   name: string;
-  design: NewCode['design'];
+  design: Code['design'];
   derivation: NewCode['derivation'];
 }
 
@@ -158,10 +158,10 @@ export const demoProjects: readonly DemoProject[] = [
   },
 ];
 
-function plane(family: string, q: number): NewCode['design'] {
+function plane(family: string, q: number): Code['design'] {
   return { family, params: { q } };
 }
 
-function triples(v: number, method: string): NewCode['design'] {
+function triples(v: number, method: string): Code['design'] {
   return { family: 'steiner-triple', params: { v, method } };
 }

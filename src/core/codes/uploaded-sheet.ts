@@ -1,13 +1,11 @@
 import type { BlockDesign } from '../designs/block-design.ts';
 import type { TimedCertificate } from '../designs/certify.ts';
-import type { DesignPrediction } from '../designs/family.ts';
 import { certifyUpload } from '../designs/upload.ts';
 import { ParamError } from '../errors.ts';
 import type { Upload } from '../formats/read-upload.ts';
 import type { UploadFormat } from '../formats/recognise.ts';
-import { analyseLdpc } from './analyse-ldpc.ts';
+import { describeMatrix } from './describe-matrix.ts';
 import { deriveLdpc, type LdpcCode } from './ldpc.ts';
-import { propertiesOf } from './properties.ts';
 import type { CodeSheet, SheetStep } from './sheet.ts';
 import { type SparseMatrix, transpose } from './sparse-matrix.ts';
 
@@ -30,10 +28,6 @@ export interface UploadedSheet extends Omit<CodeSheet, 'certificate'> {
   derivation: { kind: 'matrix'; checksAre: 'rows' | 'columns' } | { kind: 'ldpc'; checks: 'blocks' | 'points' };
   certificate: TimedCertificate | null;
 }
-
-const nothingPredicted: DesignPrediction = { t: 0, v: 0, b: 0, k: 0, r: 0, lambda: 0, codes: [] };
-/** Cycles of larger matrices without known symmetry are counted on demand. */
-const MOST_ONES_FOR_CYCLES = 2_000_000;
 
 export function summariseUpload(upload: Upload): UploadSummary {
   const { format } = upload;
@@ -63,7 +57,13 @@ export function uploadedSheet(
     const designTitle = uploadedTitle(upload.design, t, lambda);
     const timed = { ...certificate, elapsedMs: clock() - from };
     onStep?.('analyse');
-    return { ...described(code, clock), format, designTitle, certificate: timed, derivation: { kind: 'ldpc', checks } };
+    return {
+      ...describeMatrix(code, clock),
+      format,
+      designTitle,
+      certificate: timed,
+      derivation: { kind: 'ldpc', checks },
+    };
   }
   const checksAre = request.checksAre ?? toldByShape(upload.matrix);
   const H = checksAre === 'rows' ? upload.matrix : transpose(upload.matrix);
@@ -71,7 +71,7 @@ export function uploadedSheet(
   const designTitle = `Uploaded matrix, ${H.rows} × ${H.cols}`;
   const code: LdpcCode = { H, checks: 'blocks', transforms: [] };
   return {
-    ...described(code, clock),
+    ...describeMatrix(code, clock),
     format,
     designTitle,
     certificate: null,
@@ -97,12 +97,4 @@ function missing(param: string, accepted: string): never {
 function uploadedTitle({ v, b, blockStart }: BlockDesign, t: number, lambda: number): string {
   if (t === 0) return `Uploaded blocks, ${b} on ${v} points`;
   return `Uploaded ${t}-(${v}, ${blockStart[1]}, ${lambda}) design`;
-}
-
-function described(code: LdpcCode, clock: () => number) {
-  const { H } = code;
-  const analysis = analyseLdpc(code, { cycles: H.colIndex.length <= MOST_ONES_FOR_CYCLES, clock });
-  const properties = propertiesOf(code, analysis, nothingPredicted);
-  const { n, k, rowWeights, columnWeights } = analysis;
-  return { H, n, k, properties, rowWeights, columnWeights };
 }

@@ -1,8 +1,5 @@
-import type { BuildAnswer } from '@workers/build/api.ts';
-import type { NewCode } from '@/api/codes.ts';
+import type { BuildAnswer, BuildRequest } from '@workers/build/api.ts';
 import { createWorkerPool, type PoolLimits } from './worker-pool.ts';
-
-export type BuildRequest = Pick<NewCode, 'design' | 'derivation'>;
 
 export interface BuildPool {
   /** Builds in a worker thread. @throws Refusal `busy` when too much is waiting. */

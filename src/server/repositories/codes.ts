@@ -1,5 +1,5 @@
 import { isDeepStrictEqual } from 'node:util';
-import type { Code, NewCode } from '@/api/codes.ts';
+import type { Code } from '@/api/codes.ts';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import type { Database } from '../db/database.ts';
 import { packMatrix, unpackMatrix } from '../files/matrix-blob.ts';
@@ -13,7 +13,7 @@ export interface NewCodeRow extends Analysis {
   id: string;
   projectId: string;
   name: string;
-  design: NewCode['design'];
+  design: Code['design'];
   designTitle: string;
   derivation: Code['derivation'];
   n: number;
@@ -76,19 +76,20 @@ export async function codeIdByFingerprint(db: Database, projectId: string, finge
 }
 
 /** Codes of a project that came from one design, oldest first. */
-export async function codesOfDesign(db: Database, projectId: string, design: NewCode['design']) {
+export async function codesOfDesign(db: Database, projectId: string, design: Code['design']) {
   const rows = await db('codes')
     .where({ project_id: projectId })
     .whereRaw("json_extract(design, '$.family') = ?", design.family)
     .orderBy('id')
-    .select('id', 'name', 'design', 'derivation');
+    .select('id', 'name', 'design', 'derivation', 'fingerprint');
   return rows
     .map(
-      (row: Row): Pick<Code, 'id' | 'name' | 'design' | 'derivation'> => ({
+      (row: Row): Pick<Code, 'id' | 'name' | 'design' | 'derivation' | 'fingerprint'> => ({
         id: row.id!,
         name: row.name!,
         design: JSON.parse(row.design!),
         derivation: JSON.parse(row.derivation!),
+        fingerprint: row.fingerprint!,
       }),
     )
     .filter((row) => isDeepStrictEqual(row.design, design));
@@ -120,6 +121,16 @@ export async function updateProperties(db: Database, id: string, properties: Cod
 export async function runsUsingCode(db: Database, id: string): Promise<number> {
   const row = await db('points').where({ code_id: id }).countDistinct({ runs: 'run_id' }).first();
   return Number(row?.runs ?? 0);
+}
+
+/** Codes whose steps begin at this one's matrix. */
+export async function codesFrom(db: Database, projectId: string, fingerprint: string): Promise<number> {
+  const row = await db('codes')
+    .where({ project_id: projectId })
+    .whereRaw("json_extract(derivation, '$.base') = ?", fingerprint)
+    .count({ count: '*' })
+    .first();
+  return Number(row?.count ?? 0);
 }
 
 export async function deleteCode(db: Database, id: string): Promise<void> {

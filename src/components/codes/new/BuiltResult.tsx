@@ -2,17 +2,17 @@ import type { BuiltCode } from '@workers/build/api.ts';
 import { type ReactNode, useEffect, useRef } from 'react';
 import { InTurn } from '@/components/ui/InTurn.tsx';
 import { duration } from '@/components/ui/numbers.ts';
-import type { SheetRequest } from '@/core/codes/sheet.ts';
 import { CertificateBlock } from '../CertificateBlock.tsx';
 import { MatrixPlot } from '../matrix-plot/MatrixPlot.tsx';
 import { Fingerprint, PropertiesBlock } from '../PropertiesBlock.tsx';
 import { sizeText } from '../size-text.ts';
 import WeightCharts from '../WeightCharts.tsx';
+import type { Keepable } from './use-build.ts';
 
 interface Props {
   built: BuiltCode;
   elapsedMs: number;
-  kind: SheetRequest['derivation']['kind'];
+  kind: Keepable['derivation']['kind'];
   /** What can be done with it. */
   children: ReactNode;
 }

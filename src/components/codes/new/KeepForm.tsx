@@ -4,14 +4,14 @@ import { ApiFailure } from '@/client/api.ts';
 import { Button } from '@/components/ui/Button.tsx';
 import { TextField } from '@/components/ui/fields.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
-import type { SheetRequest } from '@/core/codes/sheet.ts';
 import { paths } from '@/paths.ts';
 import { keepCode } from './keep.ts';
+import type { Keepable } from './use-build.ts';
 
 interface Props {
   projectId: string;
   built: BuiltCode;
-  request: SheetRequest;
+  request: Keepable;
 }
 
 /** Hands the spec and the fingerprint to the server, which builds the code itself and refuses it if they differ. */

@@ -92,7 +92,12 @@ function Bench({ engine, projectId, mayKeep, search }: Props & { engine: Engine 
       </div>
       <div className="grid gap-4">
         <Prediction family={family} predicted={predicted} choice={choice} />
-        <BuildControls build={build} allowed={predicted.ok} onStart={() => start(request)} onCancel={cancel} />
+        <BuildControls
+          build={build}
+          allowed={predicted.ok}
+          onStart={() => start({ keep: request, work: () => request })}
+          onCancel={cancel}
+        />
       </div>
       {build.state === 'built' && (
         <Suspense fallback={<p className="text-quiet">Drawing …</p>}>

@@ -1,12 +1,22 @@
-import type { BuiltCode } from '@workers/build/api.ts';
+import type { BuildRequest, BuiltCode } from '@workers/build/api.ts';
 import { startTransition, useCallback, useEffect, useRef, useState } from 'react';
-import type { SheetRequest, SheetStep } from '@/core/codes/sheet.ts';
+import type { NewCode } from '@/api/codes.ts';
+import type { SheetStep } from '@/core/codes/sheet.ts';
 import { type Refusal, refusalFrom, refusalOf } from '../refusal.ts';
+
+/** What the server would be asked to keep. */
+export type Keepable = Pick<NewCode, 'design' | 'derivation'>;
+
+export interface BuildPlan {
+  keep: Keepable;
+  /** What the worker is given: the same for a construction, the matrix itself where that is where the steps begin. */
+  work(): BuildRequest | Promise<BuildRequest>;
+}
 
 export type BuildState =
   | { state: 'idle' }
   | { state: 'working'; step: SheetStep | null }
-  | { state: 'built'; built: BuiltCode; request: SheetRequest; elapsedMs: number }
+  | { state: 'built'; built: BuiltCode; request: Keepable; elapsedMs: number }
   | { state: 'refused'; refusal: Refusal };
 
 /** Builds in a worker, one build at a time; leaving the page or choosing something else cancels it. */
@@ -20,7 +30,7 @@ export function useBuild() {
     setBuild({ state: 'idle' });
   }, []);
 
-  const start = useCallback(async (request: SheetRequest) => {
+  const start = useCallback(async ({ keep, work }: BuildPlan) => {
     running.current?.abort();
     const controller = new AbortController();
     running.current = controller;
@@ -36,11 +46,11 @@ export function useBuild() {
     };
     try {
       const { buildCodeInWorker } = await import('@/client/build-pool.ts');
-      const built = await buildCodeInWorker(request, {
+      const built = await buildCodeInWorker(await work(), {
         signal: controller.signal,
         onProgress: (step) => still() && setBuild({ state: 'working', step }),
       });
-      end({ state: 'built', built, request, elapsedMs: performance.now() - from });
+      end({ state: 'built', built, request: keep, elapsedMs: performance.now() - from });
     } catch (error) {
       end({ state: 'refused', refusal: refusalOfBuild(error) });
     }

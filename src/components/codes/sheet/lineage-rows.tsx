@@ -3,7 +3,7 @@ import { wholeNumber } from '@/components/ui/numbers.ts';
 import type { TitleRow } from '@/components/ui/TitleBlock.tsx';
 import { paths } from '@/paths.ts';
 import { type Choice, choiceToSearch } from '../new/address.ts';
-import { transformText } from '../transform/transform-forms.ts';
+import { transformSearch, transformText } from '../transform/transform-forms.ts';
 
 /** A step's code, where the project keeps it. */
 export type Kept = { id: string; name: string } | null;
@@ -22,67 +22,95 @@ export function lineageRows(code: Code, kept: readonly Kept[]): TitleRow[] {
 
 function derivationRows(code: Code, kept: readonly Kept[]): TitleRow[] {
   const { derivation } = code;
-  if (derivation.kind === 'constant-weight') {
-    const value = derivation.complement ? 'complements of the blocks' : 'the blocks';
-    return [{ label: 'Words', value: <Opened code={code} steps={0} kept={null} text={value} /> }];
+  switch (derivation.kind) {
+    case 'constant-weight': {
+      const value = derivation.complement ? 'complements of the blocks' : 'the blocks';
+      return [{ label: 'Words', value: <Opened code={code} steps={[]} kept={null} text={value} /> }];
+    }
+    case 'matrix': {
+      const note = derivation.checksAre === 'rows' ? undefined : 'turned over when it was read';
+      return [{ label: 'Matrix', value: `as uploaded, its ${derivation.checksAre} are the checks`, note }];
+    }
+    case 'stored': {
+      const value = <Opened code={code} steps={[]} kept={kept[0] ?? null} text="as uploaded" />;
+      const note = `fingerprint ${derivation.base.slice(0, 8)} …`;
+      return [{ label: 'Matrix', value, note }, ...stepRows(code, derivation.transforms, kept)];
+    }
+    case 'ldpc': {
+      const byBlocks = derivation.checks === 'blocks';
+      const text = byBlocks ? 'one check a block' : 'one check a point';
+      return [
+        {
+          label: 'Matrix',
+          value: <Opened code={code} steps={[]} kept={kept[0] ?? null} text={text} />,
+          note: byBlocks ? 'rows are blocks, columns points' : 'rows are points, columns blocks',
+        },
+        ...stepRows(code, derivation.transforms ?? [], kept),
+      ];
+    }
   }
-  if (derivation.kind === 'matrix') {
-    const note = derivation.checksAre === 'rows' ? undefined : 'turned over when it was read';
-    return [{ label: 'Matrix', value: `as uploaded, its ${derivation.checksAre} are the checks`, note }];
-  }
-  const steps = derivation.transforms ?? [];
-  const byBlocks = derivation.checks === 'blocks';
-  return [
-    {
-      label: 'Matrix',
-      value: (
-        <Opened
-          code={code}
-          steps={0}
-          kept={kept[0] ?? null}
-          text={byBlocks ? 'one check a block' : 'one check a point'}
-        />
-      ),
-      note: byBlocks ? 'rows are blocks, columns points' : 'rows are points, columns blocks',
-    },
-    ...(steps.length === 0
-      ? [{ label: 'Transforms', value: 'none' }]
-      : steps.map((step, i) => ({
-          label: `Step ${i + 1}`,
-          value:
-            i + 1 === steps.length ? (
-              transformText(step)
-            ) : (
-              <Opened code={code} steps={i + 1} kept={kept[i + 1] ?? null} text={transformText(step)} />
-            ),
-          note: i + 1 === steps.length ? 'this code' : undefined,
-        }))),
-  ];
 }
+
+function stepRows(code: Code, steps: readonly Step[], kept: readonly Kept[]): TitleRow[] {
+  if (steps.length === 0) return [{ label: 'Transforms', value: 'none' }];
+  return steps.map((step, i) => {
+    const label = `Step ${i + 1}`;
+    const text = transformText(step);
+    if (i + 1 === steps.length) return { label, value: text, note: 'this code' };
+    const made = steps.slice(0, i + 1);
+    return {
+      label,
+      value: <Opened code={code} steps={made} kept={kept[i + 1] ?? null} before={kept[i]} text={text} />,
+    };
+  });
+}
+
+type Step = { kind: string };
 
 interface OpenedProps {
   code: Code;
-  /** Transforms already made at this step. */
-  steps: number;
+  /** Transforms made up to this step. */
+  steps: readonly Step[];
   kept: Kept;
+  /** The code of the step before, where it is kept. */
+  before?: Kept;
   text: string;
 }
 
-function Opened({ code, steps, kept, text }: OpenedProps) {
-  const { projectId, design, derivation } = code;
-  // A file gives nothing to build again.
-  if (!kept && design.family === 'uploaded') return <>{text}</>;
-  const isThis = derivation.kind !== 'ldpc' || (derivation.transforms ?? []).length === 0;
-  const href = kept ? paths.code(projectId, kept.id) : paths.newCode(projectId) + choiceToSearch(choiceAt(code, steps));
-  const where = isThis ? 'open in the builder' : kept ? `kept as ${kept.name}` : 'not kept: open in the builder';
+function Opened({ code, steps, kept, before, text }: OpenedProps) {
+  const opening = openingOf(code, steps, kept, before ?? null);
+  if (!opening) return <>{text}</>;
   return (
     <>
       {text}
-      <a className="link block font-normal text-tiny" href={href}>
-        {where}
+      <a className="link block font-normal text-tiny" href={opening.href}>
+        {opening.where}
       </a>
     </>
   );
+}
+
+/** The kept code of a step, or where it can be made again: in the builder or, for steps from an upload, from the code of the
+ *  step before. */
+function openingOf(
+  code: Code,
+  steps: readonly Step[],
+  kept: Kept,
+  before: Kept,
+): { href: string; where: string } | null {
+  const { projectId, design, derivation } = code;
+  const isStep =
+    derivation.kind === 'stored' || (derivation.kind === 'ldpc' && (derivation.transforms ?? []).length > 0);
+  if (kept)
+    return { href: paths.code(projectId, kept.id), where: isStep ? `kept as ${kept.name}` : 'open in the builder' };
+  if (design.family !== 'uploaded') {
+    const href = paths.newCode(projectId) + choiceToSearch(choiceAt(code, steps.length));
+    return { href, where: isStep ? 'not kept: open in the builder' : 'open in the builder' };
+  }
+  const last = steps.at(-1);
+  if (!before || !last) return null;
+  const href = paths.transform(projectId, before.id) + transformSearch(last);
+  return { href, where: 'not kept: take this step again' };
 }
 
 function choiceAt({ design, derivation }: Code, steps: number): Choice {

@@ -1,18 +1,17 @@
 import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
-import type { Code } from '@/api/codes.ts';
 import { ChoiceGroup } from '@/components/ui/ChoiceGroup.tsx';
 import { NumberField, TextAreaField, TextField } from '@/components/ui/fields.tsx';
 import { Notice } from '@/components/ui/Notice.tsx';
-import type { SheetRequest } from '@/core/codes/sheet.ts';
 import { BuildControls } from '../new/BuildControls.tsx';
 import { KeepForm } from '../new/KeepForm.tsx';
 import { useBuild } from '../new/use-build.ts';
+import { beginsAtUpload, nextStep, type Transformed } from './next-step.ts';
 import { formOf, type TransformField, type TransformForm, transformForms, transformFrom } from './transform-forms.ts';
 
 const BuiltResult = lazy(() => import('../new/BuiltResult.tsx').then((module) => ({ default: module.BuiltResult })));
 
 interface Props {
-  code: Pick<Code, 'projectId' | 'design' | 'derivation' | 'name'>;
+  code: Transformed;
   mayKeep: boolean;
   /** The address's query, for the first draw. */
   search: string;
@@ -20,21 +19,21 @@ interface Props {
 
 type Typed = Record<string, string>;
 
-/** One more transform of a code: stated, built and verified in this browser, kept as a code of its own. The code it came
- *  from stays as it is. */
+/** One more transform of a code: stated, built in this browser, kept as a code of its own. The code it came from stays as it
+ *  is. */
 export default function TransformBench({ code, mayKeep, search }: Props) {
   const [form, setForm] = useState<TransformForm>(() => startingForm(search));
   const [typed, setTyped] = useState<Typed>(() => startingTyped(startingForm(search), search));
   const { build, start, cancel } = useBuild();
-  const request = useMemo(() => requestOf(code, form, typed), [code, form, typed]);
+  const plan = useMemo(() => nextStep(code, transformFrom(form, typed)), [code, form, typed]);
   useEffect(
     () => history.replaceState(history.state, '', `?${new URLSearchParams({ kind: form.kind, ...typed })}`),
     [form, typed],
   );
-  if (!request)
+  if (!plan)
     return (
       <Notice kind="note" word="Not offered">
-        This code was not built from a construction here, so no further step can be built on it.
+        The words of a constant-weight code are no parity checks, so none of these steps can be taken from them.
       </Notice>
     );
   const refused = build.state === 'refused' && build.refusal.kind === 'param' ? build.refusal : null;
@@ -57,7 +56,7 @@ export default function TransformBench({ code, mayKeep, search }: Props) {
             setForm(next);
             setTyped(startingTyped(next, ''));
           }}
-          choices={transformForms.map(({ kind, title, note }) => ({ value: kind, label: title, note }))}
+          choices={offered(code).map(({ kind, title, note }) => ({ value: kind, label: title, note }))}
         />
         <div className="grid gap-x-6 gap-y-4 sm:grid-cols-2 lg:grid-cols-3">
           {form.fields.map((field) => (
@@ -71,7 +70,7 @@ export default function TransformBench({ code, mayKeep, search }: Props) {
           ))}
         </div>
       </div>
-      <BuildControls build={build} allowed onStart={() => start(request)} onCancel={cancel} />
+      <BuildControls build={build} allowed onStart={() => start(plan)} onCancel={cancel} />
       {build.state === 'built' && (
         <Suspense fallback={<p className="text-quiet">Drawing …</p>}>
           <BuiltResult built={build.built} elapsedMs={build.elapsedMs} kind={build.request.derivation.kind}>
@@ -97,12 +96,9 @@ function startingTyped({ fields }: TransformForm, search: string): Typed {
   return Object.fromEntries(fields.map(({ name, example }) => [name, given.get(name) ?? example]));
 }
 
-/** null for what was not built from a construction here. */
-function requestOf({ design, derivation }: Props['code'], form: TransformForm, typed: Typed): SheetRequest | null {
-  if (derivation.kind !== 'ldpc' || design.family === 'uploaded') return null;
-  const transforms = [...(derivation.transforms ?? []), transformFrom(form, typed)];
-  return { design: design as SheetRequest['design'], derivation: { ...derivation, transforms } };
-}
+/** Parallel classes come from a construction; every other step needs the matrix alone. */
+const offered = (code: Transformed): readonly TransformForm[] =>
+  beginsAtUpload(code) ? transformForms.filter(({ kind }) => kind !== 'keep-classes') : transformForms;
 
 interface InputProps {
   field: TransformField;

@@ -134,6 +134,20 @@ function readField(kind: TransformField['kind'], text: string): unknown {
 
 export const formOf = (kind: string): TransformForm | undefined => transformForms.find((form) => form.kind === kind);
 
+/** The address's query that fills the form with a transform. */
+export function transformSearch({ kind, ...params }: { kind: string }): string {
+  const typed = Object.entries(params).map(([name, value]) => {
+    const field = formOf(kind)?.fields.find((one) => one.name === name);
+    return [name, typedText(field?.kind, value)];
+  });
+  return `?${new URLSearchParams({ kind, ...Object.fromEntries(typed) })}`;
+}
+
+function typedText(kind: TransformField['kind'] | undefined, value: unknown): string {
+  if (Array.isArray(value) && kind !== 'json') return value.join(kind === 'lines' ? '\n' : ' ');
+  return typeof value === 'object' ? JSON.stringify(value) : String(value);
+}
+
 /** A transform in words: "Shorten, bits 8". */
 export function transformText(transform: { kind: string }): string {
   const { kind, ...params } = transform;

@@ -10,6 +10,7 @@ import { shownJob } from '../jobs/get-job.ts';
 import { projectToWrite } from '../rights.ts';
 import { refusalOfBuild } from './build-refusal.ts';
 import { keepCode, refuseDuplicate } from './keep-code.ts';
+import { buildRequestOf } from './stored-base.ts';
 
 // The interface promises 202 for what takes over a second; some of it is spent on the way.
 const patienceMs = 900;
@@ -24,8 +25,7 @@ export async function createCode(
   await projectToWrite(context, projectId);
   const { db, caller } = context;
   if (request.fingerprint) await refuseDuplicate(db, projectId, request.fingerprint);
-  const { design, derivation } = request;
-  const building = pool.build({ design, derivation });
+  const building = pool.build(await buildRequestOf(db, projectId, request));
   const answer = await Promise.race([building, delay(patienceMs, 'late' as const)]);
   if (answer !== 'late') {
     if (!answer.ok) throw refusalOfBuild(answer.failure);

@@ -2,7 +2,7 @@ import type { Context } from '../../context.ts';
 import { inTransaction } from '../../db/database.ts';
 import { Refusal } from '../../refusal.ts';
 import { recordEvent } from '../../repositories/audit-events.ts';
-import { deleteCode as deleteRow, runsUsingCode } from '../../repositories/codes.ts';
+import { codesFrom, deleteCode as deleteRow, runsUsingCode } from '../../repositories/codes.ts';
 import { releasesOfCode } from '../../repositories/releases.ts';
 import { signOffsOfCode } from '../../repositories/sign-offs.ts';
 import { codeToWrite } from './get-code.ts';
@@ -25,6 +25,11 @@ export async function deleteCode(context: Context, codeId: string): Promise<void
     }
     if ((await signOffsOfCode(trx, codeId)) > 0) {
       throw new Refusal('in-use', 'A sign-off was asked for on this code, so it stays.');
+    }
+    const derived = await codesFrom(trx, projectId, fingerprint);
+    if (derived > 0) {
+      const begin = derived === 1 ? 'One code begins' : `${derived} codes begin`;
+      throw new Refusal('in-use', `${begin} from this uploaded matrix, so it stays.`);
     }
     await deleteRow(trx, codeId);
     const content = { name, fingerprint };

@@ -7,6 +7,7 @@ import { Refusal } from '../../refusal.ts';
 import { recordEvent } from '../../repositories/audit-events.ts';
 import { codeIdByFingerprint, insertCode } from '../../repositories/codes.ts';
 import { endJob } from '../../repositories/jobs.ts';
+import { designOf } from './stored-base.ts';
 
 export interface Keeping {
   projectId: string;
@@ -29,7 +30,8 @@ export async function keepCode(db: Database, built: BuiltCode, keeping: Keeping)
   const createdAt = nowText();
   await inTransaction(db, async (trx) => {
     await refuseDuplicate(trx, projectId, built.fingerprint);
-    const { design, derivation } = request;
+    const { derivation } = request;
+    const design = await designOf(trx, projectId, request);
     const name = request.name ?? nameOf(built, derivation.kind);
     await insertCode(trx, { ...built, id, projectId, name, design, derivation, createdBy: userId, createdAt });
     const content = { name, design, derivation, fingerprint: built.fingerprint };

@@ -2,6 +2,7 @@ import { nowText } from '../../context.ts';
 import type { Database } from '../../db/database.ts';
 import { type BuildPool, buildPool } from '../../jobs/build-pool.ts';
 import { countAttempt, endJob, openJobs } from '../../repositories/jobs.ts';
+import { buildRequestOf } from '../codes/stored-base.ts';
 import { finishBuildJob } from './finish-build-job.ts';
 
 const attemptsAllowed = 2;
@@ -16,7 +17,7 @@ export async function redoInterruptedJobs(db: Database, pool: BuildPool = buildP
       continue;
     }
     await countAttempt(db, job.id);
-    const { design, derivation } = job.request;
-    void finishBuildJob(db, job, pool.build({ design, derivation }));
+    const building = buildRequestOf(db, job.projectId, job.request).then((request) => pool.build(request));
+    void finishBuildJob(db, job, building);
   }
 }
