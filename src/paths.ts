@@ -25,6 +25,7 @@ export const paths = {
   newMeasurement: (id: string) => `/projects/${id}/compare/measured`,
   signOffs: (id: string) => `/projects/${id}/sign-offs`,
   signOff: (projectId: string, id: string) => `/projects/${projectId}/sign-offs/${id}`,
+  signOffReport: (projectId: string, id: string) => `/projects/${projectId}/sign-offs/${id}/report`,
   releases: (id: string) => `/projects/${id}/releases`,
   newRelease: (id: string) => `/projects/${id}/releases/new`,
   release: (projectId: string, id: string) => `/projects/${projectId}/releases/${id}`,

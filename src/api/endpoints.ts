@@ -51,7 +51,14 @@ import {
   shardReceiptSchema,
   waitQueryParams,
 } from './runs.ts';
-import { newDecisionSchema, newSignOffSchema, signOffSchema, signOffSheetSchema } from './sign-offs.ts';
+import {
+  newCommentSchema,
+  newDecisionSchema,
+  newSignOffSchema,
+  signOffCommentSchema,
+  signOffSchema,
+  signOffSheetSchema,
+} from './sign-offs.ts';
 import { newTokenSchema, tokenSchema } from './tokens.ts';
 import { uploadQueryParams } from './uploads.ts';
 
@@ -326,9 +333,19 @@ export const endpoints = {
     response: z.object({ signOff: signOffSchema }),
     success: [201],
   }),
-  getSignOff: endpoint('GET', '/sign-offs/:id', 'A sign-off with its snapshot and checks', {
+  getSignOff: endpoint('GET', '/sign-offs/:id', 'A sign-off with its snapshot, checks and comments', {
     response: signOffSheetSchema,
   }),
+  commentSignOff: endpoint(
+    'POST',
+    '/sign-offs/:id/comments',
+    'Comment on a sign-off, or on a property or point of it, for good',
+    {
+      body: newCommentSchema,
+      response: z.object({ comment: signOffCommentSchema }),
+      success: [201],
+    },
+  ),
   decideSignOff: endpoint('POST', '/sign-offs/:id/decision', 'Approve or return, with a reason', {
     body: newDecisionSchema,
     response: z.object({ signOff: signOffSchema }),

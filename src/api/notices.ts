@@ -7,6 +7,7 @@ export const noticeKinds = {
   'verdict-reached': 'A run of mine has reached its verdict',
   quarantine: 'Results of a run of mine were set aside',
   'sign-off-asked': 'A sign-off is asked for that I may decide on',
+  'sign-off-comment': 'Somebody comments on a sign-off of mine, or one that I decide or spoke on',
   'sign-off-decided': 'A sign-off that I asked for is decided',
 } as const;
 export type NoticeKind = keyof typeof noticeKinds;

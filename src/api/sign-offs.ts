@@ -49,10 +49,36 @@ export const evidenceCheckSchema = z.object({
 });
 export type EvidenceCheck = z.infer<typeof evidenceCheckSchema>;
 
+const key = z.string('a key').min(1, 'a key').max(200, 'at most 200 characters');
+const aboutSchema = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('whole') }),
+  /** A property of the snapshot, by its key. */
+  z.strictObject({ kind: z.literal('property'), key }),
+  /** A measured point of the snapshot, by its id. */
+  z.strictObject({ kind: z.literal('point'), point: key }),
+]);
+const commentText = 'a text of 1 to 2000 characters';
+export const newCommentSchema = z.strictObject({
+  about: aboutSchema.default({ kind: 'whole' }),
+  text: z.string(commentText).trim().min(1, commentText).max(2000, commentText),
+});
+export type NewComment = z.infer<typeof newCommentSchema>;
+
+export const signOffCommentSchema = z.object({
+  id: z.string(),
+  about: aboutSchema,
+  text: z.string(),
+  by: z.string(),
+  at: z.string(),
+});
+export type SignOffComment = z.infer<typeof signOffCommentSchema>;
+
 /** A sign-off with its snapshot, as text: its SHA-256 is the digest. */
 export const signOffSheetSchema = z.object({
   signOff: signOffSchema,
   snapshot: z.string(),
   verdicts: z.array(verdictSchema),
   checks: z.array(evidenceCheckSchema),
+  /** Oldest first. */
+  comments: z.array(signOffCommentSchema),
 });

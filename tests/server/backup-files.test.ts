@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -10,8 +11,9 @@ import { createBuildPool } from '@/server/jobs/build-pool.ts';
 import { createFilesPool } from '@/server/jobs/files-pool.ts';
 import { createCode } from '@/server/use-cases/codes/create-code.ts';
 import { createRelease } from '@/server/use-cases/releases/create-release.ts';
+import { getRelease, getReleaseFile } from '@/server/use-cases/releases/get-release.ts';
 import { scratchDir } from './built-server.ts';
-import { furnishedScratch } from './scratch-database.ts';
+import { furnishedScratch, openScratch } from './scratch-database.ts';
 
 const builds = createBuildPool();
 const pool = createFilesPool();
@@ -49,6 +51,28 @@ describe('a backup of a project with a release', () => {
     for (const sha256 of digests) {
       const [before, after] = [files, join(home, 'files')].map((root) => readFileSync(join(root, pathOf(sha256))));
       expect(after).toEqual(before);
+    }
+  });
+
+  it('when restored elsewhere gives its release to download, whole and as it was', async () => {
+    const file = backup();
+    await backUp(database, file, files);
+    const home = scratchDir();
+    await restore(join(home, 'blockwright.sqlite'), file, join(home, 'files'));
+    const { db } = openScratch(home);
+    try {
+      const { id } = await db('releases').first('id');
+      const { id: userId } = await db('users').where({ email: 'a@b.test' }).first('id');
+      const caller = { id: userId, email: 'a@b.test', name: 'A member', role: 'member' as const };
+      const { files: listed } = await getRelease({ db, caller }, id);
+      expect(listed.map(({ name }) => name)).toContain('H.alist');
+      for (const { name, sha256 } of listed) {
+        const { open } = await getReleaseFile({ db, caller }, diskStorage(join(home, 'files')), id, name);
+        const bytes = new Uint8Array(await new Response((await open()) ?? null).arrayBuffer());
+        expect(createHash('sha256').update(bytes).digest('hex')).toBe(sha256);
+      }
+    } finally {
+      await db.destroy();
     }
   });
 

@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import type { NewComment } from '@/api/sign-offs.ts';
 import { runShard } from '@/core/simulation/shard.ts';
 import { type Context, nowText } from '@/server/context.ts';
 import { diskStorage } from '@/server/files/disk-storage.ts';
@@ -20,6 +21,7 @@ import { putRequirements } from '@/server/use-cases/requirements/put-requirement
 import { createRun } from '@/server/use-cases/runs/create-run.ts';
 import { postShards } from '@/server/use-cases/runs/post-shards.ts';
 import { askSignOff } from '@/server/use-cases/sign-offs/ask-sign-off.ts';
+import { commentSignOff } from '@/server/use-cases/sign-offs/comment-sign-off.ts';
 import { decideSignOff } from '@/server/use-cases/sign-offs/decide-sign-off.ts';
 import { getSignOff } from '@/server/use-cases/sign-offs/get-sign-off.ts';
 import { listSignOffs } from '@/server/use-cases/sign-offs/list-sign-offs.ts';
@@ -171,6 +173,37 @@ describe('a sign-off', () => {
     await decideSignOff(reviewer, id, { outcome: 'returned', reason: 'Measure it first.' });
     const [told] = (await listNotices(engineer, {})).notices;
     expect(told).toMatchObject({ kind: 'sign-off-decided', text: 'reviewer: Measure it first.' });
+  });
+
+  it('takes comments on the whole, a property or a point, for good, which those concerned are told of', async () => {
+    await measure();
+    const { id } = await ask();
+    const { snapshot } = await getSignOff(reviewer, id);
+    const { measurements } = JSON.parse(snapshot);
+    const say = (who: Context, about: NewComment['about'], text: string) => commentSignOff(who, id, { about, text });
+    const { point } = measurements[0];
+    await say(reviewer, { kind: 'point', point }, 'Why so few frames?');
+    await say(engineer, { kind: 'property', key: 'girth' }, 'The girth is what counts.');
+    await say(engineer, { kind: 'whole' }, 'Ready.');
+    expect((await getSignOff(engineer, id)).comments).toMatchObject([
+      { about: { kind: 'point', point }, text: 'Why so few frames?', by: 'reviewer' },
+      { about: { kind: 'property', key: 'girth' }, by: 'engineer' },
+      { about: { kind: 'whole' }, text: 'Ready.', by: 'engineer' },
+    ]);
+    const told = (await listNotices(engineer, {})).notices;
+    expect(told).toMatchObject([{ kind: 'sign-off-comment', text: 'Why so few frames?' }]);
+    expect((await listNotices(reviewer, {})).notices.map(({ kind }) => kind)).toEqual([
+      'sign-off-comment',
+      'sign-off-comment',
+      'sign-off-asked',
+    ]);
+    await expect(say(engineer, { kind: 'property', key: 'beauty' }, 'x')).rejects.toMatchObject({
+      detail: { fields: { 'about.key': expect.stringContaining('girth') } },
+    });
+    await expect(say(engineer, { kind: 'point', point: id }, 'x')).rejects.toMatchObject({ code: 'invalid' });
+    await expect(say(await memberAs('viewer'), { kind: 'whole' }, 'x')).rejects.toMatchObject({ code: 'forbidden' });
+    await expect(at.db('sign_off_comments').update({ text: 'x' })).rejects.toThrow(/never changed/);
+    await expect(at.db('sign_off_comments').delete()).rejects.toThrow(/never changed/);
   });
 
   it('is decided once, with who, when and why', async () => {

@@ -5,7 +5,7 @@ import type { Database } from '../../db/database.ts';
 import { ownerOfRun } from '../../repositories/notices.ts';
 import { tell } from './tell.ts';
 
-type RunNotice = Exclude<NoticeKind, 'sign-off-asked' | 'sign-off-decided'>;
+type RunNotice = Exclude<NoticeKind, 'sign-off-asked' | 'sign-off-comment' | 'sign-off-decided'>;
 
 const what: Record<RunNotice, string> = {
   'run-finished': 'is finished',
