@@ -24,14 +24,14 @@ export function useApi<E extends Endpoint>(
 
 /** Keeps a run's cached answer up to date by the server's word; while that does not come, by asking. */
 export function useRunEvents(runId: string): void {
-  const { mutate } = useSWRConfig();
+  const { mutate, cache } = useSWRConfig();
   useEffect(() => {
     const key = addressOf(endpoints.getRun, { params: { id: runId } });
     const source = new EventSource(`/api/v1/runs/${encodeURIComponent(runId)}/events`);
     const take = ({ data }: MessageEvent<string>) => {
       const event = runEventSchema.safeParse(JSON.parse(data));
-      if (!event.success) return void mutate(key);
-      // What is not fetched yet comes whole.
+      // What is not fetched yet comes whole; merging into nothing would throw away the answer that is on its way.
+      if (!event.success || cache.get(key)?.data === undefined) return void mutate(key);
       const merge = (known: KnownRun | undefined) => known && mergeRunEvent(known, event.data);
       void mutate(key, merge, { revalidate: false });
     };
@@ -43,5 +43,5 @@ export function useRunEvents(runId: string): void {
       clearInterval(asking);
       source.close();
     };
-  }, [runId, mutate]);
+  }, [runId, mutate, cache]);
 }
