@@ -25,7 +25,7 @@ export function ColumnTable({ sheet, roles, onRole }: Props) {
                 <span className="block font-mono text-tiny">{head || `column ${at + 1}`}</span>
                 <select
                   aria-label={`${head || `column ${at + 1}`} is`}
-                  className="mt-1 min-h-8 max-w-44 border-ink border-b bg-ground font-semibold"
+                  className="mt-1 min-h-8 max-w-56 border-ink border-b bg-ground font-semibold"
                   value={roles[at]}
                   onChange={(event) => onRole(at, event.target.value as Role)}
                 >

@@ -6,7 +6,8 @@ import type { Enclosure } from '@/core/evidence.ts';
 import { levelText, parameterText, scientific } from '../charts/rate-text.ts';
 import { type MeasuredPoint, type MeasuredRow, pointText, type Snapshot, type StrataRow } from './snapshot.ts';
 
-const within = ({ lower, upper }: Enclosure) => `${scientific(lower, 2, 'down')} to ${scientific(upper, 2, 'up')}`;
+const within = ({ lower, upper }: Enclosure) =>
+  lower === 0 ? `≤ ${scientific(upper, 2, 'up')}` : `${scientific(lower, 2, 'down')} to ${scientific(upper, 2, 'up')}`;
 
 const MEASURED: Column<MeasuredRow>[] = [
   { key: 'what', header: 'channel, decoder', cell: (row) => pointText(row) },

@@ -48,7 +48,7 @@ export interface Snapshot {
     keptAt: string;
   };
   properties: Property[];
-  requirements: { statedAt: string } | null;
+  requirements: { statedAt: string; stated: { channel?: Channel; decoder?: DecoderSpec } } | null;
   measurements: MeasuredRow[];
   strata?: StrataRow[];
   measuredData?: { id: string; name: string; fileName: string; points: MeasuredPoint[]; level: number }[];
@@ -63,8 +63,12 @@ export interface MeasuredPoint {
 
 export const snapshotOf = (text: string): Snapshot => JSON.parse(text) as Snapshot;
 
+/** A channel that stands alone, without an axis that would say what its number is. */
+export const channelWords = (channel: Channel): string =>
+  `${channel.kind === 'bsc' ? 'p = ' : ''}${channelText(channel, parameterText)}`;
+
 export const pointText = ({ channel, decoder }: Pick<MeasuredRow, 'channel' | 'decoder'>): string =>
-  `${channelText(channel, parameterText)}, ${decoderText(decoder)}`;
+  `${channelWords(channel)}, ${decoderText(decoder)}`;
 
 /** Something that a comment can be about, as a choice of a form. */
 export interface CommentTarget {
