@@ -100,6 +100,46 @@ describe('an archive', () => {
     expect(() => importMatrix(bytes, 'mat')).toThrow(FormatError);
   });
 
+  test('of a one that stands twice is refused, since over GF(2) two ones cancel', () => {
+    const ints = (values: number[]) => new Uint8Array(Int32Array.from(values).buffer);
+    const vector = (values: number[]) =>
+      encodeNpy({ shape: [values.length], descr: '<i4', fortranOrder: false, data: ints(values) });
+    const named = (kind: string) => encodeNpy({ shape: [], descr: '|S3', fortranOrder: false, data: text(kind) });
+    const shared = { 'shape.npy': vector([2, 3]), 'data.npy': vector([1, 1, 1]) };
+    const archives: Record<string, Uint8Array>[] = [
+      { 'format.npy': named('csr'), 'indptr.npy': vector([0, 2, 3]), 'indices.npy': vector([1, 1, 0]) },
+      { 'format.npy': named('csc'), 'indptr.npy': vector([0, 2, 3, 3]), 'indices.npy': vector([1, 1, 0]) },
+      { 'format.npy': named('coo'), 'row.npy': vector([0, 1, 0]), 'col.npy': vector([1, 0, 1]) },
+    ];
+    for (const members of archives)
+      expect(() => importMatrix(zipSync({ ...shared, ...members }), 'npz')).toThrow(/row \d, column \d twice/);
+    const doubled = exportMatrix(small, 'mat');
+    const rows = 128 + 8 + 8 + 16 + 16 + 16;
+    // Column 2 has row 0 and column 1 row 1: both ones into one column.
+    const view = new DataView(doubled.buffer);
+    expect([0, 1, 2].map((i) => view.getInt32(rows + 4 * i, true))).toEqual([0, 1, 0]);
+    expect([0, 1, 2, 3].map((i) => view.getInt32(rows + 24 + 4 * i, true))).toEqual([0, 1, 2, 3]);
+    view.setInt32(rows + 8, 1, true);
+    view.setInt32(rows + 24 + 8, 1, true);
+    expect(() => importMatrix(doubled, 'mat')).toThrow(/row 2, column 3 twice/);
+  });
+
+  test('that is encrypted, packed otherwise, or has a member twice is refused by name', () => {
+    const changed = (at: number, value: number) => {
+      const bytes = exportMatrix(H, 'npz').slice();
+      const view = new DataView(bytes.buffer);
+      for (let i = 0; i + 46 <= bytes.length; i++)
+        if (view.getUint32(i, true) === 0x02014b50) view.setUint16(i + at, value, true);
+      return bytes;
+    };
+    expect(() => importMatrix(changed(8, 1), 'npz')).toThrow(/indices.npy stored or deflated/);
+    expect(() => importMatrix(changed(10, 12), 'npz')).toThrow(/indices.npy stored or deflated/);
+    const twice = zipSync({ 'data.npy': text('x'), 'dato.npy': text('x') }, { level: 0 });
+    for (let i = 0; i + 8 <= twice.length; i++)
+      if (twice[i] === 0x64 && twice[i + 3] === 0x6f && twice[i + 4] === 0x2e) twice[i + 3] = 0x61;
+    expect(() => importMatrix(twice, 'npz')).toThrow(/data.npy once/);
+  });
+
   test('with names that lead out of a folder has them passed over', () => {
     const bytes = zipSync({ '../../etc/passwd': text('x'), '/absolute.npy': text('x'), 'C:\\data.npy': text('x') });
     expect(() => importMatrix(bytes, 'npz')).toThrow(/member/);
@@ -135,6 +175,7 @@ describe('a text file', () => {
     ['csv', '# rows=2 columns=3 counted-from=0\nrow,column\n0,1\n0,1\n'],
     ['json', '{"rows":1,"columns":3,"onesByRow":[[1,1]]}'],
     ['alist', '2 1\n1 2\n1 1\n2\n1\n1\n1 1\n'],
+    ['qc', 'z=3 block-rows=1 block-columns=2\n0 1+1\n'],
   ])('%s with a one twice is refused, since over GF(2) two ones cancel', (format, doubled) => {
     expect(() => importMatrix(text(doubled), format)).toThrow(FormatError);
   });
@@ -143,6 +184,41 @@ describe('a text file', () => {
     const bytes = exportMatrix(H, format);
     bytes.fill(0, Math.floor(bytes.length / 2), Math.floor(bytes.length / 2) + 3);
     expect(() => importMatrix(bytes, format)).toThrow(/line \d+/);
+  });
+
+  test.each([
+    ['{"columns": 3, "onesByRow": [[0]], "columns": 4}', /line 1.*"columns" once/],
+    ['{"columns": 3,\n"onesByRow": [[0, 01]]}', /line 2, column 20.*whole numbers/],
+    ['{"columns": 3,\n"onesByRow": [[0, -1]]}', /line 2.*whole numbers/],
+    ['{"columns": 3,\n"onesByRow": [[0, 1.5]]}', /line 2.*whole numbers/],
+    ['{"columns": 3,\n"onesByRow": [[3]]}', /line 2.*columns up to 2/],
+    ['{"columns": 3, "countedFrom": 1,\n"onesByRow": [[0]]}', /line 2.*columns from 1/],
+    ['{"columns": 3, "rows": 2, "onesByRow": [[0]]}', /"rows" to be 1/],
+    ['{"columns": 3, "onesByRow": [[0]]} x', /the end of the file/],
+    ['{"columns": 3, "onesByRow": [[0]]', /"}"/],
+    ['{"note": "a\\q", "columns": 3, "onesByRow": [[0]]}', /escape/],
+    [`{"note": ${'['.repeat(600)}${']'.repeat(600)}, "columns": 3, "onesByRow": [[0]]}`, /at most 500/],
+  ])('of JSON says where it is wrong: %.60s', (wrong, message) => {
+    expect(() => importMatrix(text(wrong), 'json')).toThrow(message);
+  });
+
+  test('of JSON may have its keys in any order, with others between', () => {
+    const file =
+      '{"a": {"b": [1e3, true, null, "\\u0041\\"", {}]}, "onesByRow": [[2,1],\n[3]], "countedFrom": 1, "columns": 3}';
+    expect(importMatrix(text(file), 'json')).toEqual({
+      rows: 2,
+      cols: 3,
+      rowStart: Uint32Array.of(0, 2, 3),
+      colIndex: Uint32Array.of(0, 1, 2),
+    });
+  });
+
+  test('of C may have comments anywhere, and is refused when its tables were altered', () => {
+    const header = written('c').replace('{\n  0, 2, 3', '{ /* starts */\n  0, // first\n 2, 3 /* last */');
+    expect(importMatrix(text(header), 'c')).toEqual(small);
+    expect(() => importMatrix(text(written('c').replace('0, 2, 1', '0, 1, 1')), 'c')).toThrow(/checksum/);
+    expect(() => importMatrix(text(written('c').replace('0, 2, 1', '0, 2')), 'c')).toThrow(/3 entries in H_COL_INDEX/);
+    expect(() => importMatrix(text(`${written('c')}/* never closed`), 'c')).toThrow(/end of the comment/);
   });
 
   test('of one endless line is refused in little memory', () => {
