@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { fastShard, slicedShard } from '../../src/core/kernels/index.ts';
-import { runShard } from '../../src/core/simulation/shard.ts';
+import { fastShard } from '../../src/core/kernels/index.ts';
+import { laneShard } from '../../src/core/simulation/lane-shard.ts';
+import { drive, runShard } from '../../src/core/simulation/shard.ts';
 import { cap, regularColumns, runs } from '../core/kernels/arbitrary-runs.ts';
 import { exactDecoders } from '../core/kernels/decoder-arbitraries.ts';
 
@@ -15,8 +16,8 @@ describe('over thousands of random matrices, weights, seeds and caps a kernel gi
         fc.asyncProperty(runs(decoders, { maxFrames: 700 }), async ({ spec, index }) => {
           const reference = await runShard(spec, index, 'reference');
           expect(await fastShard(spec, index)).toEqual(reference);
-          const sliced = await slicedShard(spec, index);
-          if (sliced) expect(sliced).toEqual(reference);
+          const lanes = laneShard(spec, index);
+          if (lanes) expect(await drive(lanes, {})).toEqual(reference);
         }),
         { numRuns },
       );

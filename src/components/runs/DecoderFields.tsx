@@ -4,6 +4,7 @@ import { NumberField } from '@/components/ui/fields.tsx';
 import { decoderCard } from '@/core/decoders/catalogue.ts';
 import { Calibrate } from './Calibrate.tsx';
 import { takenOver } from './calibrated.ts';
+import { decoderCost } from './decoder-cost.ts';
 import { MinSumFields } from './MinSumFields.tsx';
 import type { FieldErrors } from './run-accepted.ts';
 import { type DecoderDraft, decoderOf, type OfferedDecoder } from './run-draft.ts';
@@ -41,6 +42,7 @@ export function DecoderFields({ kind, draft, errors, codes, trialP, areStrata, o
         <span>
           <span className="inline-block font-semibold first-letter:uppercase">{decoderName({ kind })}</span>
           <span className="block text-quiet text-tiny">{decoderCard(kind).choose}</span>
+          <span className="block text-quiet text-tiny">{decoderCost(kind, codes)}</span>
         </span>
       </label>
       {draft.isChosen && kind !== 'majority-logic' && (

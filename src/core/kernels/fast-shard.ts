@@ -7,7 +7,6 @@ import { bscWeightTable, type WeightTable } from '../simulation/weight-table.ts'
 import { begin, type CompiledKernel, type Draws, giveBack, kernelOf, readTally } from './compiled-kernel.ts';
 import { emitterFor } from './kernel-for.ts';
 import { simdAvailable } from './simd-available.ts';
-import { slicedShard } from './sliced-shard.ts';
 
 export interface FastShardOptions {
   /** Looked at before each slice of work; once aborted the shard rejects with the signal's reason. */
@@ -16,12 +15,11 @@ export interface FastShardOptions {
   pause?: () => Promise<void>;
 }
 
-/** The shard decoded by a kernel made for its matrix, or in words of 32 frames on an engine without SIMD; null where
- *  there is neither for the decoder and the channel. Equal to the reference to the last integer; the sum-product kernel
- *  within its interval.
+/** The shard decoded by a kernel made for its matrix; null where there is none for the decoder and the channel, and on an
+ *  engine without SIMD. Equal to the reference to the last integer; the sum-product kernel within its interval.
  *  @throws ParamError on settings that the matrix does not allow, as the reference does. */
 export function fastShard(spec: RunSpec, index: number, options: FastShardOptions = {}): Promise<Tally> | null {
-  if (!simdAvailable()) return slicedShard(spec, index, options);
+  if (!simdAvailable()) return null;
   const weights = patternWeights(spec);
   const bias = zeroBias(spec);
   if (weights === null) return null;

@@ -1,4 +1,3 @@
 /** The fast decoders: WebAssembly made at run time for the matrix at hand. */
 export { type FastShardOptions, fastShard } from './fast-shard.ts';
 export { simdAvailable } from './simd-available.ts';
-export { slicedShard } from './sliced-shard.ts';

@@ -19,7 +19,8 @@ export interface ShardOptions {
 
 /** Decodes the frames of shard `index`; a pure function of spec and index. `wasm` runs the fast kernel where there is
  *  one for the decoder and the engine, 32 lanes of TypeScript for simple hard decisions elsewhere, and the readable
- *  reference for the rest; `describeKernel` says which. All give the same tally to the last integer, except sum-product, which agrees within its interval.
+ *  reference for the rest; `describeKernel` says which. All give the same tally to the last integer, except sum-product,
+ *  which agrees within its interval.
  *  @throws ParamError on a spec out of range. */
 export async function runShard(
   spec: RunSpec,

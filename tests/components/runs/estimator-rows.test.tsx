@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { decoderCost } from '@/components/runs/decoder-cost.ts';
 import { estimatorRows } from '@/components/runs/estimator-rows.ts';
 import { kernelSentences } from '@/components/runs/kernel-sentences.ts';
 import { examplePoint } from '../example-points.ts';
@@ -38,5 +39,16 @@ describe('the path of the frames', () => {
     const reason = 'this engine has no WebAssembly SIMD: 32 frames at a time in TypeScript';
     const kernels = ['Gallager B', 'bit flipping'].map((name) => ({ name, reason }));
     expect(kernelSentences(kernels)).toEqual([`Gallager B, bit flipping: ${reason}.`]);
+  });
+});
+
+describe('what a decoder costs', () => {
+  it('is told a bit and iteration, in all for the codes chosen', () => {
+    const codes = [
+      { n: 273, ones: 4641 },
+      { n: 1023, ones: 32736 },
+    ];
+    expect(decoderCost('bit-flipping', [])).toContain('3 edge updates for each of the bit’s checks; one is one excl');
+    expect(decoderCost('bit-flipping', codes)).toContain('checks, so 51 or 96 for the codes chosen;');
   });
 });
