@@ -18,7 +18,7 @@ interface Props {
 export function AnswerBlock({ title, answer, elapsedMs }: Props) {
   const { lines, list, histogram, table } = answer;
   return (
-    <div className="grid min-w-0 gap-2" role="status">
+    <div className="grid grid-cols-1 gap-2" role="status">
       {table && <Compared {...table} />}
       <TitleBlock
         title={title}

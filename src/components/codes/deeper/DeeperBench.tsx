@@ -29,7 +29,7 @@ const BUDGETS = [1, 10, 60, 600];
 export default function DeeperBench({ code, outline, mayKeep, earlier, questions }: Props) {
   const [seconds, setSeconds] = useState(10);
   return (
-    <div className="grid gap-4">
+    <div className="grid grid-cols-1 gap-4">
       {questions.some((id) => questionCards[id].searches) && (
         <SelectField
           className="w-56"
@@ -69,7 +69,7 @@ function Question({ id, code, outline, mayKeep, earlier, seconds }: QuestionProp
   const told = earlier.find(({ lines }) => lines.length > 0);
   const isIdle = examination.state !== 'working' && server.kept.state !== 'working';
   return (
-    <section aria-label={title} className="grid gap-2 border-rule border-t pt-3">
+    <section aria-label={title} className="grid grid-cols-1 gap-2 border-rule border-t pt-3">
       <div className="flex flex-wrap items-center justify-between gap-3">
         <h3 className="font-semibold">{title}</h3>
         {!unfit && isIdle && (

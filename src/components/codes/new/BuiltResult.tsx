@@ -37,7 +37,9 @@ export function BuiltResult({ built, elapsedMs, kind, children }: Props) {
           <h2>
             {sizeText({ n, k, rows: H.rows, rowWeights, kind })} {designTitle}
           </h2>
-          <p className="text-quiet">Built and verified in this browser in {duration(elapsedMs)}.</p>
+          <p className="text-quiet">
+            Built and {certificate ? 'verified' : 'analysed'} in this browser in {duration(elapsedMs)}.
+          </p>
         </div>
         {children}
       </div>

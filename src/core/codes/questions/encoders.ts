@@ -2,13 +2,19 @@ import { type EncoderEntry, encoderReport, type GradedForm } from '../encode/enc
 import { type Property, spaced } from '../properties.ts';
 import type { AnswerTable, CodeQuestion } from './question.ts';
 
+/** What is counted of a form: one, and several. */
 const COUNTS = [
-  ['xor2', 'XOR gates'],
-  ['and2', 'AND gates'],
-  ['flipFlops', 'flip-flops'],
-  ['romBits', 'stored bits'],
-  ['cycles', 'clocks a word'],
+  ['xor2', 'XOR gate', 'XOR gates'],
+  ['and2', 'AND gate', 'AND gates'],
+  ['flipFlops', 'flip-flop', 'flip-flops'],
+  ['romBits', 'stored bit', 'stored bits'],
+  ['cycles', 'clock a word', 'clocks a word'],
 ] as const;
+
+const countsText = (form: GradedForm): string =>
+  COUNTS.filter(([count]) => form[count].value > 0)
+    .map(([count, one, several]) => `${spaced(form[count].value)} ${form[count].value === 1 ? one : several}`)
+    .join(', ');
 
 /** Every encoder that the code has, with what it takes in gates and memory; and of each that it has not, why. */
 export const encoders: CodeQuestion = {
@@ -31,9 +37,7 @@ function linesOf(entry: EncoderEntry): Property[] {
   return entry.forms.map((form, at) => ({
     key: `encoder-${kind}-${at + 1}`,
     label: `${title}: ${form.form}`,
-    text: COUNTS.flatMap(([count, unit]) =>
-      form[count].value > 0 ? [`${spaced(form[count].value)} ${unit}`] : [],
-    ).join(', '),
+    text: countsText(form),
     number: form.xor2.value,
     grade: form.xor2.grade,
     method: [form.xor2.method, ...(at === 0 ? [...told, checked] : [])].join('; '),
@@ -47,7 +51,7 @@ const formsOf = (entries: readonly EncoderEntry[]): { title: string; form: Grade
 function tableOf(entries: readonly EncoderEntry[]): AnswerTable {
   return {
     of: 'Gates of two inputs, flip-flops, stored bits and clocks of each form, all counted on this code',
-    columns: ['Encoder', 'Form', ...COUNTS.map(([, unit]) => unit)],
+    columns: ['Encoder', 'Form', ...COUNTS.map(([, , several]) => several)],
     rows: formsOf(entries).map(({ title, form }) => [title, form.form, ...COUNTS.map(([count]) => form[count].value)]),
   };
 }
