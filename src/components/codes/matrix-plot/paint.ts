@@ -7,8 +7,8 @@ import { type Frame, levelFor, type View, visibleCells } from './view.ts';
 /** From here on cells are drawn one by one, below it as tiles. */
 const CELLS_FROM_SCALE = 3;
 const GRID_FROM_SCALE = 9;
-/** Time for drawing missing tiles in one frame of 16.7 ms. */
-const TILE_BUDGET_MS = 6;
+/** Time for drawing missing tiles in one frame of 16.7 ms; copying them takes as much again on large screens. */
+const TILE_BUDGET_MS = 4;
 const COARSEST_FALLBACK = 5;
 
 export interface Scene {
