@@ -37,29 +37,27 @@ export function scientific(x: number, digits = 2, rounding: Rounding = 'nearest'
 /** From here up a rate reads more easily without a power of ten. */
 const PLAIN_FROM = 0.01;
 
-/** "0.989" and "7.4 × 10⁻⁴". */
-function plainOrScientific(x: number, digits: number, rounding: Rounding = 'nearest'): string {
+/** A positive rate without an interval: "0.989" and "7.4 × 10⁻⁴". */
+export function plainRate(x: number, digits = 2, rounding: Rounding = 'nearest'): string {
   const [mantissa, exponent] = decimalParts(x, digits, rounding);
   const rounded = Number(`${mantissa}e${exponent}`);
   if (rounded < PLAIN_FROM) return scientific(x, digits, rounding);
   return rounded === 1 ? '1' : rounded.toFixed(Math.max(0, digits - 1 - exponent));
 }
 
-/** A measured rate as read: "7.4 × 10⁻⁴", from a hundredth up "0.34", or "< 3.0 × 10⁻⁶" with the upper limit when no error was seen. A limit is
- *  rounded away from the claim. */
+/** A measured rate as read: "7.4 × 10⁻⁴", from a hundredth up "0.34", or "< 3.0 × 10⁻⁶" with the upper limit when no error
+ *  was seen. A limit is rounded away from the claim. */
 export const rateText = (rate: Estimate, digits = 2): string =>
-  rate.value === null
-    ? `<${THIN}${plainOrScientific(rate.upper, digits, 'up')}`
-    : plainOrScientific(rate.value, digits);
+  rate.value === null ? `<${THIN}${plainRate(rate.upper, digits, 'up')}` : plainRate(rate.value, digits);
 
 /** "(6.1 – 8.9) × 10⁻⁴"; an interval that starts at 0 is a bound: "< 3.0 × 10⁻⁶". Its ends are rounded outward. */
 export function intervalText(rate: Estimate, digits = 2): string {
-  if (rate.value === null || rate.lower <= 0) return `<${THIN}${plainOrScientific(rate.upper, digits, 'up')}`;
+  if (rate.value === null || rate.lower <= 0) return `<${THIN}${plainRate(rate.upper, digits, 'up')}`;
   const [low, lowExponent] = decimalParts(rate.lower, digits, 'down');
   const [high, highExponent] = decimalParts(rate.upper, digits, 'up');
   const isPlain = rate.upper >= PLAIN_FROM;
   if (lowExponent === highExponent && !isPlain) return `(${low} – ${high})${TIMES}${superscript(lowExponent)}`;
-  return `${plainOrScientific(rate.lower, digits, 'down')} – ${plainOrScientific(rate.upper, digits, 'up')}`;
+  return `${plainRate(rate.lower, digits, 'down')} – ${plainRate(rate.upper, digits, 'up')}`;
 }
 
 /** A channel parameter as typed: "0.012", and "3 × 10⁻⁵" when decimals would only be zeros. */

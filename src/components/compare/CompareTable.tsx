@@ -7,7 +7,7 @@ import { counted } from '@/components/ui/numbers.ts';
 import { CurveSwatch } from '../charts/CurveSwatch.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
 import { Figure } from '../charts/Figure.tsx';
-import { intervalText, parameterText, rateText, scientific } from '../charts/rate-text.ts';
+import { intervalText, parameterText, plainRate, rateText } from '../charts/rate-text.ts';
 import { comparisonGrid, type GridRow, uncodedColumns } from './comparison-grid.ts';
 
 interface Props {
@@ -38,7 +38,7 @@ export function CompareTable({ curves, kind }: Props) {
         kind: 'number',
         cell: (row) => (
           <span className="text-quiet">
-            <Figure text={scientific(uncodedRate(kind, row.p, n))} />
+            <Figure text={plainRate(uncodedRate(kind, row.p, n))} />
           </span>
         ),
       }),

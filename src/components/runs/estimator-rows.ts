@@ -3,7 +3,7 @@ import type { Estimate } from '@/client/curves/curve.ts';
 import { counted, wholeNumber } from '@/components/ui/numbers.ts';
 import { decoderCard, edgeVisitsPerBit } from '@/core/decoders/catalogue.ts';
 import type { Grade } from '@/core/evidence.ts';
-import { binomialInterval } from '@/core/statistics/binomial-interval.ts';
+import { binomialInterval, zeroErrorUpperLimit } from '@/core/statistics/binomial-interval.ts';
 import { summariseIterations } from '@/core/statistics/iteration-summary.ts';
 import { intervalText, levelText, rateText, scientific } from '../charts/rate-text.ts';
 
@@ -43,8 +43,11 @@ function ferRows({ tally, interval, level, stopped }: Point): EstimatorRow[] {
 
 function undetectedRow({ tally, level }: Point): EstimatorRow {
   const { undetected, frames } = tally;
-  const rate = { value: undetected === 0 ? null : undetected / frames, ...binomialInterval(undetected, frames, level) };
   const note = `${counted(undetected, 'frame')} decoded to another codeword; ${levelText(level)} Clopper–Pearson`;
+  const rate =
+    undetected === 0
+      ? { value: null, lower: 0, upper: zeroErrorUpperLimit(frames, level) }
+      : { value: undetected / frames, ...binomialInterval(undetected, frames, level) };
   return rateRow('Undetected', rate, note);
 }
 

@@ -98,10 +98,12 @@ const MEASURED_COLUMNS: Column<PointRow>[] = [
     key: 'iterations',
     header: 'iterations',
     kind: 'number',
-    cell: ({ measured }) => (measured ? measured.iterationsMean.toFixed(2) : '–'),
-    sortBy: ({ measured }) => measured?.iterationsMean ?? -1,
+    cell: ({ point }) => iterationsMean(point)?.toFixed(2) ?? '–',
+    sortBy: ({ point }) => iterationsMean(point) ?? -1,
   },
 ];
+
+const iterationsMean = ({ tally }: Point): number | null => (tally.frames > 0 ? tally.iterations / tally.frames : null);
 
 const DONE_WORD: Record<NonNullable<Point['stopReason']>, string> = {
   errors: 'done',

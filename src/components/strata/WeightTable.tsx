@@ -104,7 +104,7 @@ function Evidence({ row, evidence, seed }: { row: WeightRow } & Props) {
         <span className="inline-grid">
           <Grade grade="proved" method={evidence.radius?.method ?? 'no error, nothing to correct'} />
           {evidence.radius && (
-            <span className="max-w-80 text-quiet">
+            <span className="min-w-56 max-w-80 text-quiet">
               {evidence.radius.method}
               {evidence.radius.source && `; ${citationText(evidence.radius.source)}`}
             </span>

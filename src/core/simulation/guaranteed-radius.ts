@@ -5,6 +5,9 @@ import { columnDegrees, type TannerGraph, tannerGraph } from '../decoders/tanner
 import type { Citation } from '../errors.ts';
 import type { Graded } from '../evidence.ts';
 
+/** "1 check", "2 checks". */
+const checksText = (count: number): string => (count === 1 ? '1 check' : `${count} checks`);
+
 const massey: Citation = {
   authors: 'J. L. Massey',
   year: 1963,
@@ -35,8 +38,8 @@ export function guaranteedRadius(H: SparseMatrix, decoder: DecoderSpec): Graded<
     value,
     grade: 'proved',
     method: erasing
-      ? `no stopping set among so few bits: any two bits share at most ${shared} checks`
-      : `votes of one iteration part the wrong bits from the right: any two bits share at most ${shared} checks`,
+      ? `no stopping set among so few bits: any two bits share at most ${checksText(shared)}`
+      : `votes of one iteration part the wrong bits from the right: any two bits share at most ${checksText(shared)}`,
     source: erasing ? orlitsky : massey,
   };
 }

@@ -31,7 +31,7 @@ describe('curves side by side', () => {
     expect(rows[0]?.textContent).toContain('n = 1023');
     expect(rows[1]?.textContent).toContain('thin');
     expect(rows[2]?.textContent).toContain('no point');
-    expect(rows[2]?.textContent).toMatch(/9\.4.×.10−1/);
+    expect(rows[2]?.textContent).toContain('no point0.94');
   });
 
   it('are copied as the table shows them', () => {

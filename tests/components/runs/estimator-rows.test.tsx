@@ -20,6 +20,8 @@ describe('the estimates of a point', () => {
       ({ label }) => label === 'Undetected',
     );
     expect(undetected!.text).toMatch(/^</);
+    // 1 − 0.01^(1/10⁴), rounded up: one-sided at 99 %, as the frame error rate of a point without errors is.
+    expect(undetected!.text).toContain('4.61');
   });
 
   it('count the edges that a frame visits, once the edges are known', () => {
