@@ -106,12 +106,17 @@ export const endpoints = {
     query: z.object(page),
     response: z.object({ codes: z.array(codeSchema), next: z.string().optional() }),
   }),
-  createCode: endpoint('POST', '/projects/:id/codes', 'Build a design, derive its code and keep it', {
-    body: newCodeSchema,
-    response: z.union([z.object({ code: codeSchema }), z.object({ job: jobSchema })]),
-    success: [201, 202],
-    scopes: ['run'],
-  }),
+  createCode: endpoint(
+    'POST',
+    '/projects/:id/codes',
+    'Build a design or take steps from an upload, and keep the code',
+    {
+      body: newCodeSchema,
+      response: z.union([z.object({ code: codeSchema }), z.object({ job: jobSchema })]),
+      success: [201, 202],
+      scopes: ['run'],
+    },
+  ),
   uploadCode: endpoint('POST', '/projects/:id/uploads', 'Keep the code that a matrix or block-list file holds', {
     takes: 'file',
     query: uploadQueryParams,
