@@ -14,6 +14,7 @@ import { sourceOfServer } from '../use-cases/runs/source-of-caller.ts';
 import { storeShards } from '../use-cases/runs/store-shards.ts';
 import { takeLeases } from '../use-cases/runs/take-leases.ts';
 import { leaseBook } from './lease-book.ts';
+import { LookAgain } from './look-again.ts';
 import { shardTask } from './shard-tasks.ts';
 import type { SimulationPool } from './simulation-pool.ts';
 
@@ -45,8 +46,10 @@ export class ServerRuns {
   private readonly failed = new Map<string, FailedShard[]>();
   private readonly shardMs = new Map<string, number>();
   private timer: NodeJS.Timeout | undefined;
-  private looking: Promise<void> | null = null;
-  private lookAgain = false;
+  private readonly looker = new LookAgain(
+    () => this.lookOnce(),
+    (error) => console.error('Looking for shards to compute:', error),
+  );
   private flushing: Promise<void> | null = null;
   private isClosed = false;
   private readonly unwatch: () => void;
@@ -66,32 +69,15 @@ export class ServerRuns {
     this.isClosed = true;
     this.unwatch();
     clearInterval(this.interval);
-    await this.looking;
+    await this.looker.close();
     await this.flush();
     clearTimeout(this.timer);
     for (const { point, index } of this.queue.splice(0)) leaseBook.release(point.id, index);
     await this.pool.close();
   }
 
-  /** Looks for work, once more if asked meanwhile. */
   private look(): void {
-    this.lookAgain = true;
-    this.looking ??= this.lookAll().finally(() => {
-      this.looking = null;
-    });
-  }
-
-  private async lookAll(): Promise<void> {
-    while (this.lookAgain && !this.isClosed) {
-      this.lookAgain = false;
-      try {
-        await this.lookOnce();
-      } catch (error) {
-        if (this.isClosed) return;
-        // The next look comes by itself.
-        console.error('Looking for shards to compute:', error);
-      }
-    }
+    this.looker.look();
   }
 
   private async lookOnce(): Promise<void> {
