@@ -1,10 +1,12 @@
 import { type Job, Queue, QueueEvents } from 'bullmq';
+import { type FleetMachine, machineSchema } from '@/api/fleet.ts';
 import type { Run } from '@/api/runs.ts';
 import { type Database, inTransaction } from '../db/database.ts';
 import { runEvents } from '../events/run-events.ts';
 import { workEvents } from '../events/work-events.ts';
 import { packMatrix } from '../files/matrix-blob.ts';
 import { leaseBook } from '../jobs/lease-book.ts';
+import { LookAgain } from '../jobs/look-again.ts';
 import { seedOf } from '../jobs/shard-tasks.ts';
 import { Refusal } from '../refusal.ts';
 import { matrixOf } from '../repositories/codes.ts';
@@ -18,9 +20,7 @@ import { openRedis, shownUrl } from './open-redis.ts';
 import {
   heartbeatMs,
   keys,
-  type MachineWord,
   machineGoneMs,
-  machineWordSchema,
   notCounted,
   prefix,
   queueName,
@@ -55,9 +55,10 @@ export class FleetRuns {
   private readonly matricesSent = new Set<string>();
   private readonly timer: NodeJS.Timeout;
   private readonly unwatch: () => void;
-  private looking: Promise<void> | null = null;
-  private lookAgain = false;
-  private isClosed = false;
+  private readonly looker = new LookAgain(
+    () => this.lookOnce(),
+    (error) => this.redis.status === 'ready' && console.error('The fleet’s shards:', error),
+  );
   private reconciledAt = 0;
   private toldAt = Number.NEGATIVE_INFINITY;
   private shardMs = aheadMs;
@@ -84,40 +85,25 @@ export class FleetRuns {
   }
 
   /** Whether Redis answers, and who has joined. */
-  async state(): Promise<{ redis: 'up' | 'down'; machines: MachineWord[] }> {
+  async state(): Promise<{ redis: 'up' | 'down'; machines: FleetMachine[] }> {
     if (this.redis.status !== 'ready') return { redis: 'down', machines: [] };
     return { redis: 'up', machines: await this.machines() };
   }
 
   async close(): Promise<void> {
-    this.isClosed = true;
     clearInterval(this.timer);
     this.unwatch();
     this.redis.disconnect();
-    await Promise.allSettled([this.looking, this.events.close()]);
+    await Promise.allSettled([this.looker.close(), this.events.close()]);
   }
 
   private look(): void {
-    this.lookAgain = true;
-    this.looking ??= this.lookAll().finally(() => {
-      this.looking = null;
-    });
-  }
-
-  private async lookAll(): Promise<void> {
-    while (this.lookAgain && !this.isClosed) {
-      this.lookAgain = false;
-      // Commands would wait in a queue until Redis is back.
-      if (this.redis.status !== 'ready') return;
-      try {
-        await this.lookOnce();
-      } catch (error) {
-        if (!this.isClosed && this.redis.status === 'ready') console.error('The fleet’s shards:', error);
-      }
-    }
+    this.looker.look();
   }
 
   private async lookOnce(): Promise<void> {
+    // Commands would wait in a queue until Redis is back.
+    if (this.redis.status !== 'ready') return;
     await this.tell();
     await this.takeIn();
     const runs = await runsUnderWay(this.db, 'fleet');
@@ -132,10 +118,10 @@ export class FleetRuns {
     await this.redis.set(keys.release, this.release, 'PX', machineGoneMs);
   }
 
-  private async machines(): Promise<MachineWord[]> {
+  private async machines(): Promise<FleetMachine[]> {
     const found = await this.redis.keys(keys.machines);
     const words = found.length > 0 ? await this.redis.mget(found) : [];
-    const parsed = words.map((word) => machineWordSchema.safeParse(JSON.parse(word ?? 'null')));
+    const parsed = words.map((word) => machineSchema.safeParse(JSON.parse(word ?? 'null')));
     return parsed.flatMap((word) => (word.success ? [word.data] : [])).sort((a, b) => (a.name < b.name ? -1 : 1));
   }
 
@@ -205,7 +191,7 @@ export class FleetRuns {
       }
       runEvents.changed(runId);
     }
-    if (jobs.length === jobsAtOnce) this.lookAgain = true;
+    if (jobs.length === jobsAtOnce) this.look();
   }
 
   private async store(runId: string, jobs: readonly Job<ShardJob, ShardResult>[]): Promise<void> {

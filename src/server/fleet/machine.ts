@@ -1,5 +1,6 @@
 import { Recent } from '@workers/simulate/recent.ts';
 import { type Job, Worker } from 'bullmq';
+import type { FleetMachine } from '@/api/fleet.ts';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
 import { nowText } from '../context.ts';
 import { unpackMatrix } from '../files/matrix-blob.ts';
@@ -8,7 +9,6 @@ import { openRedis, shownUrl } from './open-redis.ts';
 import {
   heartbeatMs,
   keys,
-  type MachineWord,
   machineGoneMs,
   notCounted,
   otherRelease,
@@ -96,7 +96,7 @@ export class Machine {
 
   private async tell(refused?: string): Promise<void> {
     const { name, release, pool } = this.options;
-    const word: MachineWord = { name, release, threads: pool.threads, since: this.since, shards: this.shards };
+    const word: FleetMachine = { name, release, threads: pool.threads, since: this.since, shards: this.shards };
     const text = JSON.stringify({ ...word, ...(refused && { refused }) });
     await this.redis.set(keys.machine(this.id), text, 'PX', refused ? 60_000 : machineGoneMs);
   }

@@ -43,17 +43,6 @@ export const shardResultSchema = z.object({
 });
 export type ShardResult = z.infer<typeof shardResultSchema>;
 
-export const machineWordSchema = z.object({
-  name: z.string(),
-  release: z.string(),
-  threads: z.number(),
-  since: z.string(),
-  shards: z.number(),
-  /** Why it does not take part, if so. */
-  refused: z.string().optional(),
-});
-export type MachineWord = z.infer<typeof machineWordSchema>;
-
 /** Begins the message of a job that no computation failed: it is handed out again and not counted as a failure. */
 export const notCounted = 'not computed: ';
 
