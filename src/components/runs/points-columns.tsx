@@ -1,14 +1,14 @@
 import type { Point, Stopping } from '@/api/runs.ts';
 import { channelText } from '@/client/curves/channel-text.ts';
-import { type CurvePoint, crossoverOf, type curvePointOf, type Estimate, isThin } from '@/client/curves/curve.ts';
+import { type CurvePoint, crossoverOf, type curvePointOf, isThin } from '@/client/curves/curve.ts';
 import { curveKey } from '@/client/curves/group-points.ts';
 import type { Column } from '@/components/ui/DataTable.tsx';
 import { Grade } from '@/components/ui/Grade.tsx';
 import { wholeNumber } from '@/components/ui/numbers.ts';
 import { CurveSwatch } from '../charts/CurveSwatch.tsx';
 import type { ChartCurve } from '../charts/chart-curve.ts';
-import { Figure } from '../charts/Figure.tsx';
-import { intervalText, parameterText, rateText } from '../charts/rate-text.ts';
+import { RateWithLimits } from '../charts/RateWithLimits.tsx';
+import { parameterText } from '../charts/rate-text.ts';
 
 /** A point as stored, and as it stands on its curve once it has frames. */
 export interface PointRow {
@@ -83,14 +83,14 @@ const MEASURED_COLUMNS: Column<PointRow>[] = [
     key: 'fer',
     header: 'FER',
     kind: 'number',
-    cell: ({ measured }) => (measured ? <RateCell rate={measured.fer} /> : '–'),
+    cell: ({ measured }) => (measured ? <RateWithLimits rate={measured.fer} /> : '–'),
     sortBy: ({ measured }) => measured?.fer.value ?? measured?.fer.upper ?? 2,
   },
   {
     key: 'ber',
     header: 'BER',
     kind: 'number',
-    cell: ({ measured }) => (measured ? <RateCell rate={measured.ber} /> : '–'),
+    cell: ({ measured }) => (measured ? <RateWithLimits rate={measured.ber} /> : '–'),
     sortBy: ({ measured }) => measured?.ber.value ?? measured?.ber.upper ?? 2,
   },
   count('undetected', 'undetected', (point) => point.tally.undetected),
@@ -125,19 +125,6 @@ export function pointState(point: Pick<Point, 'done' | 'tally' | 'stopReason'>, 
     return DONE_WORD[point.stopReason ?? reached];
   }
   return point.tally.frames > 0 ? 'under way' : 'waiting';
-}
-
-function RateCell({ rate }: { rate: Estimate }) {
-  return (
-    <span className="inline-grid">
-      <Figure text={rateText(rate)} />
-      {rate.value !== null && (
-        <span className="text-quiet">
-          <Figure text={intervalText(rate)} />
-        </span>
-      )}
-    </span>
-  );
 }
 
 function Evidence({ measured, seed }: { measured: CurvePoint; seed: string }) {

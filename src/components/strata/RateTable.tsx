@@ -1,9 +1,9 @@
-import type { Estimate } from '@/client/curves/curve.ts';
 import { type Column, DataTable } from '@/components/ui/DataTable.tsx';
 import { Grade } from '@/components/ui/Grade.tsx';
 import { wholeNumber } from '@/components/ui/numbers.ts';
 import { Figure } from '../charts/Figure.tsx';
-import { intervalText, levelText, parameterText, rateText } from '../charts/rate-text.ts';
+import { RateWithLimits } from '../charts/RateWithLimits.tsx';
+import { levelText, parameterText } from '../charts/rate-text.ts';
 import type { RateRow } from './rate-rows.ts';
 import { shareText } from './share-text.ts';
 
@@ -17,8 +17,8 @@ interface Props {
 export function RateTable({ rows, level, target }: Props) {
   const columns: Column<RateRow>[] = [
     { key: 'p', header: 'p', kind: 'number', cell: ({ point }) => <Figure text={parameterText(point.p)} /> },
-    { key: 'fer', header: 'FER', kind: 'number', cell: ({ point }) => <Rate rate={point.fer} /> },
-    { key: 'ber', header: 'BER', kind: 'number', cell: ({ point }) => <Rate rate={point.ber} /> },
+    { key: 'fer', header: 'FER', kind: 'number', cell: ({ point }) => <RateWithLimits rate={point.fer} /> },
+    { key: 'ber', header: 'BER', kind: 'number', cell: ({ point }) => <RateWithLimits rate={point.ber} /> },
     {
       key: 'estimate',
       header: 'most failures at',
@@ -54,16 +54,3 @@ export function RateTable({ rows, level, target }: Props) {
 }
 
 const weightText = (weight: number, share: number): string => `${wholeNumber(weight)} errors, ${shareText(share)}`;
-
-function Rate({ rate }: { rate: Estimate }) {
-  return (
-    <span className="inline-grid">
-      <Figure text={rateText(rate)} />
-      {rate.value !== null && (
-        <span className="text-quiet">
-          <Figure text={intervalText(rate)} />
-        </span>
-      )}
-    </span>
-  );
-}

@@ -9,7 +9,8 @@ import { Notice } from '@/components/ui/Notice.tsx';
 import { counted, duration, wholeNumber } from '@/components/ui/numbers.ts';
 import { Progress } from '@/components/ui/Progress.tsx';
 import { Figure } from '../charts/Figure.tsx';
-import { intervalText, levelText, rateText, scientific } from '../charts/rate-text.ts';
+import { RateWithLimits } from '../charts/RateWithLimits.tsx';
+import { levelText, rateText, scientific } from '../charts/rate-text.ts';
 import { citationText } from '../codes/citation-text.ts';
 import { useEnumeration } from './use-enumeration.ts';
 import { LISTED_UP_TO, type WeightRow, weightRows } from './weight-rows.ts';
@@ -85,16 +86,7 @@ function Share({ row: { known, share, frameErrors } }: { row: WeightRow }) {
   if (known === 'proved' || (known === 'computed' && frameErrors === 0)) return '0 exactly';
   const rate = { value: share.estimate > 0 ? share.estimate : null, lower: share.lower, upper: share.upper };
   if (known === 'computed') return <Figure text={rateText(rate, 4)} />;
-  return (
-    <span className="inline-grid">
-      <Figure text={rateText(rate)} />
-      {rate.value !== null && (
-        <span className="text-quiet">
-          <Figure text={intervalText(rate)} />
-        </span>
-      )}
-    </span>
-  );
+  return <RateWithLimits rate={rate} />;
 }
 
 function Evidence({ row, evidence, seed }: { row: WeightRow } & Props) {

@@ -2,6 +2,7 @@ import { useCallback, useEffect, useRef, useState } from 'react';
 import type { Analysis } from '@/api/analyses.ts';
 import { endpoints } from '@/api/endpoints.ts';
 import { call } from '@/client/api.ts';
+import { pause } from '@/client/pause.ts';
 import type { CodeQuestionId } from '@/core/codes/questions/question-ids.ts';
 import type { Refusal } from '../refusal.ts';
 
@@ -69,14 +70,4 @@ export function useKeptAnalysis(codeId: string, question: CodeQuestionId, open: 
   }, [kept, stop]);
 
   return { kept, start, cancel };
-}
-
-function pause(waitMs: number, signal: AbortSignal): Promise<void> {
-  return new Promise((resolve, reject) => {
-    const timer = setTimeout(resolve, waitMs);
-    signal.addEventListener('abort', () => {
-      clearTimeout(timer);
-      reject(signal.reason);
-    });
-  });
 }

@@ -1,6 +1,7 @@
 import type { NewCode } from '@/api/codes.ts';
 import { endpoints } from '@/api/endpoints.ts';
 import { call } from '@/client/api.ts';
+import { pause } from '@/client/pause.ts';
 
 const POLL_MS = 700;
 
@@ -16,14 +17,4 @@ export async function keepCode(projectId: string, body: NewCode, signal: AbortSi
   }
   if (job.state === 'failed' || !job.codeId) throw new Error(job.error?.message ?? 'The server could not build it.');
   return job.codeId;
-}
-
-function pause(waitMs: number, signal: AbortSignal): Promise<void> {
-  return new Promise((resolve, reject) => {
-    const timer = setTimeout(resolve, waitMs);
-    signal.addEventListener('abort', () => {
-      clearTimeout(timer);
-      reject(signal.reason);
-    });
-  });
 }
