@@ -1,5 +1,5 @@
 import { framesToPlan, guessRate } from './planning.ts';
-import { errorTarget, type StoppingRule } from './stopping.ts';
+import type { StoppingRule } from './stopping.ts';
 
 /** A curve to be measured between two channel points. */
 export interface SweepGoal {
@@ -70,22 +70,3 @@ function betweenNeighbours(sorted: readonly SweptPoint[]): number | null {
 
 /** Four digits, so that a point can be stated again by hand. */
 const rounded = (p: number): number => Number(p.toPrecision(4));
-
-/** Frames to meet a rule at several points of one curve, by what short trials showed; where no error was seen the cap. */
-export function sweepFrames(
-  trials: readonly SweptPoint[],
-  ps: readonly number[],
-  rule: StoppingRule,
-  framesPerShard: number,
-): number[] {
-  const rates = trials.filter((trial) => trial.frameErrors > 0).map((trial) => ({ p: trial.p, fer: rateOf(trial) }));
-  return ps.map((p) => {
-    const own = trials.find((trial) => trial.p === p && trial.frameErrors >= fewErrors);
-    if (own) return framesToPlan(rateOf(own), rule, framesPerShard);
-    if (new Set(rates.map((rate) => rate.p)).size < 2) return framesToPlan(0, rule, framesPerShard);
-    const rate = guessRate(rates, p);
-    const target = errorTarget(rule);
-    // A guess beyond the trials that promises no error at all is no guess.
-    return framesToPlan(target !== null && rate * rule.maxFrames < leastExpected ? 0 : rate, rule, framesPerShard);
-  });
-}

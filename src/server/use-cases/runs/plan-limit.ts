@@ -1,5 +1,6 @@
 import type { Goal, Outcome, PointPlan, Run } from '@/api/runs.ts';
 import type { SparseMatrix } from '@/core/codes/sparse-matrix.ts';
+import { binomial } from '@/core/designs/subset-rank.ts';
 import { LimitError } from '@/core/errors.ts';
 import { enumerateStratum } from '@/core/simulation/enumerate-stratum.ts';
 import { guaranteedRadius } from '@/core/simulation/guaranteed-radius.ts';
@@ -75,7 +76,7 @@ async function enumerationOf(
   const spec = { H, channel, decoder: goal.decoder, seed: '', framesPerShard };
   try {
     const part = await enumerateStratum(spec, weight, { from: 0, to: 0, limitPatterns: mostPatterns });
-    const patterns = choose(H.cols, weight) / part.symmetryOrder;
+    const patterns = binomial(H.cols, weight) / part.symmetryOrder;
     const shards = Math.max(1, Math.min(part.branches, Math.ceil(patterns / patternsAShard)));
     if (part.branches === 0) return null;
     return { branches: part.branches, branchesPerShard: Math.ceil(part.branches / shards) };
@@ -83,12 +84,6 @@ async function enumerationOf(
     if (error instanceof LimitError) return null;
     throw error;
   }
-}
-
-function choose(n: number, w: number): number {
-  let count = 1;
-  for (let i = 0; i < w; i++) count *= (n - i) / (i + 1);
-  return count;
 }
 
 /** Judges a stage that is done and plans the next: the pilot's frames and those of earlier stages only plan, each stage
