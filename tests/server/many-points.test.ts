@@ -63,6 +63,24 @@ describe('a run of thousands of points', () => {
   });
 });
 
+it('points of a channel that is measured in decibels are thinned along them too', async () => {
+  const other = await openBench();
+  const run = await other.state({
+    points: Array.from({ length: 2500 }, (_, i) => ({
+      channel: { kind: 'awgn' as const, ebn0Db: -2 + i / 250 },
+      decoder: { kind: 'sum-product' as const },
+    })),
+  });
+  const { db } = other.context;
+  await db('points').where({ run_id: run.id }).update({ frames: 1000, bits: 21_000 });
+  await db.raw('UPDATE points SET frame_errors = max(1, 900 - position / 3) WHERE run_id = ?', [run.id]);
+  const { points } = await other.seen(run.id);
+  const levels = points.map(({ channel }) => (channel.kind === 'awgn' ? channel.ebn0Db : Number.NaN));
+  expect([Math.min(...levels), Math.max(...levels)]).toEqual([-2, 7.996]);
+  expect(points.length).toBeGreaterThan(300);
+  await other.close();
+});
+
 it('every curve keeps its marks however many curves there are', () => {
   const outlines = Array.from({ length: 3000 }, (_, i) => ({
     ...{ id: `${i}`, curve: `${i % 1500}`, x: i < 1500 ? 0.1 : 0.01, frames: 10, frameErrors: 1 },

@@ -1,3 +1,4 @@
+import type { Knex } from 'knex';
 import type { Point, PointPlan } from '@/api/runs.ts';
 import type { Channel } from '@/core/channels/channel.ts';
 import type { DecoderSpec } from '@/core/decoders/decoder-spec.ts';
@@ -92,7 +93,7 @@ export interface PointOutline {
   id: string;
   /** Points of one curve have it in common. */
   curve: string;
-  /** p, or whatever else the channel's kind is measured by; null where it has no such. */
+  /** What the channel's kind is measured by, to be read on a logarithmic axis; null where it is not one number. */
   x: number | null;
   frames: number;
   frameErrors: number;
@@ -106,8 +107,9 @@ export interface PointsWanted {
   measured?: boolean;
 }
 
-const wantedPoints = (db: Database, { projectId, runId, codeId, measured }: PointsWanted) => {
-  const query = db('points').join('runs', 'runs.id', 'points.run_id');
+/** The query, joined to the runs of its points, narrowed to those wanted. */
+const narrowed = (query: Knex.QueryBuilder, { projectId, runId, codeId, measured }: PointsWanted) => {
+  query.join('runs', 'runs.id', 'points.run_id');
   if (projectId) query.where('runs.project_id', projectId);
   if (runId) query.where('points.run_id', runId);
   if (codeId) query.where('points.code_id', codeId);
@@ -116,16 +118,16 @@ const wantedPoints = (db: Database, { projectId, runId, codeId, measured }: Poin
 };
 
 export async function pointCount(db: Database, wanted: PointsWanted): Promise<number> {
-  return Number((await wantedPoints(db, wanted).count({ points: '*' }).first())?.points ?? 0);
+  return Number((await narrowed(db('points'), wanted).count({ points: '*' }).first())?.points ?? 0);
 }
 
 export async function pointOutlines(db: Database, wanted: PointsWanted): Promise<PointOutline[]> {
-  const rows = await wantedPoints(db, wanted).select(
+  const rows = await narrowed(db('points'), wanted).select(
     'points.id',
     'points.frames',
     'points.frame_errors as frameErrors',
     db.raw("points.run_id || points.code_id || points.decoder || json_extract(channel, '$.kind') AS curve"),
-    db.raw("coalesce(json_extract(channel, '$.p'), json_extract(channel, '$.weight')) AS x"),
+    db.raw("coalesce(channel ->> '$.p', channel ->> '$.e', channel ->> '$.weight', exp(channel ->> '$.ebn0Db')) AS x"),
   );
   return rows as PointOutline[];
 }
@@ -140,20 +142,10 @@ export async function pointsWithIds(db: Database, ids: readonly string[]): Promi
   return found.sort((a, b) => (a.runId === b.runId ? a.position - b.position : a.runId < b.runId ? -1 : 1));
 }
 
-/** Points of a project that have frames, oldest run first. */
-export async function measuredPointsOf(
-  db: Database,
-  projectId: string,
-  only: { codeId?: string; runId?: string },
-): Promise<StoredPoint[]> {
-  const query = shown(db)
-    .join('runs', 'runs.id', 'points.run_id')
-    .where('runs.project_id', projectId)
-    .where('points.frames', '>', 0)
-    .orderBy([{ column: 'points.run_id' }, { column: 'points.position' }]);
-  if (only.codeId) query.where('points.code_id', only.codeId);
-  if (only.runId) query.where('points.run_id', only.runId);
-  return (await query).map(toPoint);
+/** Points in the order of their runs, oldest run first. */
+export async function pointsWanted(db: Database, wanted: PointsWanted): Promise<StoredPoint[]> {
+  const query = narrowed(shown(db), wanted);
+  return (await query.orderBy([{ column: 'points.run_id' }, { column: 'points.position' }])).map(toPoint);
 }
 
 export type PointProgress = Pick<
@@ -191,11 +183,6 @@ export async function pointById(db: Database, id: string): Promise<StoredPoint |
 /** Closes what is open of a run whose time is over. */
 export async function closeOpenPoints(db: Database, runId: string, stopReason: StopReason): Promise<void> {
   await db('points').where({ run_id: runId, done: 0 }).update({ done: 1, stop_reason: stopReason });
-}
-
-/** Opens points closed for want of time, for a run that is extended. */
-export async function reopenPoints(db: Database, runId: string): Promise<void> {
-  await db('points').where({ run_id: runId, done: 1 }).update({ done: 0, stop_reason: null });
 }
 
 export async function setRecomputed(db: Database, id: string, recomputed: number): Promise<void> {

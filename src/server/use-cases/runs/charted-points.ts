@@ -3,7 +3,6 @@ import type { Database } from '../../db/database.ts';
 import {
   type PointOutline,
   type PointsWanted,
-  pointCount,
   pointOutlines,
   pointsWithIds,
   type StoredPoint,
@@ -14,13 +13,13 @@ export const mostPointsGiven = 2000;
 /** Marks that may remain of a bucket: first, last, highest, lowest, and the two of bounds. */
 const marksABucket = 6;
 
-/** The points that a chart of so many needs: of each stretch of a curve those at its ends, the highest and the lowest,
+/** The points that a chart of `count` of them needs: of each stretch of a curve those at its ends, the highest and the lowest,
  *  and of those without errors the highest and the lowest limit. Null where there are few enough to be given whole. */
 export async function thinnedPoints(
   db: Database,
   wanted: PointsWanted,
+  count: number,
 ): Promise<{ points: StoredPoint[]; omitted: number } | null> {
-  const count = await pointCount(db, wanted);
   if (count <= mostPointsGiven) return null;
   const ids = idsToChart(await pointOutlines(db, wanted), mostPointsGiven);
   const points = await pointsWithIds(db, ids);

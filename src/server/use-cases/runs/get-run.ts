@@ -9,7 +9,7 @@ import { shownPoint } from './shown-point.ts';
 /** A run with its points' tallies and intervals; of very many points those that a chart needs. */
 export async function getRun(context: Context, runId: string): Promise<{ run: Run; points: Point[]; omitted: number }> {
   const run = await runToRead(context, runId);
-  const thinned = await thinnedPoints(context.db, { runId });
+  const thinned = await thinnedPoints(context.db, { runId }, run.pointCount);
   if (thinned) {
     return { run, points: thinned.points.map((point) => shownPoint(point, [])), omitted: thinned.omitted };
   }

@@ -1,6 +1,6 @@
 import type { Point } from '@/api/runs.ts';
 import type { Context } from '../../context.ts';
-import { measuredPointsOf } from '../../repositories/points.ts';
+import { pointCount, pointsWanted } from '../../repositories/points.ts';
 import { projectToRead } from '../rights.ts';
 import { thinnedPoints } from './charted-points.ts';
 import { shownPoint } from './shown-point.ts';
@@ -13,7 +13,9 @@ export async function projectPoints(
   only: { codeId?: string; runId?: string },
 ): Promise<{ points: Point[]; omitted: number }> {
   await projectToRead(context, projectId);
-  const thinned = await thinnedPoints(context.db, { projectId, ...only, measured: true });
-  const points = thinned?.points ?? (await measuredPointsOf(context.db, projectId, only));
+  const { db } = context;
+  const wanted = { projectId, ...only, measured: true };
+  const thinned = await thinnedPoints(db, wanted, await pointCount(db, wanted));
+  const points = thinned?.points ?? (await pointsWanted(db, wanted));
   return { points: points.map((point) => shownPoint(point, [])), omitted: thinned?.omitted ?? 0 };
 }

@@ -3,7 +3,7 @@ import type { Database } from '../../db/database.ts';
 import type { FilesPool } from '../../jobs/files-pool.ts';
 import { seedOf } from '../../jobs/shard-tasks.ts';
 import { measurementsOf } from '../../repositories/measurements.ts';
-import { measuredPointsOf } from '../../repositories/points.ts';
+import { pointsWanted } from '../../repositories/points.ts';
 import { requirementsOf } from '../../repositories/requirements.ts';
 import { runById } from '../../repositories/runs.ts';
 import { shownMeasurement } from '../measurements/shown-measurement.ts';
@@ -17,7 +17,8 @@ import { strataFacts } from './strata-facts.ts';
  *  its length and dimension. */
 export async function codeEvidence(db: Database, pool: FilesPool, projectId: string, code: Code) {
   const { requirements, updatedAt } = await requirementsOf(db, projectId);
-  const points = (await measuredPointsOf(db, projectId, { codeId: code.id })).map((point) => shownPoint(point, []));
+  const measured = await pointsWanted(db, { projectId, codeId: code.id, measured: true });
+  const points = measured.map((point) => shownPoint(point, []));
   const runs = new Map<string, Awaited<ReturnType<typeof runById>>>();
   for (const { runId } of points) if (!runs.has(runId)) runs.set(runId, await runById(db, runId));
   const strata = await strataFacts(db, pool, code, points, (id) => runs.get(id)?.name ?? id);
