@@ -30,8 +30,6 @@ export function ExtendDialog({ run: { stopping }, isBusy, failure, onClose, onEx
       ? null
       : `a whole number from ${wholeNumber(stopping.maxFrames)} to ${wholeNumber(1e12)}`,
   };
-  const isMore =
-    (stopping.frameErrors !== undefined && frameErrors > stopping.frameErrors) || maxFrames > stopping.maxFrames;
   const extension = {
     ...(stopping.frameErrors !== undefined && frameErrors > stopping.frameErrors && { frameErrors }),
     ...(maxFrames > stopping.maxFrames && { maxFrames }),
@@ -49,7 +47,7 @@ export function ExtendDialog({ run: { stopping }, isBusy, failure, onClose, onEx
           <Button
             kind="primary"
             busy={isBusy}
-            disabled={!isMore || errors.frameErrors !== null || errors.maxFrames !== null}
+            disabled={Object.keys(extension).length === 0 || errors.frameErrors !== null || errors.maxFrames !== null}
             onClick={() => onExtend(extension)}
           >
             Extend

@@ -7,7 +7,8 @@ const file = fileArgument('backup');
 await runCommand(async () => {
   const folder = filesFolder();
   const { bytes, released } = await backUp(databaseFile(), file, folder);
-  const copied = `${released} released ${released === 1 ? 'file' : 'files'} to ${filesBeside(file)}`;
-  const files = folder === undefined ? ' Released files lie in the S3 bucket and were not copied.' : ` And ${copied}.`;
-  return `Backed up ${databaseFile()} to ${file} (${bytes} bytes, checked).${folder && released === 0 ? '' : files}`;
+  const done = `Backed up ${databaseFile()} to ${file} (${bytes} bytes, checked).`;
+  if (folder === undefined) return `${done} Released files lie in the S3 bucket and were not copied.`;
+  if (released === 0) return done;
+  return `${done} And ${released} released ${released === 1 ? 'file' : 'files'} to ${filesBeside(file)}.`;
 });
